@@ -1,0 +1,170 @@
+import { z } from 'zod';
+import { longText, quantityId, recordId, shortText, yearSpan } from './primitives.ts';
+
+export const bound = z.enum(['equals', 'at most', 'at least']);
+export type Bound = z.infer<typeof bound>;
+
+/** A number as printed: the digits decide how far it may be off by rounding. */
+export const statedNumber = z.string().regex(/^[+\-−]?(\d+([.,]\d*)?|[.,]\d+)([eE][+-]?\d+)?$/, 'a plain decimal number, as printed');
+
+export const claimUnit = z.enum(['K per doubling', 'K per e-folding', '°F per doubling', 'K per decade', 'K per year', 'W/m²', '1']);
+export type ClaimUnit = z.infer<typeof claimUnit>;
+
+export const statement = z.object({
+  /** The words of the source. */
+  words: longText,
+  sourceId: recordId.nullable(),
+  /** Where in the source: slide 14; 12:27; page 3, line 8. */
+  locator: shortText,
+  quantity: quantityId,
+  value: statedNumber,
+  unit: claimUnit,
+  bound,
+  /** The definition as the source states it, or what the reviewer takes it to be, in words. */
+  definition: longText,
+  /** The kind of sensitivity that the source says, or lets its readers believe, the number is. */
+  presentedAs: quantityId.nullable(),
+  /** Goodness of fit stated beside the number, if any, as printed ("0.88", "88 %"). */
+  statedRSquared: shortText.nullable(),
+});
+export type Statement = z.infer<typeof statement>;
+
+/** A question that a careful colleague would ask about a statement, and the reviewer's answer. */
+export const statementQuestion = z.object({
+  id: z.string(),
+  question: z.string(),
+  why: z.string(),
+  options: z.array(z.string()),
+  answer: z.string().nullable(),
+});
+export type StatementQuestion = z.infer<typeof statementQuestion>;
+
+export const anchor = z.discriminatedUnion('kind', [
+  z.object({ kind: z.literal('first-year') }),
+  z.object({ kind: z.literal('mean-of-first'), years: z.int().min(1).max(100) }),
+]);
+export type Anchor = z.infer<typeof anchor>;
+
+export const slopeCovariance = z.discriminatedUnion('kind', [
+  z.object({ kind: z.literal('classical') }),
+  z.object({ kind: z.literal('newey-west'), lag: z.int().min(0).max(1000), smallSample: z.boolean() }),
+]);
+export type SlopeCovariance = z.infer<typeof slopeCovariance>;
+
+/** How many of a year's twelve months must be there for an annual mean. */
+const minMonths = z.int().min(1).max(12);
+
+export const logRegressionProcedure = z.object({
+  kind: z.literal('log-regression'),
+  temperatureSeriesId: recordId,
+  co2SeriesId: recordId,
+  minMonths,
+  /** null: all years that both series have. */
+  window: yearSpan.nullable(),
+  /** C0 and T0: the values in the first year of the window, or their means over its first years. */
+  anchor,
+  intercept: z.boolean(),
+  covariance: slopeCovariance,
+  conversion: z.enum(['per-doubling', 'per-e-folding']),
+});
+export const trendProcedure = z.object({
+  kind: z.literal('trend'),
+  seriesId: recordId,
+  minMonths,
+  window: yearSpan.nullable(),
+  covariance: slopeCovariance,
+  per: z.enum(['decade', 'year']),
+});
+export const ratioProcedure = z.object({
+  kind: z.literal('ratio'),
+  numerator: z.object({ value: statedNumber, unit: shortText }),
+  denominator: z.object({ value: statedNumber, unit: shortText }),
+});
+export const procedure = z.discriminatedUnion('kind', [logRegressionProcedure, trendProcedure, ratioProcedure]);
+export type LogRegressionProcedure = z.infer<typeof logRegressionProcedure>;
+export type TrendProcedure = z.infer<typeof trendProcedure>;
+export type RatioProcedure = z.infer<typeof ratioProcedure>;
+export type Procedure = z.infer<typeof procedure>;
+
+/** A quantity with its 5–95 % half-width; normal unless stated otherwise. */
+export const uncertainInput = z.object({
+  mean: z.number(),
+  halfWidth90: z.number().min(0),
+  source: shortText,
+});
+export type UncertainInput = z.infer<typeof uncertainInput>;
+
+/** Warming, forcing change, heat-uptake change between two periods, and the forcing of a CO2 doubling. */
+export const energyBudgetInputs = z.object({
+  warmingK: uncertainInput,
+  forcingWm2: uncertainInput,
+  uptakeWm2: uncertainInput,
+  doublingWm2: uncertainInput,
+});
+export type EnergyBudgetInputs = z.infer<typeof energyBudgetInputs>;
+
+/** What the reviewer supplies so that assumptions can be tested. */
+export const evidence = z.object({
+  /** Total effective radiative forcing, for omitted forcings. */
+  totalForcingSeriesId: recordId.nullable(),
+  co2ForcingSeriesId: recordId.nullable(),
+  energyBudget: energyBudgetInputs.nullable(),
+  /** Published value (its id) of the range the number is held against in the source; null: none named. */
+  comparedWith: z.string().nullable(),
+  /** Forcing per CO2 doubling used to turn a forcing slope into K per doubling. */
+  doublingWm2: uncertainInput.nullable(),
+});
+export type Evidence = z.infer<typeof evidence>;
+
+/** When a shift counts: shares of the stated value. */
+export const tolerance = z.object({
+  notableShare: z.number().min(0).max(1),
+  decisiveShare: z.number().min(0).max(1),
+});
+export type Tolerance = z.infer<typeof tolerance>;
+
+export const claim = z.object({
+  id: recordId,
+  title: z.string().min(1).max(200),
+  statement,
+  /** Answers to the statement's questions, by question id. */
+  answers: z.record(z.string(), z.string()),
+  /** The arithmetic shown in the source, a line each: "2.71 * ln(2) = 1.9". */
+  derivation: z.array(shortText).max(100),
+  procedure: procedure.nullable(),
+  evidence,
+  tolerance,
+  /** Random numbers of this claim's computations start from here. */
+  seed: z.int().min(0).max(4_294_967_295),
+});
+export type Claim = z.infer<typeof claim>;
+
+/** A claim as written by a person or a script: series may be named instead of numbered; the rest has defaults. */
+const seriesReference = z.union([recordId, z.string().min(1)]);
+export const claimDraft = z.object({
+  title: z.string().min(1).max(200),
+  statement: statement.partial().required({ words: true, quantity: true, value: true, unit: true }),
+  answers: claim.shape.answers.optional(),
+  derivation: claim.shape.derivation.optional(),
+  procedure: z
+    .discriminatedUnion('kind', [
+      logRegressionProcedure
+        .partial()
+        .required({ kind: true })
+        .extend({ temperatureSeriesId: seriesReference, co2SeriesId: seriesReference }),
+      trendProcedure.partial().required({ kind: true }).extend({ seriesId: seriesReference }),
+      ratioProcedure,
+    ])
+    .nullable()
+    .optional(),
+  evidence: evidence
+    .extend({
+      totalForcingSeriesId: seriesReference.nullable(),
+      co2ForcingSeriesId: seriesReference.nullable(),
+    })
+    .partial()
+    .optional(),
+  tolerance: tolerance.optional(),
+  seed: claim.shape.seed.optional(),
+});
+export type ClaimDraft = z.infer<typeof claimDraft>;

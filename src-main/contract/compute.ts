@@ -1,0 +1,92 @@
+import { z } from 'zod';
+import { anchor, evidence, procedure, slopeCovariance, statement, tolerance } from './claim.ts';
+import { year } from './primitives.ts';
+import {
+  assumptionsAnswer,
+  claimSweep,
+  derivationAnswer,
+  energyBudgetAnswer,
+  recomputation,
+  regressionAnswer,
+  windowSweep,
+} from './result.ts';
+import { seriesData } from './series.ts';
+
+const column = z.array(z.number()).min(1).max(1_000_000);
+const covariance = z.object({
+  kind: z.enum(['classical', 'hc0', 'hc1', 'hc2', 'hc3', 'newey-west']),
+  lag: z.int().min(0).optional(),
+  smallSample: z.boolean().optional(),
+});
+const normal = z.object({ mean: z.number(), sd: z.number().min(0) });
+const seed = z.int().min(0).max(4_294_967_295);
+
+export const regressionRequest = z.object({
+  x: z.union([column, z.array(column).min(1).max(100)]),
+  y: column,
+  intercept: z.boolean(),
+  weights: column.optional(),
+  covariance,
+});
+export type RegressionRequest = z.infer<typeof regressionRequest>;
+
+export const windowSweepRequest = z
+  .object({
+    years: z.array(year),
+    x: column.optional(),
+    co2Ppm: column.optional(),
+    y: column,
+    minYears: z.int().min(3),
+    intercept: z.boolean(),
+    anchor,
+    covariance: slopeCovariance.optional(),
+  })
+  .refine(({ x, co2Ppm }) => (x === undefined) !== (co2Ppm === undefined), { error: 'give either x or co2Ppm' });
+export type WindowSweepRequest = z.infer<typeof windowSweepRequest>;
+
+export const energyBudgetRequest = z.object({
+  warmingK: normal,
+  forcingWm2: normal,
+  uptakeWm2: normal,
+  doublingWm2: normal,
+  draws: z.int().min(100).max(10_000_000),
+  seed,
+  /** Correlation between the forcing change and the forcing of a doubling. */
+  correlation: z.number().min(-1).max(1).optional(),
+});
+export type EnergyBudgetRequest = z.infer<typeof energyBudgetRequest>;
+
+export const derivationRequest = z.object({ lines: z.array(z.string().max(500)).max(100) });
+
+/** Everything that a claim's own computations start from, with the values of its series in place of their numbers. */
+export const claimComputation = z.object({
+  statement,
+  procedure,
+  tolerance,
+  seed,
+  /** Series by the name of the procedure's or the evidence's field. */
+  series: z.record(
+    z.enum(['temperatureSeriesId', 'co2SeriesId', 'seriesId', 'totalForcingSeriesId', 'co2ForcingSeriesId']),
+    seriesData,
+  ),
+  evidence: evidence.omit({ totalForcingSeriesId: true, co2ForcingSeriesId: true }),
+});
+export type ClaimComputation = z.infer<typeof claimComputation>;
+
+export const claimSweepRequest = claimComputation.extend({ minYears: z.int().min(3) });
+export type ClaimSweepRequest = z.infer<typeof claimSweepRequest>;
+
+/** Every method that `footing compute` and the stored results can name. */
+export const computeMethods = {
+  regression: { input: regressionRequest, value: regressionAnswer },
+  'window-sweep': { input: windowSweepRequest, value: windowSweep },
+  'energy-budget': { input: energyBudgetRequest, value: energyBudgetAnswer },
+  derivation: { input: derivationRequest, value: derivationAnswer },
+  recomputation: { input: claimComputation, value: recomputation },
+  assumptions: { input: claimComputation, value: assumptionsAnswer },
+  'claim-sweep': { input: claimSweepRequest, value: claimSweep },
+} as const;
+export type ComputeMethod = keyof typeof computeMethods;
+export type ComputeInput<Method extends ComputeMethod> = z.infer<(typeof computeMethods)[Method]['input']>;
+export type ComputeValue<Method extends ComputeMethod> = z.infer<(typeof computeMethods)[Method]['value']>;
+

@@ -1,0 +1,261 @@
+import { z } from 'zod';
+import { caveat, interval, quantityId, recordId, sha256, timestamp, year, yearSpan } from './primitives.ts';
+import { claimUnit } from './claim.ts';
+
+const numbers = z.array(z.number());
+
+/** Answer of a least-squares fit; coefficients with the intercept first when there is one. */
+export const regressionAnswer = z.object({
+  coefficients: numbers,
+  standardErrors: numbers,
+  t: numbers,
+  p: numbers,
+  confidence95: z.array(z.tuple([z.number(), z.number()])),
+  covarianceMatrix: z.array(numbers),
+  rSquaredCentred: z.number(),
+  rSquaredUncentred: z.number(),
+  adjustedRSquared: z.number(),
+  residualStandardDeviation: z.number(),
+  degreesOfFreedom: z.int(),
+  fStatistic: z.number().nullable(),
+  fP: z.number().nullable(),
+  logLikelihood: z.number().nullable(),
+  aic: z.number().nullable(),
+  bic: z.number().nullable(),
+  durbinWatson: z.number().nullable(),
+  residuals: numbers,
+  fitted: numbers,
+  leverage: numbers,
+  cooksDistance: z.array(z.number().nullable()),
+  caveats: z.array(caveat),
+});
+export type RegressionAnswer = z.infer<typeof regressionAnswer>;
+
+/** Rows that two series share, year by year, after averaging and re-anchoring. */
+export const alignedRows = z.object({
+  years: z.array(year),
+  co2Ppm: numbers,
+  temperatureK: numbers,
+  /** ln(C/C0). */
+  logRatio: numbers,
+  /** T − T0. */
+  warmingK: numbers,
+});
+export type AlignedRows = z.infer<typeof alignedRows>;
+
+export const leftOutYear = z.object({ year, reason: z.string() });
+
+export const fitDiagnostics = z.object({
+  nObs: z.int(),
+  rSquaredCentred: z.number(),
+  rSquaredUncentred: z.number(),
+  correlation: z.number(),
+  durbinWatson: z.number(),
+  lag1Autocorrelation: z.number(),
+  effectiveSampleSize: z.number(),
+  residualStandardDeviation: z.number(),
+});
+export type FitDiagnostics = z.infer<typeof fitDiagnostics>;
+
+/** How the recomputed number relates to the stated one. */
+export const agreement = z.object({
+  /** The numbers that round to the stated digits: [low, high). */
+  statedInterval: z.object({ low: z.number(), high: z.number() }),
+  isReproduced: z.boolean(),
+  /** Recomputed minus stated, in the claim's unit. */
+  difference: z.number(),
+  sentence: z.string(),
+});
+export type Agreement = z.infer<typeof agreement>;
+
+export const slopeEstimate = z.object({
+  value: z.number(),
+  standardError: z.number(),
+  interval95: interval,
+  convention: z.string(),
+});
+
+export const recomputation = z.object({
+  quantity: quantityId,
+  unit: claimUnit,
+  value: z.number(),
+  standardError: z.number().nullable(),
+  interval95: interval.nullable(),
+  agreement,
+  /** Regression procedures only. */
+  fit: z
+    .object({
+      window: yearSpan,
+      /** Slope in its own unit (K per e-folding; K per year) under each covariance, the procedure's own first. */
+      slopes: z.array(slopeEstimate),
+      intercept: z.object({ value: z.number(), standardError: z.number() }).nullable(),
+      diagnostics: fitDiagnostics,
+      regression: regressionAnswer,
+      years: z.array(year),
+      x: numbers,
+      y: numbers,
+      xLabel: z.string(),
+      yLabel: z.string(),
+      aligned: alignedRows.nullable(),
+      leftOut: z.array(leftOutYear),
+      anchorValues: z.object({ co2Ppm: z.number(), temperatureK: z.number(), years: yearSpan }).nullable(),
+    })
+    .nullable(),
+  /** The conversion in words and figures: "2.71 K × ln 2 = 1.88 K per doubling". */
+  conversion: z.string().nullable(),
+  caveats: z.array(caveat),
+});
+export type Recomputation = z.infer<typeof recomputation>;
+
+export const assumptionId = z.enum([
+  'zero-intercept',
+  'anchor-year',
+  'window',
+  'independent-errors',
+  'r-squared',
+  'omitted-forcings',
+  'transient-as-equilibrium',
+  'like-for-like',
+]);
+export type AssumptionId = z.infer<typeof assumptionId>;
+
+export const weight = z.enum(['negligible', 'notable', 'decisive']);
+export type Weight = z.infer<typeof weight>;
+export const markValue = z.enum(['met', 'not met', 'untested']);
+export type MarkValue = z.infer<typeof markValue>;
+
+const figureRows = z.object({ columns: z.array(z.string()), rows: z.array(z.array(z.union([z.string(), z.number(), z.null()]))) });
+
+/** What a test of one assumption returns. */
+export const assumptionOutcome = z.object({
+  id: assumptionId,
+  isTestable: z.boolean(),
+  /** Why it cannot be tested, and what would make it testable. */
+  missing: z.object({ reason: z.string(), wouldNeed: z.string() }).nullable(),
+  statistic: z
+    .object({
+      /** "intercept t", "Durbin–Watson". */
+      label: z.string(),
+      value: z.number(),
+      p: z.number().nullable(),
+      interval: interval.nullable(),
+      /** Covariance, lag, degrees of freedom: everything a reader needs to get the same number. */
+      convention: z.string(),
+    })
+    .nullable(),
+  /** One line for the ledger's Test column. */
+  test: z.string(),
+  /** The number under the changed assumption. Its quantity may differ from the claim's: say which. */
+  alternative: z
+    .object({ value: z.number(), interval: interval.nullable(), quantity: quantityId, unit: claimUnit, label: z.string() })
+    .nullable(),
+  /** Alternative minus recomputed, in the claim's unit; null when there is no alternative of a comparable unit. */
+  effect: z.number().nullable(),
+  weight: weight.nullable(),
+  reading: z.string(),
+  proposal: z.object({ mark: markValue, reason: z.string() }),
+  /** Sentence for the report, in plain language, figures filled in. */
+  sentence: z.string(),
+  /** Supporting figures: a small table shown on demand. */
+  table: figureRows.nullable(),
+  caveats: z.array(caveat),
+});
+export type AssumptionOutcome = z.infer<typeof assumptionOutcome>;
+
+export const ladderRung = z.object({
+  assumptionId,
+  label: z.string(),
+  value: z.number(),
+  interval90: interval,
+  quantity: quantityId,
+  /** Value minus that of the rung before. */
+  step: z.number(),
+});
+export const ladder = z.object({
+  start: z.object({ value: z.number(), interval90: interval, quantity: quantityId }),
+  rungs: z.array(ladderRung),
+  /** Assumptions that could not become a rung, with the reason. */
+  notApplied: z.array(z.object({ assumptionId, reason: z.string() })),
+  unit: claimUnit,
+  random: z.object({ generator: z.string(), seed: z.int(), nDraws: z.int() }),
+  caveats: z.array(caveat),
+});
+export type Ladder = z.infer<typeof ladder>;
+
+export const assumptionsAnswer = z.object({ outcomes: z.array(assumptionOutcome), ladder: ladder.nullable() });
+export type AssumptionsAnswer = z.infer<typeof assumptionsAnswer>;
+
+export const sweepWindow = z.object({
+  start: year,
+  end: year,
+  n: z.int(),
+  slope: z.number(),
+  standardError: z.number(),
+});
+const quantiles = z.object({ min: z.number(), q05: z.number(), q50: z.number(), q95: z.number(), max: z.number() });
+export const windowSweep = z.object({
+  windows: z.array(sweepWindow),
+  /** Of the slopes over all windows. */
+  quantiles,
+  caveats: z.array(caveat),
+});
+export type WindowSweep = z.infer<typeof windowSweep>;
+
+export const claimSweep = windowSweep.extend({
+  /** Turns a slope into the claim's number: value = slope × factor. */
+  factor: z.number(),
+  unit: claimUnit,
+  minYears: z.int(),
+  stated: z.object({ window: yearSpan, value: z.number(), percentile: z.number() }),
+  /** Of the numbers (slope × factor). */
+  valueQuantiles: quantiles,
+  shareAtOrBelowStated: z.number(),
+});
+export type ClaimSweep = z.infer<typeof claimSweep>;
+
+export const energyBudgetAnswer = z.object({
+  effcs: z.object({ q05: z.number().nullable(), q17: z.number().nullable(), q50: z.number().nullable(), q83: z.number().nullable(), q95: z.number().nullable() }),
+  tcr: z.object({ q05: z.number().nullable(), q17: z.number().nullable(), q50: z.number().nullable(), q83: z.number().nullable(), q95: z.number().nullable() }),
+  central: z.object({ effcs: z.number().nullable(), tcr: z.number().nullable(), feedbackWm2PerK: z.number() }),
+  /** Share of draws whose denominator ΔF − ΔN is not positive; counted as unbounded above. */
+  shareUndefined: z.number(),
+  shareUndefinedTcr: z.number(),
+  random: z.object({ generator: z.string(), seed: z.int(), nDraws: z.int() }),
+  caveats: z.array(caveat),
+});
+export type EnergyBudgetAnswer = z.infer<typeof energyBudgetAnswer>;
+
+const closedInterval = z.object({ low: z.number(), high: z.number() });
+export const derivationLine = z.object({
+  line: z.string(),
+  /** Value with the inputs taken at their printed digits. */
+  value: z.number().nullable(),
+  stated: z.string().nullable(),
+  statedInterval: closedInterval.nullable(),
+  /** From the rounding intervals of the inputs. */
+  computedInterval: closedInterval.nullable(),
+  agrees: z.boolean().nullable(),
+  likelySlip: z.string().nullable(),
+  /** What cannot be read in this line, where, and what was expected. */
+  problem: z.string().nullable(),
+});
+export const derivationAnswer = z.object({ lines: z.array(derivationLine) });
+export type DerivationAnswer = z.infer<typeof derivationAnswer>;
+
+export const resultMethod = z.enum(['recomputation', 'assumptions', 'claim-sweep', 'derivation']);
+export type ResultMethod = z.infer<typeof resultMethod>;
+
+/** A stored computation: everything needed to run it again, and the digest of what came out. */
+export const result = z.object({
+  id: recordId,
+  claimId: recordId,
+  method: resultMethod,
+  /** The request as plain JSON, with series by digest. */
+  request: z.record(z.string(), z.json()),
+  requestDigest: sha256,
+  answerDigest: sha256,
+  seed: z.int().nullable(),
+  engineVersion: z.string(),
+  computedAt: timestamp,
+});
+export type Result = z.infer<typeof result>;

@@ -57,6 +57,7 @@ export const seriesData = z.object({
   unit: z.string(),
   step: timeStep,
   baseline: yearSpan.nullable(),
+  partialYears: z.array(partialYear),
   values: seriesValues,
 });
 export type SeriesData = z.infer<typeof seriesData>;

@@ -230,12 +230,16 @@ export const derivationLine = z.object({
   line: z.string(),
   /** Value with the inputs taken at their printed digits. */
   value: z.number().nullable(),
+  /** As printed beside the stated number; units are kept, not computed with. */
+  unit: z.string().nullable(),
   stated: z.string().nullable(),
   statedInterval: closedInterval.nullable(),
   /** From the rounding intervals of the inputs. */
   computedInterval: closedInterval.nullable(),
   agrees: z.boolean().nullable(),
   likelySlip: z.string().nullable(),
+  /** How the line was read where it can be read in two ways; agreement to a single digit. */
+  remark: z.string().nullable(),
   /** What cannot be read in this line, where, and what was expected. */
   problem: z.string().nullable(),
 });

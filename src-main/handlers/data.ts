@@ -1,0 +1,137 @@
+import { createHash } from 'node:crypto';
+import type { RequestInput } from '../contract/requests.ts';
+import type { Series } from '../contract/series.ts';
+import { InputError } from '../errors.ts';
+import { canonicalJson } from '../project/canonical-json.ts';
+import type { Project } from '../project/project.ts';
+import { previewDataset, readDataset } from '../readers/read-dataset.ts';
+import { readValues } from './claim-request.ts';
+import { refuseFrozen } from './claims.ts';
+import type { Handlers } from './context.ts';
+import { projectView } from './project-view.ts';
+import { seriesFigure } from './series-figure.ts';
+
+type Names = 'data.preview' | 'data.import' | 'dataset.remove' | 'series.get' | 'series.update';
+
+export const dataHandlers: Handlers<Names> = {
+  'data.preview'({ fileName, bytes, options }, { workspace }) {
+    const received = Buffer.from(bytes, 'base64');
+    const digest = createHash('sha256').update(received).digest('hex');
+    const earlier = workspace.project?.list('dataset').find((row) => row.contentDigest === digest);
+    const preview = previewDataset({ fileName, bytes: received, options });
+    return { ...preview, digest, alreadyImportedAs: earlier?.id ?? null };
+  },
+
+  'data.import'(input, { workspace, now }) {
+    const project = workspace.open();
+    const received = Buffer.from(input.bytes, 'base64');
+    const { fileName, options, choices } = input;
+    const read = readDataset({ fileName, bytes: received, options, choices });
+    refuseUndecided(input, read.badRows.length);
+    const names = new Set(project.list('series').map((series) => series.name));
+    const ids = workspace.change('import dataset', fileName, (change) => {
+      const dataset = change.add('dataset', {
+        fileName,
+        sizeBytes: received.byteLength,
+        contentDigest: change.addContent(received),
+        importedAt: now(),
+        readerId: read.readerId,
+        readerVersion: read.readerVersion,
+        options,
+        choices,
+        nRows: read.nRows,
+        leftOut: read.badRows,
+        notes: read.notes,
+        licence: input.licence ?? '',
+      });
+      const seriesIds = read.series.map(({ description, values }) => {
+        const name = freeName(description.name, names);
+        names.add(name);
+        const valuesDigest = change.addContent(Buffer.from(canonicalJson(values), 'utf8'));
+        return change.add('series', { ...description, name, datasetId: dataset.id, valuesDigest }).id;
+      });
+      return { datasetId: dataset.id, seriesIds };
+    });
+    return { project: projectView(project), ...ids };
+  },
+
+  'dataset.remove'({ datasetId }, { workspace }) {
+    const project = workspace.open();
+    const series = project.list('series').filter((row) => row.datasetId === datasetId);
+    for (const row of series) refuseInUse(project, row);
+    workspace.change('remove dataset', project.get('dataset', datasetId).fileName, (change) => {
+      for (const row of series) change.remove('series', row.id);
+      change.remove('dataset', datasetId);
+    });
+    return projectView(project);
+  },
+
+  'series.get'({ seriesId }, { workspace }) {
+    const project = workspace.open();
+    const series = project.get('series', seriesId);
+    const values = readValues(project, series.valuesDigest);
+    return { series, values, figure: seriesFigure(series, values) };
+  },
+
+  'series.update'({ seriesId, ...given }, { workspace }) {
+    const project = workspace.open();
+    const series = project.get('series', seriesId);
+    for (const claim of claimsUsing(project, seriesId)) refuseFrozen(project, claim);
+    const taken = project.list('series').some((row) => row.id !== seriesId && row.name === given.name);
+    if (taken) {
+      throw new InputError({
+        code: 'name-taken',
+        where: `Series ${seriesId}, name`,
+        expected: 'a name that no other series of this project has',
+        received: given.name ?? '',
+        hint: 'Choose another name.',
+      });
+    }
+    const changed = { ...series, ...Object.fromEntries(Object.entries(given).filter(([, value]) => value !== undefined)) };
+    workspace.change('change series', changed.name, (change) => change.put('series', changed));
+    return projectView(project);
+  },
+};
+
+function refuseUndecided({ fileName, leaveOutBadRows }: RequestInput<'data.import'>, nBadRows: number): void {
+  if (nBadRows === 0 || leaveOutBadRows) return;
+  throw new InputError({
+    code: 'bad-rows',
+    where: fileName,
+    expected: 'a decision about the rows that cannot be used',
+    received: `${nBadRows} such row(s) and no decision`,
+    hint: 'Look at them in the preview; leave them out by saying so, or mend the file.',
+  });
+}
+
+function refuseInUse(project: Project, series: Series): void {
+  const claims = claimsUsing(project, series.id);
+  if (claims.length === 0) return;
+  throw new InputError({
+    code: 'series-in-use',
+    where: `Series ${series.name}`,
+    expected: 'a series that no claim uses',
+    received: `claim ${claims.join(', ')} standing on it`,
+    hint: 'Choose other series there first.',
+  });
+}
+
+function claimsUsing(project: Project, seriesId: number): number[] {
+  return project
+    .list('claim')
+    .filter(({ procedure, evidence }) => {
+      const used: (number | null)[] = [evidence.totalForcingSeriesId, evidence.co2ForcingSeriesId];
+      if (procedure?.kind === 'log-regression') used.push(procedure.temperatureSeriesId, procedure.co2SeriesId);
+      if (procedure?.kind === 'trend') used.push(procedure.seriesId);
+      return used.includes(seriesId);
+    })
+    .map((claim) => claim.id);
+}
+
+/** Two versions of one file keep their own names: "gistemp-annual", "gistemp-annual-2". */
+function freeName(name: string, taken: ReadonlySet<string>): string {
+  if (!taken.has(name)) return name;
+  let copy = 2;
+  while (taken.has(`${name}-${copy}`)) copy += 1;
+  return `${name}-${copy}`;
+}

@@ -1,0 +1,41 @@
+import type { Claim } from '../contract/claim.ts';
+import type { AssumptionsAnswer, ClaimSweep, Recomputation } from '../contract/result.ts';
+import { formatInterval, formatNumber, formatValueWithUncertainty } from '../quantities/notation.ts';
+
+/** Figures that the words of a finding can name in braces. Each carries its unit. */
+export function fillIns(
+  { statement }: Claim,
+  recomputation: Recomputation | null,
+  assumptions: AssumptionsAnswer | null,
+  sweep: ClaimSweep | null,
+): Record<string, string> {
+  const figures: Record<string, string> = { stated: `${statement.value} ${statement.unit}` };
+  if (recomputation) {
+    const { value, standardError, interval95, unit, fit } = recomputation;
+    figures['recomputed'] = formatValueWithUncertainty(value, standardError, unit);
+    if (interval95) figures['recomputed-interval'] = formatInterval(interval95, unit);
+    if (fit) {
+      const { diagnostics, window, slopes, intercept } = fit;
+      figures['window'] = `${window.start}–${window.end}`;
+      figures['r-squared-centred'] = formatNumber(diagnostics.rSquaredCentred, 2);
+      figures['r-squared-uncentred'] = formatNumber(diagnostics.rSquaredUncentred, 2);
+      figures['durbin-watson'] = formatNumber(diagnostics.durbinWatson, 2);
+      figures['effective-years'] = formatNumber(diagnostics.effectiveSampleSize, 0);
+      if (slopes[0]) figures['slope'] = formatValueWithUncertainty(slopes[0].value, slopes[0].standardError, '');
+      if (intercept) figures['intercept'] = formatValueWithUncertainty(intercept.value, intercept.standardError, 'K');
+    }
+  }
+  for (const { id, alternative } of assumptions?.outcomes ?? []) {
+    if (!alternative) continue;
+    const range = alternative.interval ? ` (${formatInterval(alternative.interval, '')})` : '';
+    figures[id] = `${formatNumber(alternative.value, 2)} ${alternative.unit}${range}`;
+  }
+  const last = assumptions?.ladder?.rungs.at(-1);
+  if (last && assumptions?.ladder) {
+    figures['on-this-footing'] = `${formatNumber(last.value, 2)} ${assumptions.ladder.unit} (${formatInterval(last.interval90, '')})`;
+  }
+  if (sweep) {
+    figures['windows-range'] = `${formatNumber(sweep.valueQuantiles.min, 2)} to ${formatNumber(sweep.valueQuantiles.max, 2)} ${sweep.unit}`;
+  }
+  return figures;
+}

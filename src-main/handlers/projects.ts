@@ -1,0 +1,116 @@
+import { existsSync, mkdirSync, readdirSync, statSync } from 'node:fs';
+import { dirname, join, resolve } from 'node:path';
+import { InputError } from '../errors.ts';
+import { createProject, openProject } from '../project/project.ts';
+import { readProjectTitle } from '../project/read-project-title.ts';
+import { verifyProject } from '../project/verify-project.ts';
+import { engineVersion } from '../engine-version.ts';
+import type { HandlerContext, Handlers } from './context.ts';
+import { openDemo } from './open-demo.ts';
+import { projectView } from './project-view.ts';
+import { recheck } from './recheck.ts';
+
+type Names =
+  | 'projects.list'
+  | 'project.create'
+  | 'project.open'
+  | 'project.openDemo'
+  | 'project.close'
+  | 'project.view'
+  | 'project.rename'
+  | 'project.verify'
+  | 'project.recheck';
+
+export const projectHandlers: Handlers<Names> = {
+  'projects.list'({ directory }, { places }) {
+    const folder = resolve(directory ?? places.projects);
+    if (!directory) mkdirSync(folder, { recursive: true });
+    const entries = readFolder(folder).filter((entry) => !entry.name.startsWith('.'));
+    return {
+      directory: folder,
+      parent: dirname(folder) === folder ? null : dirname(folder),
+      folders: entries.filter((entry) => entry.isDirectory()).map((entry) => join(folder, entry.name)),
+      projects: entries
+        .filter((entry) => entry.isFile() && entry.name.endsWith('.footing'))
+        .map((entry) => {
+          const path = join(folder, entry.name);
+          return { path, fileName: entry.name, title: readProjectTitle(path), modifiedAt: statSync(path).mtime.toISOString() };
+        })
+        .sort((one, other) => other.modifiedAt.localeCompare(one.modifiedAt)),
+    };
+  },
+
+  'project.create'({ title, directory, path }, context) {
+    const { workspace, places } = context;
+    const signed = workspace.signed();
+    const file = path ? resolve(path) : freePath(directory ?? places.projects, title);
+    mkdirSync(dirname(file), { recursive: true });
+    workspace.replace(null);
+    workspace.replace(createProject(file, { title, isInvented: false, holder: holder(context), ...signed }));
+    return projectView(workspace.open());
+  },
+
+  'project.open'({ path, readOnly = false }, context) {
+    const { workspace } = context;
+    const file = resolve(path);
+    if (workspace.project?.path === file && workspace.project.isReadOnly === readOnly) return projectView(workspace.project);
+    if (workspace.project?.path === file) workspace.replace(null);
+    workspace.replace(openProject(file, { readOnly, holder: holder(context) }));
+    return projectView(workspace.open());
+  },
+
+  async 'project.openDemo'({ directory }, context) {
+    await openDemo(context, directory ?? context.places.projects);
+    return projectView(context.workspace.open());
+  },
+
+  'project.close'(_, { workspace }) {
+    workspace.replace(null);
+    return {};
+  },
+
+  'project.view': (_, { workspace }) => projectView(workspace.open()),
+
+  'project.rename'({ title }, { workspace }) {
+    const project = workspace.open();
+    workspace.change('rename project', title, (change) => change.put('project', { ...project.get('project', 1), title }));
+    return projectView(project);
+  },
+
+  'project.verify': (_, { workspace }) => verifyProject(workspace.open().path),
+
+  'project.recheck': ({ jobId }, context) => recheck(context, jobId),
+};
+
+/** Who a second writer is told about. */
+export function holder({ workspace, host }: HandlerContext) {
+  return { reviewer: workspace.identity.reviewer()?.name ?? 'someone', host, engineVersion };
+}
+
+function readFolder(folder: string) {
+  try {
+    return readdirSync(folder, { withFileTypes: true });
+  } catch (error) {
+    throw new InputError({
+      code: 'folder-unreadable',
+      where: folder,
+      expected: 'a folder that can be read',
+      received: error instanceof Error ? error.message : String(error),
+      hint: 'Choose another folder.',
+    });
+  }
+}
+
+/** A file name after the title that is not taken yet. */
+export function freePath(directory: string, title: string): string {
+  const stem =
+    title
+      .normalize('NFKD')
+      .toLowerCase()
+      .replace(/[^a-z0-9]+/g, '-')
+      .replace(/^-+|-+$/g, '')
+      .slice(0, 60) || 'review';
+  let path = join(resolve(directory), `${stem}.footing`);
+  for (let copy = 2; existsSync(path); copy += 1) path = join(resolve(directory), `${stem}-${copy}.footing`);
+  return path;
+}

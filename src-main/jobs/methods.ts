@@ -1,0 +1,34 @@
+import { testAssumptions } from '../assumptions/test-assumptions.ts';
+import { energyBudget } from '../climate/energy-budget.ts';
+import { recompute } from '../climate/procedures/recompute.ts';
+import type { ComputeInput, ComputeMethod, ComputeValue } from '../contract/compute.ts';
+import { claimSweep } from '../robustness/claim-sweep.ts';
+import { windowSweep } from '../robustness/window-sweep.ts';
+import { evaluateDerivation } from '../sources/derivation.ts';
+import { regression } from '../statistics/regression.ts';
+
+export type ReportProgress = (shareDone: number) => void;
+
+type Methods = {
+  [Method in ComputeMethod]: (input: ComputeInput<Method>, onProgress: ReportProgress) => ComputeValue<Method>;
+};
+
+/** The pure function behind each method: data in, data out, the same digits wherever it runs. */
+export const methods: Methods = {
+  regression: (input) => regression(input),
+  'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
+  'energy-budget': (input, onProgress) => energyBudget(input, onProgress),
+  derivation: ({ lines }) => evaluateDerivation(lines),
+  recomputation: (input) => recompute(input),
+  assumptions: (input, onProgress) => testAssumptions(input, onProgress),
+  'claim-sweep': (input, onProgress) => claimSweep(input, onProgress),
+};
+
+/** Runs a method by its name; the input has been checked against the method's schema before. */
+export function runMethod<Method extends ComputeMethod>(
+  method: Method,
+  input: ComputeInput<Method>,
+  onProgress: ReportProgress,
+): ComputeValue<Method> {
+  return methods[method](input, onProgress);
+}

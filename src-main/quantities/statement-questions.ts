@@ -56,7 +56,10 @@ const questions: Question[] = [
 ];
 
 /** The questions a careful colleague would ask about this statement, with the answers so far. */
-export function statementQuestions(statement: Claim['statement'], answers: Readonly<Record<string, string>>): StatementQuestion[] {
+export function statementQuestions(
+  statement: Claim['statement'],
+  answers: Readonly<Record<string, string>>,
+): StatementQuestion[] {
   return questions
     .filter((question) => question.applies(statement))
     .map(({ id, question, why, options }) => ({ id, question, why, options, answer: answers[id] ?? null }));

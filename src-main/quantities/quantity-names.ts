@@ -1,0 +1,58 @@
+import type { ClaimUnit } from '../contract/claim.ts';
+import type { QuantityId } from '../contract/primitives.ts';
+
+export interface QuantityName {
+  label: string;
+  /** For axes and table cells. */
+  symbol: string;
+  /** One line, for readers who do not know the term. */
+  definition: string;
+  /** Units in which a claim can state it. */
+  units: readonly ClaimUnit[];
+}
+
+const perDoubling = ['K per doubling', '°F per doubling'] as const;
+
+/** What each kind of stated number is called and what it means. */
+export const quantityNames: Readonly<Record<QuantityId, QuantityName>> = {
+  'apparent-sensitivity': {
+    label: 'apparent sensitivity',
+    symbol: 'b·ln 2',
+    definition:
+      'Slope of observed warming on the logarithm of CO2, times ln 2. It is none of ECS, effective sensitivity or TCR until it is shown what it may stand for.',
+    units: [...perDoubling, 'K per e-folding'],
+  },
+  'effective-climate-sensitivity': {
+    label: 'effective climate sensitivity',
+    symbol: 'EffCS',
+    definition:
+      'Equilibrium warming for doubled CO2 if the climate feedback found over a given period or experiment stayed as it is.',
+    units: perDoubling,
+  },
+  'equilibrium-climate-sensitivity': {
+    label: 'equilibrium climate sensitivity',
+    symbol: 'ECS',
+    definition:
+      'Change of global mean surface air temperature once the climate has settled after CO2 was doubled and held, slow ice-sheet and Earth-system feedbacks left out.',
+    units: perDoubling,
+  },
+  'transient-climate-response': {
+    label: 'transient climate response',
+    symbol: 'TCR',
+    definition:
+      'Warming at the time CO2 has doubled while it rises by 1 % a year, as a 20-year mean around year 70; the oceans are still taking up heat.',
+    units: perDoubling,
+  },
+  trend: {
+    label: 'temperature trend',
+    symbol: 'trend',
+    definition: 'Slope of a straight line through temperature against time.',
+    units: ['K per decade', 'K per year'],
+  },
+  ratio: {
+    label: 'ratio of two stated numbers',
+    symbol: 'ratio',
+    definition: 'A number obtained by dividing one stated number by another.',
+    units: ['1', 'W/m²', 'K per doubling', '°F per doubling', 'K per e-folding', 'K per decade', 'K per year'],
+  },
+};

@@ -30,7 +30,8 @@ function refuseWhatJsonCannotSay(value: unknown, place: string, above: Set<objec
   if (above.has(value)) throw notJson(place, 'an object that contains itself');
   above.add(value);
   if (Array.isArray(value)) {
-    for (let index = 0; index < value.length; index++) refuseWhatJsonCannotSay(value[index], `${place}[${index}]`, above);
+    for (let index = 0; index < value.length; index++)
+      refuseWhatJsonCannotSay(value[index], `${place}[${index}]`, above);
   } else {
     if (!isPlainObject(value)) throw notJson(place, `an instance of ${value.constructor?.name ?? 'a class'}`);
     for (const [key, member] of Object.entries(value)) {
@@ -54,7 +55,8 @@ function notJson(place: string, received: string): InputError {
   return new InputError({
     code: 'not-json',
     where: place,
-    expected: 'a value that JSON can carry: finite numbers, well-formed text, true, false, null, lists and plain objects',
+    expected:
+      'a value that JSON can carry: finite numbers, well-formed text, true, false, null, lists and plain objects',
     received,
   });
 }

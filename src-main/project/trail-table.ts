@@ -31,7 +31,9 @@ export class TrailTable {
     this.#writeHead = db.prepare<[number, string]>('INSERT OR REPLACE INTO head (id, sequence, hash) VALUES (1, ?, ?)');
     this.#readRow = db.prepare<[number], TrailRow>('SELECT sequence, entry, hash FROM trail WHERE sequence = ?');
     this.#readLast = db.prepare<[], TrailRow>('SELECT sequence, entry, hash FROM trail ORDER BY sequence DESC LIMIT 1');
-    this.#readAfter = db.prepare<[number], TrailRow>('SELECT sequence, entry, hash FROM trail WHERE sequence > ? ORDER BY sequence');
+    this.#readAfter = db.prepare<[number], TrailRow>(
+      'SELECT sequence, entry, hash FROM trail WHERE sequence > ? ORDER BY sequence',
+    );
     this.#insert = db.prepare<[number, string, string]>('INSERT INTO trail (sequence, entry, hash) VALUES (?, ?, ?)');
   }
 

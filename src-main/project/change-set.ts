@@ -1,0 +1,112 @@
+import type { RecordChange, RecordKind } from '../contract/trail.ts';
+import { InputError } from '../errors.ts';
+import { canonicalJson } from './canonical-json.ts';
+import type { ContentTable } from './content-table.ts';
+import type { RecordTables } from './record-tables.ts';
+import { type NewRecord, parseRecord, type RecordOf } from './records.ts';
+
+/** What a command may do to a project. */
+export interface Change {
+  /** Adds a record under the next free number of its kind. */
+  add<Kind extends RecordKind>(kind: Kind, record: NewRecord<Kind>): RecordOf<Kind>;
+  /** Replaces the record of the same number. */
+  put<Kind extends RecordKind>(kind: Kind, record: RecordOf<Kind>): RecordOf<Kind>;
+  remove(kind: RecordKind, id: number): void;
+  /** Keeps bytes under their digest, which is returned. */
+  addContent(bytes: Uint8Array): string;
+}
+
+interface Touched {
+  kind: RecordKind;
+  id: number;
+  before: string | null;
+  after: string | null;
+}
+
+/** Carries a command's changes out on the tables, and remembers them for its trail entry. */
+export class ChangeSet implements Change {
+  readonly #records: RecordTables;
+  readonly #contents: ContentTable;
+  readonly #touched = new Map<string, Touched>();
+  readonly #newContent: string[] = [];
+  #isOpen = true;
+
+  constructor(records: RecordTables, contents: ContentTable) {
+    this.#records = records;
+    this.#contents = contents;
+  }
+
+  add<Kind extends RecordKind>(kind: Kind, record: NewRecord<Kind>): RecordOf<Kind> {
+    const added = parseRecord(kind, { ...record, id: this.#records.nextId(kind) });
+    this.write(kind, added.id, canonicalJson(added));
+    return added;
+  }
+
+  put<Kind extends RecordKind>(kind: Kind, record: RecordOf<Kind>): RecordOf<Kind> {
+    const replacement = parseRecord(kind, record);
+    this.#requireExisting(kind, replacement.id);
+    this.write(kind, replacement.id, canonicalJson(replacement));
+    return replacement;
+  }
+
+  remove(kind: RecordKind, id: number): void {
+    this.#requireExisting(kind, id);
+    this.write(kind, id, null);
+  }
+
+  addContent(bytes: Uint8Array): string {
+    this.#requireOpen();
+    const { digest, isNew } = this.#contents.add(bytes);
+    if (isNew) this.#newContent.push(digest);
+    return digest;
+  }
+
+  /** Makes the record what `body` says; null: makes it not be there. */
+  write(kind: RecordKind, id: number, body: string | null): void {
+    this.#requireOpen();
+    const before = this.#records.read(kind, id) ?? null;
+    if (before === body) return;
+    this.#records.write(kind, id, body);
+    const key = `${kind} ${id}`;
+    const first = this.#touched.get(key);
+    this.#touched.set(key, { kind, id, before: first ? first.before : before, after: body });
+  }
+
+  /** Ends the set: the changes in order of first touch, leaving out what came back to where it was. */
+  close(): { changes: RecordChange[]; content: string[] } {
+    this.#isOpen = false;
+    const changes = [...this.#touched.values()]
+      .filter(({ before, after }) => before !== after)
+      .map(({ kind, id, before, after }) => ({ kind, id, before: parseBody(before), after: parseBody(after) }));
+    return { changes, content: this.#newContent };
+  }
+
+  #requireExisting(kind: RecordKind, id: number): void {
+    if (this.#records.read(kind, id) === undefined) throw noSuchRecord(kind, id);
+  }
+
+  #requireOpen(): void {
+    if (!this.#isOpen) {
+      throw new InputError({
+        code: 'command-over',
+        where: 'change to the project',
+        expected: 'a change made while its command runs',
+        received: 'one made after it had ended',
+        hint: 'Do slow work first, then give its outcome to a command.',
+      });
+    }
+  }
+}
+
+function parseBody(body: string | null): RecordChange['before'] {
+  return body === null ? null : (JSON.parse(body) as RecordChange['before']);
+}
+
+export function noSuchRecord(kind: RecordKind, id: number): InputError {
+  return new InputError({
+    code: 'no-such-record',
+    where: `${kind} ${id}`,
+    expected: `the number of a ${kind} in this project`,
+    received: String(id),
+  });
+}

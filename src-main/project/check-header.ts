@@ -1,0 +1,57 @@
+import { closeSync, openSync, readSync } from 'node:fs';
+import { ProjectError } from '../errors.ts';
+import { applicationId, schemaVersion } from './file-schema.ts';
+
+const magic = 'SQLite format 3\0';
+
+/**
+ * Reads the first 100 bytes of a file and refuses it unless they are those of a project file of this version:
+ * before SQLite has touched a file that may come from anywhere.
+ *
+ * @throws ProjectError not-found, not-a-project, newer-version, unknown-version
+ * Source  The SQLite database file format, §1.3 "The Database Header", sqlite.org/fileformat2.html
+ */
+export function checkHeader(path: string): void {
+  const header = readStart(path, 100);
+  const refuse = (code: string, expected: string, received: string, hint?: string): never => {
+    throw new ProjectError({ code, where: path, expected, received, ...(hint && { hint }) });
+  };
+  if (header.length < 100 || header.toString('latin1', 0, 16) !== magic) {
+    refuse('not-a-project', 'a Footing project', header.length === 0 ? 'an empty file' : 'a file of another kind');
+  }
+  const foundApplicationId = header.readUInt32BE(68);
+  if (foundApplicationId !== applicationId) {
+    refuse('not-a-project', 'a Footing project', `a database with application id ${foundApplicationId}`);
+  }
+  const version = header.readUInt32BE(60);
+  if (version > schemaVersion) {
+    const hint =
+      'It was written by a newer Footing. Open it with that one; this one would not know what it leaves out.';
+    refuse('newer-version', `a project file of version ${schemaVersion}`, `version ${version}`, hint);
+  }
+  if (version < schemaVersion)
+    refuse('unknown-version', `a project file of version ${schemaVersion}`, `version ${version}`);
+  const [writeVersion, readVersion] = [header[18], header[19]];
+  if (writeVersion !== 1 || readVersion !== 1) {
+    refuse('not-a-project', 'a project file that keeps a rollback journal', 'one with another kind of journal');
+  }
+}
+
+function readStart(path: string, nBytes: number): Buffer {
+  const buffer = Buffer.alloc(nBytes);
+  try {
+    const file = openSync(path, 'r');
+    try {
+      return buffer.subarray(0, readSync(file, buffer, 0, nBytes, 0));
+    } finally {
+      closeSync(file);
+    }
+  } catch (error) {
+    throw new ProjectError({
+      code: 'not-found',
+      where: path,
+      expected: 'a project file that can be read',
+      received: error instanceof Error ? error.message : String(error),
+    });
+  }
+}

@@ -1,0 +1,78 @@
+import { randomUUID } from 'node:crypto';
+import { existsSync, realpathSync, renameSync, rmSync } from 'node:fs';
+import { basename, dirname, join } from 'node:path';
+import Database from 'better-sqlite3';
+import { ProjectError } from '../errors.ts';
+import { applicationId, schemaSql, schemaVersion } from './file-schema.ts';
+import { openLocked } from './open-project.ts';
+import { type Doing, Project } from './project.ts';
+import { asProjectError } from './sqlite-error.ts';
+import { acquireWriterLock, type WriterLock } from './writer-lock.ts';
+
+export interface NewProject extends Doing {
+  title: string;
+  /** True for projects made of invented data. */
+  isInvented: boolean;
+}
+
+/**
+ * Creates a project file and opens it for writing. The file appears under its name only when it is complete.
+ *
+ * @throws ProjectError not-found (the folder), exists, in-use, not-writable
+ */
+export function createProject(path: string, { title, isInvented, ...doing }: NewProject): Project {
+  const realPath = join(realFolder(path), basename(path));
+  const lock = acquireWriterLock(realPath, { reviewer: doing.reviewer.name, since: doing.at });
+  const draftPath = `${realPath}.${randomUUID()}.draft`;
+  try {
+    if (existsSync(realPath)) throw exists(realPath);
+    writeDraft(draftPath, { title, isInvented, ...doing });
+    renameSync(draftPath, realPath);
+  } catch (error) {
+    rmSync(draftPath, { force: true });
+    lock.release();
+    throw asProjectError(error, realPath);
+  }
+  return openLocked(realPath, lock);
+}
+
+function writeDraft(path: string, { title, isInvented, ...doing }: NewProject): void {
+  const db = new Database(path);
+  db.pragma('synchronous = FULL');
+  db.pragma(`application_id = ${applicationId}`);
+  db.pragma(`user_version = ${schemaVersion}`);
+  db.exec(schemaSql);
+  const heldByTheDraft: WriterLock = { release: () => undefined };
+  const project = new Project(path, db, heldByTheDraft);
+  try {
+    project.command({ ...doing, action: 'create project', subject: title }, (change) =>
+      change.add('project', { title, isInvented, createdAt: doing.at }),
+    );
+  } finally {
+    project.close();
+  }
+}
+
+function realFolder(path: string): string {
+  try {
+    return realpathSync(dirname(path));
+  } catch {
+    throw new ProjectError({
+      code: 'not-found',
+      where: path,
+      expected: 'a folder that exists',
+      received: `no folder ${dirname(path)}`,
+      hint: 'Create the folder first, or choose another.',
+    });
+  }
+}
+
+function exists(path: string): ProjectError {
+  return new ProjectError({
+    code: 'exists',
+    where: path,
+    expected: 'a name that is free',
+    received: 'a file that is there already',
+    hint: 'Choose another name; Footing overwrites no project.',
+  });
+}

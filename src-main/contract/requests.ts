@@ -42,7 +42,7 @@ export const requests = {
   'project.close': { input: nothing, answer: nothing },
   'project.view': { input: nothing, answer: projectView },
   'project.rename': { input: z.object({ title: z.string().trim().min(1).max(200) }), answer: projectView },
-  'project.verify': { input: nothing, answer: verifyReport },
+  'project.verify': { input: z.object({ path: path.optional() }), answer: verifyReport },
   'project.recheck': { input: z.object({ jobId: z.string().max(64).optional() }), answer: recheckReport },
 
   'source.save': {

@@ -4,17 +4,20 @@ import { claimUnit } from './claim.ts';
 
 const numbers = z.array(z.number());
 
-/** Answer of a least-squares fit; coefficients with the intercept first when there is one. */
+/**
+ * Answer of a least-squares fit; coefficients with the intercept first when there is one. null: does not exist, as for
+ * an exact fit or a constant y; a caveat says why.
+ */
 export const regressionAnswer = z.object({
   coefficients: numbers,
   standardErrors: numbers,
-  t: numbers,
-  p: numbers,
+  t: z.array(z.number().nullable()),
+  p: z.array(z.number().nullable()),
   confidence95: z.array(z.tuple([z.number(), z.number()])),
   covarianceMatrix: z.array(numbers),
-  rSquaredCentred: z.number(),
-  rSquaredUncentred: z.number(),
-  adjustedRSquared: z.number(),
+  rSquaredCentred: z.number().nullable(),
+  rSquaredUncentred: z.number().nullable(),
+  adjustedRSquared: z.number().nullable(),
   residualStandardDeviation: z.number(),
   degreesOfFreedom: z.int(),
   fStatistic: z.number().nullable(),

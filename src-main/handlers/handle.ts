@@ -48,13 +48,16 @@ export interface CoreOptions {
   installation: string;
   /** Identity and projects of this reviewer; FOOTING_HOME or the user's own folder unless given. */
   home?: string;
+  /** Stands in while nobody has said who is reviewing: for a host that cannot ask. */
+  reviewerIfUnknown?: { name: string; role: string };
   now?: () => string;
 }
 
-export function createCore({ host, jobs, installation, home, now = () => new Date().toISOString() }: CoreOptions): Core {
+export function createCore({ host, jobs, installation, home, reviewerIfUnknown, now = () => new Date().toISOString() }: CoreOptions): Core {
   const root = home ?? process.env['FOOTING_HOME'] ?? join(homedir(), 'Footing');
   const places = { home: join(root, 'reviewer'), projects: root, demoProjects: join(installation, 'demo-projects') };
   const context: HandlerContext = { host, places, jobs, workspace: createWorkspace(identityStore(places.home), now), now };
+  if (reviewerIfUnknown) context.workspace.assumeReviewer(reviewerIfUnknown);
   // Requests that write take turns, so that what one read is still true when it writes.
   let turn: Promise<unknown> = Promise.resolve();
 

@@ -77,7 +77,7 @@ export const projectHandlers: Handlers<Names> = {
     return projectView(project);
   },
 
-  'project.verify': (_, { workspace }) => verifyProject(workspace.open().path),
+  'project.verify': ({ path }, { workspace }) => verifyProject(path ? resolve(path) : workspace.open().path),
 
   'project.recheck': ({ jobId }, context) => recheck(context, jobId),
 };

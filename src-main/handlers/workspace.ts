@@ -15,6 +15,8 @@ export interface Workspace {
   replace(project: Project | null): void;
   /** Who is reviewing; refuses when nobody has said so. */
   reviewer(): Reviewer;
+  /** Stands in, for this session only, while nobody has said who is reviewing. */
+  assumeReviewer(reviewer: { name: string; role: string }): void;
   /** Runs one command: its changes and its trail entry are stored together or not at all. */
   change<Value>(action: string, subject: string, work: (change: Change) => Value): Value;
   /** Who does what follows, when, and with which engine: what each trail entry carries. */
@@ -23,6 +25,7 @@ export interface Workspace {
 
 export function createWorkspace(identity: IdentityStore, now: () => string): Workspace {
   let project: Project | null = null;
+  let assumed: Reviewer | null = null;
   const workspace: Workspace = {
     identity,
     get project() {
@@ -43,7 +46,7 @@ export function createWorkspace(identity: IdentityStore, now: () => string): Wor
       project = next;
     },
     reviewer() {
-      const reviewer = identity.reviewer();
+      const reviewer = identity.reviewer() ?? assumed;
       if (reviewer) return reviewer;
       throw new InputError({
         code: 'no-reviewer',
@@ -52,6 +55,9 @@ export function createWorkspace(identity: IdentityStore, now: () => string): Wor
         received: 'no name yet',
         hint: 'Give your name on the start page, or with --reviewer on the command line.',
       });
+    },
+    assumeReviewer({ name, role }) {
+      assumed = { name, role, publicKey: null, fingerprint: null };
     },
     signed() {
       const { name, role } = workspace.reviewer();

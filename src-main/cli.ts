@@ -1,0 +1,18 @@
+import { userInfo } from 'node:os';
+import { join } from 'node:path';
+import { createCore } from './handlers/handle.ts';
+import { runCommand } from './hosts/command-line/run-command.ts';
+import { directRunner } from './jobs/direct-runner.ts';
+
+const core = createCore({
+  host: 'command line',
+  jobs: directRunner(),
+  installation: join(import.meta.dirname, '..', '..'),
+  reviewerIfUnknown: { name: userInfo().username, role: 'account name on this machine' },
+});
+process.exitCode = await runCommand(process.argv.slice(2), core, {
+  out: (text) => process.stdout.write(text),
+  error: (text) => process.stderr.write(text),
+  isTerminal: process.stderr.isTTY && process.stdin.isTTY,
+  environment: process.env,
+});

@@ -1,0 +1,56 @@
+import { mkdirSync, readdirSync, readFileSync } from 'node:fs';
+import { basename, join, resolve } from 'node:path';
+import { workedExample, type WorkedExample } from '../contract/worked-example.ts';
+import { createProject } from '../project/project.ts';
+import { claimHandlers } from './claims.ts';
+import type { HandlerContext } from './context.ts';
+import { dataHandlers } from './data.ts';
+import { findingHandlers } from './findings.ts';
+import { freePath, holder } from './projects.ts';
+import { runClaimMethod } from './run-claim-method.ts';
+import { sourceHandlers } from './sources.ts';
+
+/**
+ * Makes a project of the worked example, doing step by step what its reviewer did, through the same handlers and with
+ * the same trail entries as by hand. The finding is left unsigned.
+ */
+export async function openDemo(context: HandlerContext, directory: string): Promise<void> {
+  const folder = exampleFolder(context.places.demoProjects);
+  const example = workedExample.parse(JSON.parse(readFileSync(join(folder, 'claims.json'), 'utf8')));
+  const { workspace } = context;
+  if (!workspace.identity.reviewer()) workspace.assumeReviewer(example.reviewer);
+  mkdirSync(resolve(directory), { recursive: true });
+  workspace.replace(null);
+  const path = freePath(directory, example.title);
+  workspace.replace(createProject(path, { title: example.title, isInvented: true, holder: holder(context), ...workspace.signed() }));
+
+  const read = (inside: string) => ({ name: basename(inside), bytes: readFileSync(join(folder, inside)).toString('base64') });
+  for (const { path: inside, ...source } of example.sources) {
+    await sourceHandlers['source.save']({ ...source, file: inside ? read(inside) : null }, context);
+  }
+  for (const { path: inside, options, choices, licence } of example.datasets) {
+    const { name: fileName, bytes } = read(inside);
+    await dataHandlers['data.import']({ fileName, bytes, options, choices, licence, leaveOutBadRows: false }, context);
+  }
+  for (const step of example.claims) await reviewClaim(step, context);
+}
+
+async function reviewClaim({ claim, minYears, marks, notes, finding }: WorkedExample['claims'][number], context: HandlerContext) {
+  const created = await claimHandlers['claim.create'](claim, context);
+  const claimId = created.claim.id;
+  if (created.claim.derivation.length > 0) await runClaimMethod(context, claimId, 'derivation', {});
+  await runClaimMethod(context, claimId, 'recomputation', {});
+  await runClaimMethod(context, claimId, 'assumptions', {});
+  if (minYears !== null) await runClaimMethod(context, claimId, 'claim-sweep', { minYears });
+  for (const mark of marks) await claimHandlers['claim.mark']({ claimId, ...mark }, context);
+  for (const text of notes) await claimHandlers['note.add']({ claimId, text }, context);
+  await findingHandlers['finding.save']({ claimId, ...finding }, context);
+}
+
+function exampleFolder(demoProjects: string): string {
+  const [first] = readdirSync(demoProjects, { withFileTypes: true })
+    .filter((entry) => entry.isDirectory())
+    .map((entry) => entry.name)
+    .sort();
+  return join(demoProjects, first ?? '');
+}

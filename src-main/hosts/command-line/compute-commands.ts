@@ -1,0 +1,52 @@
+import type { ErrorAnswer } from '../../contract/requests.ts';
+import { badUsage, type Command } from './command.ts';
+import { schemaNames, schemaOf } from './json-schemas.ts';
+
+export const computeCommands: Command[] = [
+  {
+    name: 'compute',
+    usage: 'REQUEST.json',
+    summary: 'one stateless computation, or an array of them; - reads standard input',
+    examples: ['compute request.json', 'compute -', 'schema compute.regression'],
+    nPositionals: { min: 1, max: 1 },
+    options: {},
+    isJsonOnly: true,
+    async run({ positionals: [file = ''] }, tools) {
+      const text = file === '-' ? await tools.readStandardInput() : tools.readFile(file).toString('utf8');
+      const request = parseJson(file, text);
+      const answers = [];
+      for (const one of Array.isArray(request) ? request : [request]) answers.push(answerOf(await tools.tryAsk('compute', one)));
+      const isEveryOneDone = answers.every((answer) => answer.ok);
+      const json = Array.isArray(request) ? answers : answers[0];
+      return { json, text: '', status: isEveryOneDone ? 0 : 2 };
+    },
+  },
+  {
+    name: 'schema',
+    usage: '[NAME]',
+    summary: 'JSON Schema of every request, answer and file that Footing reads or writes',
+    examples: ['schema', 'schema claim', 'schema compute.regression', 'schema claim.recompute.answer'],
+    nPositionals: { min: 0, max: 1 },
+    options: {},
+    async run({ positionals: [name] }) {
+      if (name === undefined) return { json: schemaNames(), text: schemaNames().join('\n') };
+      const schema = schemaOf(name);
+      if (!schema) throw badUsage('NAME', 'a name that footing schema lists', name);
+      return { json: schema, text: JSON.stringify(schema, null, 2) };
+    },
+  },
+];
+
+function parseJson(file: string, text: string): unknown {
+  try {
+    return JSON.parse(text);
+  } catch (error) {
+    throw badUsage(file === '-' ? 'standard input' : file, 'JSON', error instanceof Error ? error.message : String(error));
+  }
+}
+
+function answerOf(answer: { ok: true; value: unknown } | { ok: false; error: ErrorAnswer }) {
+  if (answer.ok) return answer;
+  const { code, where, expected, received, hint } = answer.error;
+  return { ok: false as const, error: { code, where, expected, received, hint } };
+}

@@ -1,0 +1,110 @@
+import { conclusion, signatureMeaning } from '../../contract/finding.ts';
+import { badUsage, claimNumber, claimOption, type Command } from './command.ts';
+
+const formats = ['html', 'json'] as const;
+
+export const findingCommands: Command[] = [
+  {
+    name: 'finding',
+    usage: 'FILE',
+    summary: 'writes the finding on a claim; figures in braces, {recomputed}, are filled in',
+    examples: ['finding review.footing --claim 1 --conclusion "not supported" --text "The line gives {recomputed}."'],
+    nPositionals: { min: 1, max: 1 },
+    options: {
+      ...claimOption,
+      conclusion: { value: 'C', help: conclusion.options.join(' · ') },
+      text: { value: 'TEXT', help: 'the finding in words' },
+      conditions: { value: 'TEXT', help: 'conditions on which the number is supported' },
+      published: { value: 'ID', help: 'published range to quote; may be repeated', isRepeatable: true },
+    },
+    async run(args, tools) {
+      await tools.ask('project.open', { path: args.positionals[0] ?? '' });
+      const claimId = await claimNumber(args, tools);
+      const { findings } = await tools.ask('claim.view', { claimId });
+      const earlier = findings.at(-1);
+      const chosen = args.option('conclusion');
+      const parsed = conclusion.safeParse(chosen ?? earlier?.conclusion);
+      if (!parsed.success) throw badUsage('--conclusion', `one of ${conclusion.options.join(', ')}`, chosen ?? 'none');
+      const view = await tools.ask('finding.save', {
+        claimId,
+        conclusion: parsed.data,
+        text: args.option('text') ?? earlier?.text ?? '',
+        conditions: args.option('conditions') ?? earlier?.conditions ?? '',
+        publishedValueIds: args.has('published') ? args.options('published') : (earlier?.publishedValueIds ?? []),
+      });
+      const finding = view.findings.at(-1);
+      return { json: finding, text: `claim ${claimId}, revision ${finding?.revision ?? 1}: ${parsed.data}` };
+    },
+  },
+  {
+    name: 'sign',
+    usage: 'FILE',
+    summary: 'signs the finding with the reviewer’s key and freezes it; makes the key at the first need',
+    examples: ['sign review.footing --claim 1', 'sign review.footing --claim 1 --meaning counter-signature'],
+    nPositionals: { min: 1, max: 1 },
+    options: {
+      ...claimOption,
+      meaning: { value: 'M', help: signatureMeaning.options.join(', ') },
+      remark: { value: 'TEXT', help: 'a remark that is signed with it' },
+    },
+    async run(args, tools) {
+      const meaning = signatureMeaning.safeParse(args.option('meaning') ?? 'sign-off');
+      if (!meaning.success) throw badUsage('--meaning', `one of ${signatureMeaning.options.join(', ')}`, args.option('meaning') ?? '');
+      await tools.ask('project.open', { path: args.positionals[0] ?? '' });
+      const claimId = await claimNumber(args, tools);
+      const { reviewer } = await tools.ask('session.get', {});
+      const isNew = !reviewer?.publicKey;
+      const passphrase = await tools.passphrase(isNew ? 'to protect the new signing key' : 'of the signing key');
+      if (isNew) {
+        const made = await tools.ask('identity.create', { passphrase });
+        tools.tell(`Made a signing key: ${made.fingerprint ?? ''}`);
+      }
+      const view = await tools.ask('finding.sign', { claimId, passphrase, meaning: meaning.data, remark: args.option('remark') ?? '' });
+      const signature = view.signatures.at(-1);
+      const check = view.signatureChecks.at(-1);
+      return {
+        json: signature,
+        text: `${meaning.data} on claim ${claimId}, revision ${signature?.revision ?? ''}, by ${signature?.signer.name ?? ''}, key ${check?.fingerprint ?? ''}, witnessing trail ${signature?.trailSequence ?? ''} ${signature?.trailHash ?? ''}`,
+      };
+    },
+  },
+  {
+    name: 'revise',
+    usage: 'FILE',
+    summary: 'starts a new revision of a signed finding, saying what changes and why',
+    examples: ['revise review.footing --claim 1 --reason "The provider corrected 1998."'],
+    nPositionals: { min: 1, max: 1 },
+    options: { ...claimOption, reason: { value: 'TEXT', help: 'what changes and why' } },
+    async run(args, tools) {
+      await tools.ask('project.open', { path: args.positionals[0] ?? '' });
+      const claimId = await claimNumber(args, tools);
+      const reason = args.option('reason');
+      if (!reason) throw badUsage('--reason', 'what changes and why', 'nothing');
+      const view = await tools.ask('finding.revise', { claimId, reason });
+      const finding = view.findings.at(-1);
+      return { json: finding, text: `claim ${claimId}: revision ${finding?.revision ?? ''} begun` };
+    },
+  },
+  {
+    name: 'report',
+    usage: 'FILE',
+    summary: 'writes the report',
+    examples: ['report review.footing --out report', 'report review.footing --out report --format html,json'],
+    nPositionals: { min: 1, max: 1 },
+    options: {
+      out: { value: 'DIR', help: 'folder to write into' },
+      format: { value: 'LIST', help: 'html, json; html unless given. A PDF comes from printing the HTML in a browser' },
+    },
+    async run(args, tools) {
+      const directory = args.option('out');
+      if (!directory) throw badUsage('--out', 'a folder to write into', 'none');
+      const wanted = (args.option('format') ?? 'html').split(',');
+      const known = formats.filter((format) => wanted.includes(format));
+      const unknown = wanted.filter((format) => !(formats as readonly string[]).includes(format));
+      if (unknown.length > 0) throw badUsage('--format', formats.join(' or '), unknown.join(', '), 'Print the HTML report in a browser for a PDF.');
+      await tools.ask('project.open', { path: args.positionals[0] ?? '', readOnly: true });
+      const { files } = await tools.ask('report.write', { directory, formats: known });
+      return { json: files, text: files.join('\n') };
+    },
+  },
+];

@@ -1,0 +1,42 @@
+import { z } from 'zod';
+import { claimDraft } from '../../contract/claim.ts';
+import { computeMethods } from '../../contract/compute.ts';
+import { figure } from '../../contract/figure.ts';
+import { report } from '../../contract/project.ts';
+import { requests } from '../../contract/requests.ts';
+import { trailEntry } from '../../contract/trail.ts';
+import { workedExample } from '../../contract/worked-example.ts';
+
+/** Every form that Footing reads or writes, by name. */
+const schemas: Record<string, z.ZodType> = {
+  claim: claimDraft,
+  report,
+  figure,
+  'trail-entry': trailEntry,
+  'worked-example': workedExample,
+  ...Object.fromEntries(
+    Object.entries(computeMethods).flatMap(([name, { input, value }]) => [
+      [`compute.${name}`, withMethod(name, input)],
+      [`compute.${name}.value`, value],
+    ]),
+  ),
+  ...Object.fromEntries(
+    Object.entries(requests).flatMap(([name, { input, answer }]) => [
+      [name, input],
+      [`${name}.answer`, answer],
+    ]),
+  ),
+};
+
+export function schemaNames(): string[] {
+  return Object.keys(schemas).sort();
+}
+
+export function schemaOf(name: string): object | null {
+  const schema = Object.hasOwn(schemas, name) ? schemas[name] : undefined;
+  return schema ? z.toJSONSchema(schema, { io: 'input', unrepresentable: 'any' }) : null;
+}
+
+function withMethod(name: string, input: z.ZodType): z.ZodType {
+  return z.intersection(z.object({ method: z.literal(name) }), input);
+}

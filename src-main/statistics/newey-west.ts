@@ -1,0 +1,45 @@
+import { finiteNumber } from './finite-values.ts';
+import type { LeastSquaresFit } from './least-squares.ts';
+import { laggedCrossProduct, sandwich, scores } from './sandwich.ts';
+
+export interface NeweyWestOptions {
+  /** Largest lag L with a non-zero weight. 0 gives hc0. */
+  lag: number;
+  /** Multiplies the covariance by n/(n − k). */
+  smallSample: boolean;
+}
+
+/**
+ * Newey–West covariance of least-squares coefficients: errors may differ in variance and may be correlated with their
+ * neighbours up to a stated lag.
+ *
+ * Model    (X′WX)⁻¹ [Γ_0 + Σ_{j=1…L} (1 − j/(L + 1))(Γ_j + Γ_j′)] (X′WX)⁻¹, Γ_j = Σ_t s_t s_{t−j}′, s_t = w_t x_t e_t
+ * Assumes  rows in order of time, equally spaced, without gaps
+ *
+ * @returns  [k × k] row by row, in the order of the fit's columns
+ * @throws   InputError out-of-range when the lag is not a whole number from 0 to n − 1
+ *
+ * Differs  no prewhitening and no automatic lag, which R's sandwich::NeweyWest does by default: there use
+ *          lag = L, prewhite = FALSE, adjust = smallSample. Stata's newey is smallSample = true; statsmodels'
+ *          cov_type "HAC" is smallSample = false unless use_correction is set
+ * Source   Newey & West 1987, Econometrica 55, 703–708
+ * Checked  test/reference/statistics/lm-live.test.ts (B: base R, lags 0, 3 and 8, both small-sample options)
+ */
+export function neweyWest(fit: LeastSquaresFit, { lag, smallSample }: NeweyWestOptions): Float64Array {
+  finiteNumber('neweyWest', 'lag', lag, { isWhole: true, atLeast: 0, atMost: fit.nObs - 1 });
+  const k = fit.nCoefficients;
+  const rowScores = scores(fit);
+  const meat = laggedCrossProduct(rowScores, 0);
+  for (let j = 1; j <= lag; j++) {
+    const weight = 1 - j / (lag + 1);
+    const product = laggedCrossProduct(rowScores, j);
+    for (let row = 0; row < k; row++) {
+      for (let column = 0; column < k; column++) {
+        const both = product[row * k + column]! + product[column * k + row]!;
+        meat[row * k + column] = meat[row * k + column]! + weight * both;
+      }
+    }
+  }
+  const factor = smallSample ? fit.nObs / (fit.nObs - k) : 1;
+  return sandwich(fit.unscaledCovariance, meat).map((value) => value * factor);
+}

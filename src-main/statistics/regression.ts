@@ -1,0 +1,156 @@
+import tQuantile from '@stdlib/stats-base-dists-t-quantile';
+import type { RegressionRequest } from '../contract/compute.ts';
+import type { RegressionAnswer } from '../contract/result.ts';
+import { InputError } from '../errors.ts';
+import { designColumns } from './design-columns.ts';
+import { durbinWatson } from './durbin-watson.ts';
+import { heteroskedasticCovariance } from './heteroskedastic-covariance.ts';
+import { leastSquares, type LeastSquaresFit } from './least-squares.ts';
+import { neweyWest } from './newey-west.ts';
+import { regressionCaveats } from './regression-caveats.ts';
+import { sum, sumOfProducts } from './summation.ts';
+import { twoSidedP } from './two-sided-p.ts';
+import { upperTailF } from './upper-tail-f.ts';
+
+/** Residuals below this share of y's size are rounding: nothing may be inferred from them. */
+const EXACT_FIT_SHARE = 8 * 2 ** -52;
+
+/**
+ * Linear regression: the line (or plane) closest to y in squared distance, with its uncertainty and diagnostics.
+ *
+ * Model    y = Xb + e; the first column of X is 1 when there is an intercept; var(e_i) = σ²/w_i with weights w
+ * Assumes  rows in order of time for newey-west and Durbin–Watson; nothing else is used of the order
+ *
+ * @param x        [nObs] or nPredictors × [nObs], finite, any unit
+ * @param y        [nObs] finite
+ * @param weights  [nObs] above 0; inverse error variances up to a common factor
+ * @param covariance  of the coefficients; lag is required for newey-west; smallSample (false unless given) multiplies
+ *                 the newey-west covariance by n/(n − k)
+ * @returns  arrays in the order intercept, predictors. With k coefficients:
+ *           t distribution with n − k degrees of freedom for p and the 95 % intervals, whatever the covariance;
+ *           R² centred 1 − RSS/Σw(y − ȳ)² and uncentred 1 − RSS/Σwy², both always; adjusted R² is 1 − (1 − R²)(n − 1)/(n − k)
+ *           of the centred R² with an intercept, 1 − (1 − R²)n/(n − k) of the uncentred one without;
+ *           F from sums of squares under classical assumptions, whatever the covariance: against the mean alone with an
+ *           intercept, against zero without; log-likelihood of normal errors at σ² = RSS/n;
+ *           AIC = −2 logL + 2k, BIC = −2 logL + k log n; Durbin–Watson of √w·e; Cook's distance with classical σ².
+ *           null stands for what does not exist (exact fit, constant y, a row with leverage 1), with a caveat
+ * @throws   InputError wrong-length, not-finite, too-few-observations, lag-missing, out-of-range;
+ *           NumericError rank-deficient, ill-conditioned, leverage-of-one
+ *
+ * Differs  R's AIC and BIC count σ as a coefficient: larger by 2 and by log n. Without an intercept, R's and
+ *          statsmodels' "R²" is the uncentred one. statsmodels' F under a robust covariance is a Wald test
+ * Source   Draper & Smith 1998, Applied Regression Analysis; Kvålseth 1985, Am. Stat. 39, 279–285 (both R²);
+ *          Cook 1977, Technometrics 19, 15–18
+ * Checked  test/reference/statistics/nist-regression.test.ts (A: certified values), lm-live.test.ts (B: R)
+ */
+export function regression({ x, y, intercept, weights, covariance }: RegressionRequest): RegressionAnswer {
+  const fit = leastSquares({
+    columns: designColumns('regression', x, y.length, intercept),
+    y,
+    weights,
+    caller: 'regression',
+  });
+  const { nObs, nCoefficients, residualSumOfSquares } = fit;
+  const degreesOfFreedom = nObs - nCoefficients;
+  if (degreesOfFreedom < 1) {
+    throw new InputError({
+      code: 'too-few-observations',
+      where: 'regression',
+      expected: `more than ${nCoefficients} rows for ${nCoefficients} coefficients`,
+      received: `${nObs}`,
+      hint: 'Take a longer window or fewer predictors.',
+    });
+  }
+
+  const squares = sumsOfSquares(fit);
+  const isExact = residualSumOfSquares <= EXACT_FIT_SHARE ** 2 * squares.aboutZero;
+  const isConstant = squares.aboutMean <= EXACT_FIT_SHARE ** 2 * squares.aboutZero;
+  const covarianceMatrix = coefficientCovariance(fit, covariance, residualSumOfSquares / degreesOfFreedom);
+  const coefficients = [...fit.coefficients];
+  const standardErrors = coefficients.map((_, j) => Math.sqrt(covarianceMatrix[j]![j]!));
+  const t = coefficients.map((value, j) => (isExact || standardErrors[j] === 0 ? null : value / standardErrors[j]!));
+  const halfWidth = tQuantile(0.975, degreesOfFreedom);
+
+  const rSquaredCentred = isConstant ? null : 1 - residualSumOfSquares / squares.aboutMean;
+  const rSquaredUncentred = squares.aboutZero === 0 ? null : 1 - residualSumOfSquares / squares.aboutZero;
+  const rSquared = intercept ? rSquaredCentred : rSquaredUncentred;
+  const totalDegrees = intercept ? nObs - 1 : nObs;
+
+  const nTested = intercept ? nCoefficients - 1 : nCoefficients;
+  const explained = (intercept ? squares.aboutMean : squares.aboutZero) - residualSumOfSquares;
+  const fStatistic = isExact ? null : Math.max(0, explained) / nTested / (residualSumOfSquares / degreesOfFreedom);
+  const logLikelihood = isExact ? null : normalLogLikelihood(fit);
+
+  return {
+    coefficients,
+    standardErrors,
+    t,
+    p: t.map((value) => (value === null ? null : twoSidedP(value, degreesOfFreedom))),
+    confidence95: coefficients.map((value, j) => [
+      value - halfWidth * standardErrors[j]!,
+      value + halfWidth * standardErrors[j]!,
+    ]),
+    covarianceMatrix,
+    rSquaredCentred,
+    rSquaredUncentred,
+    adjustedRSquared: rSquared === null ? null : 1 - ((1 - rSquared) * totalDegrees) / degreesOfFreedom,
+    residualStandardDeviation: Math.sqrt(residualSumOfSquares / degreesOfFreedom),
+    degreesOfFreedom,
+    fStatistic,
+    fP: fStatistic === null ? null : upperTailF(fStatistic, nTested, degreesOfFreedom),
+    logLikelihood,
+    aic: logLikelihood === null ? null : -2 * logLikelihood + 2 * nCoefficients,
+    bic: logLikelihood === null ? null : -2 * logLikelihood + Math.log(nObs) * nCoefficients,
+    durbinWatson: isExact ? null : durbinWatson(fit.residuals.map((e, i) => e * Math.sqrt(fit.weights?.[i] ?? 1))),
+    residuals: [...fit.residuals],
+    fitted: [...fit.fitted],
+    leverage: [...fit.leverage],
+    cooksDistance: isExact ? Array<null>(nObs).fill(null) : cooksDistance(fit, residualSumOfSquares / degreesOfFreedom),
+    caveats: regressionCaveats({ fit, hasIntercept: intercept, covariance, isExact, isConstant }),
+  };
+}
+
+/** Σ w·y² and Σ w·(y − ȳ)², ȳ the weighted mean. */
+function sumsOfSquares({ y, weights }: LeastSquaresFit): { aboutZero: number; aboutMean: number } {
+  const ones = weights ?? new Float64Array(y.length).fill(1);
+  const centre = sumOfProducts(y, ones) / sum(ones);
+  const aboutCentre = (c: number) => sum(y.map((value, i) => ones[i]! * (value - c) ** 2));
+  return { aboutZero: aboutCentre(0), aboutMean: aboutCentre(centre) };
+}
+
+function coefficientCovariance(
+  fit: LeastSquaresFit,
+  { kind, lag, smallSample = false }: RegressionRequest['covariance'],
+  residualVariance: number,
+): number[][] {
+  const k = fit.nCoefficients;
+  const flat = covarianceByKind();
+  return Array.from({ length: k }, (_, j) => [...flat.subarray(j * k, (j + 1) * k)]);
+
+  function covarianceByKind(): Float64Array {
+    if (kind === 'classical') return fit.unscaledCovariance.map((value) => value * residualVariance);
+    if (kind !== 'newey-west') return heteroskedasticCovariance(fit, kind);
+    if (lag !== undefined) return neweyWest(fit, { lag, smallSample });
+    throw new InputError({
+      code: 'lag-missing',
+      where: 'regression, covariance.lag',
+      expected: 'a whole number of rows for newey-west',
+      received: 'none',
+      hint: 'A common rule of thumb is floor(4 (n/100)^(2/9)); state the lag beside the figure.',
+    });
+  }
+}
+
+function normalLogLikelihood({ nObs, residualSumOfSquares, weights }: LeastSquaresFit): number {
+  const logWeights = weights ? sum(weights.map(Math.log)) : 0;
+  return 0.5 * (logWeights - nObs * (Math.log(2 * Math.PI) + 1 + Math.log(residualSumOfSquares / nObs)));
+}
+
+function cooksDistance(fit: LeastSquaresFit, residualVariance: number): (number | null)[] {
+  return Array.from(fit.residuals, (residual, i) => {
+    const leverage = fit.leverage[i]!;
+    if (leverage > 1 - 1e-10) return null;
+    const weightedSquare = residual ** 2 * (fit.weights?.[i] ?? 1);
+    return (weightedSquare * leverage) / ((1 - leverage) ** 2 * residualVariance * fit.nCoefficients);
+  });
+}

@@ -1,5 +1,5 @@
 import type { Figure, StemFigure, XyFigure } from '../contract/figure.ts';
-import { quantityNames } from './quantity-name.ts';
+import { quantityNames } from '../quantities/quantity-names.ts';
 
 export interface FigureTable {
   readonly columns: readonly string[];
@@ -33,7 +33,7 @@ function stemTable({ unit, stated, recomputed, rows, bands }: StemFigure): Figur
         row.isCumulative ? 'the row above' : 'the recomputation',
         row.value,
         ...limits(row.interval),
-        quantityNames[row.quantity].long,
+        quantityNames[row.quantity].label,
         unit,
       ]),
       ...bands.map((band) => [
@@ -43,7 +43,7 @@ function stemTable({ unit, stated, recomputed, rows, bands }: StemFigure): Figur
         band.low,
         band.high,
         null,
-        quantityNames[band.quantity].long,
+        quantityNames[band.quantity].label,
         unit,
       ]),
     ],

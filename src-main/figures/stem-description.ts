@@ -1,8 +1,7 @@
 import type { StemFigure } from '../contract/figure.ts';
+import { formatInterval, formatNumber } from '../quantities/notation.ts';
 import { axisDecimals } from './axis.ts';
-import { figureNumber, figureRange } from './figure-number.ts';
-import { quantityNames } from './quantity-name.ts';
-import { stemDomain } from './stem-layout.ts';
+import { shortQuantity, stemDomain } from './stem-layout.ts';
 
 /** The stem in words, for readers who do not see it: the same numbers in the same order. */
 export function stemDescription(figure: StemFigure): string {
@@ -11,16 +10,16 @@ export function stemDescription(figure: StemFigure): string {
   const unit = figure.unit === '1' ? '' : ` ${figure.unit}`;
   const boundWords = stated.bound === 'equals' ? '' : `${stated.bound} `;
   const row = ({ label, value, interval, quantity, isCumulative }: StemFigure['rows'][number]) =>
-    `${isCumulative ? 'then ' : ''}${label}: ${figureNumber(value, decimals)}` +
-    (interval ? ` (${figureRange(interval, decimals)})` : '') +
-    `, ${quantityNames[quantity].short}`;
+    `${isCumulative ? 'then ' : ''}${label}: ${formatNumber(value, { decimals })}` +
+    (interval ? ` (${formatInterval(interval, '', decimals)})` : '') +
+    `, ${shortQuantity(quantity)}`;
   return [
     `Stated ${boundWords}${stated.text}${unit}`,
     recomputed
-      ? `recomputed as stated ${figureNumber(recomputed.value, decimals)}` +
-        (recomputed.interval ? ` (${figureRange(recomputed.interval, decimals)})` : '')
+      ? `recomputed as stated ${formatNumber(recomputed.value, { decimals })}` +
+        (recomputed.interval ? ` (${formatInterval(recomputed.interval, '', decimals)})` : '')
       : 'not recomputed yet',
     ...rows.map(row),
-    ...bands.map((band) => `published ${band.label}: ${figureRange(band, decimals)}`),
+    ...bands.map((band) => `published ${band.label}: ${formatInterval(band, '', decimals)}`),
   ].join('; ');
 }

@@ -1,7 +1,7 @@
 import type { StemFigure } from '../contract/figure.ts';
 import type { QuantityId } from '../contract/primitives.ts';
+import { formatNumber } from '../quantities/notation.ts';
 import { axisTicks } from './axis.ts';
-import { figureNumber } from './figure-number.ts';
 import type { Palette } from './palette.ts';
 import { stemDescription } from './stem-description.ts';
 import { stemFontSize, stemLayout, type StemLayout, type StemRow } from './stem-layout.ts';
@@ -90,7 +90,7 @@ function axisNodes({ plot, domain, x, columns, rangeHeading }: StemLayout, unit:
         y2: round(plot.bottom + 4),
         stroke: palette.ink3,
       }),
-      text(figureNumber(tick, decimals), round(x(tick)), round(baseline), {
+      text(formatNumber(tick, { decimals }), round(x(tick)), round(baseline), {
         fill: palette.ink2,
         'text-anchor': 'middle',
       }),

@@ -1,8 +1,8 @@
 import type { StemFigure } from '../contract/figure.ts';
 import type { Interval, QuantityId } from '../contract/primitives.ts';
+import { formatInterval, formatLevel, formatNumber } from '../quantities/notation.ts';
+import { quantityNames } from '../quantities/quantity-names.ts';
 import { axisDecimals, paddedDomain, type Domain } from './axis.ts';
-import { figureNumber, figureRange } from './figure-number.ts';
-import { quantityNames } from './quantity-name.ts';
 import { textWidth, wrapText } from './text-width.ts';
 
 export const stemFontSize = 12.5;
@@ -74,6 +74,11 @@ export function stemDomain(figure: StemFigure): Domain {
   return paddedDomain([low, high, ...ends], 0.05);
 }
 
+/** What a row or a range is a number of, in the space of a table column. */
+export function shortQuantity(quantity: QuantityId): string {
+  return quantity === 'apparent-sensitivity' ? 'apparent' : quantityNames[quantity].symbol;
+}
+
 /** Puts every row, label and column of a stem in its place, in units of the drawing. */
 export function stemLayout(figure: StemFigure, width: number): StemLayout {
   const domain = stemDomain(figure);
@@ -122,7 +127,7 @@ function intervalHeading({ recomputed, rows }: StemFigure): string {
     [recomputed?.interval, ...rows.map((row) => row.interval)].flatMap((each) => each?.levelPercent ?? []),
   );
   const [level] = levels;
-  return levels.size === 1 && level !== undefined ? `${level} % interval` : '';
+  return levels.size === 1 && level !== undefined ? formatLevel(level) : '';
 }
 
 type DraftRow = Omit<StemRow, 'lines' | 'y' | 'height'> & { readonly label: string };
@@ -132,7 +137,9 @@ function draftRows(figure: StemFigure, decimals: number): DraftRow[] {
   const namesLevel = intervalHeading(figure) === '';
   const quantities = new Set([...figure.rows, ...figure.bands].map(({ quantity }) => quantity));
   const rangeText = (interval: Interval | null) =>
-    interval === null ? '' : figureRange(interval, decimals) + (namesLevel ? ` (${interval.levelPercent} %)` : '');
+    interval === null
+      ? ''
+      : formatInterval(interval, '', decimals) + (namesLevel ? ` (${formatLevel(interval.levelPercent)})` : '');
   const boundWords = stated.bound === 'equals' ? '' : `${stated.bound} `;
   const statedRow: DraftRow = {
     kind: 'stated',
@@ -152,7 +159,7 @@ function draftRows(figure: StemFigure, decimals: number): DraftRow[] {
     interval: recomputed?.interval ?? null,
     quantity: null,
     isCumulative: false,
-    valueText: recomputed ? figureNumber(recomputed.value, decimals) : '',
+    valueText: recomputed ? formatNumber(recomputed.value, { decimals }) : '',
     rangeText: rangeText(recomputed?.interval ?? null),
     quantityText: '',
   };
@@ -163,9 +170,9 @@ function draftRows(figure: StemFigure, decimals: number): DraftRow[] {
     interval: row.interval,
     quantity: row.quantity,
     isCumulative: row.isCumulative,
-    valueText: figureNumber(row.value, decimals),
+    valueText: formatNumber(row.value, { decimals }),
     rangeText: rangeText(row.interval),
-    quantityText: quantities.size > 1 ? quantityNames[row.quantity].short : '',
+    quantityText: quantities.size > 1 ? shortQuantity(row.quantity) : '',
   }));
   return [statedRow, recomputedRow, ...alternatives];
 }

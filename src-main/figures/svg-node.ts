@@ -3,7 +3,7 @@ export type SvgAttributes = Readonly<Record<string, string | number>>;
 /** A drawing as plain data: the screen renders it, the report writes it out, the exporter paints it. */
 export type SvgNode =
   | { readonly tag: string; readonly attributes: SvgAttributes; readonly children: readonly SvgNode[] }
-  | { readonly tag: 'text' | 'title'; readonly attributes: SvgAttributes; readonly text: string };
+  | { readonly tag: 'text' | 'title' | 'tspan'; readonly attributes: SvgAttributes; readonly text: string };
 
 export const figureFont = "'Atkinson Hyperlegible Next Variable', 'Atkinson Hyperlegible Next', system-ui, sans-serif";
 

@@ -1,4 +1,5 @@
 import type { SvgNode } from './svg-node.ts';
+import { tspans } from './tspans.ts';
 
 const entities: Readonly<Record<string, string>> = {
   '&': '&amp;',
@@ -21,6 +22,10 @@ export function svgText(node: SvgNode): string {
     ([name, value]) => ` ${name}="${escapeMarkup(String(value))}"`,
   );
   const open = `<${node.tag}${attributes.join('')}`;
-  if ('text' in node) return `${open}>${escapeMarkup(node.text)}</${node.tag}>`;
+  if ('text' in node) {
+    const spans = node.tag === 'text' ? tspans(node.text) : [node.text];
+    const content = spans.map((span) => (typeof span === 'string' ? escapeMarkup(span) : svgText(span)));
+    return `${open}>${content.join('')}</${node.tag}>`;
+  }
   return node.children.length === 0 ? `${open}/>` : `${open}>${node.children.map(svgText).join('')}</${node.tag}>`;
 }

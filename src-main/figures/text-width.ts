@@ -1,3 +1,5 @@
+import { smallScale, textRuns } from './text-runs.ts';
+
 /** Advance widths of U+0020–U+007E in Atkinson Hyperlegible Next, weight 400, in hundredths of the font size. */
 const widths = (
   '28 29 30 65 59 92 73 16 30 30 48 61 21 36 21 39 65 41 55 58 61 59 60 51 61 59 21 21 55 63 55 48 78 63 61 64 67 57 55 ' +
@@ -8,17 +10,26 @@ const widths = (
   .map(Number);
 const digitWidth = 0.65;
 const otherWidth = 0.7;
+const thinSpaceWidth = 0.2;
+const thinSpaces = '\u2009\u202f';
 /** Weight 650 is at most this much wider. */
 const boldFactor = 1.06;
 
 /** Width of a line of text in the figures' font, close enough to keep labels apart where nothing can be measured. */
 export function textWidth(content: string, fontSize: number, isBold = false): number {
   let total = 0;
-  for (const character of content) {
-    const isDigit = character >= '0' && character <= '9';
-    total += isDigit ? digitWidth : (widths[character.charCodeAt(0) - 32] ?? otherWidth * 100) / 100;
+  for (const { content: run, level } of textRuns(content)) {
+    const scale = level === 'base' ? 1 : smallScale;
+    for (const character of run) total += characterWidth(character) * scale;
   }
   return total * fontSize * (isBold ? boldFactor : 1);
+}
+
+function characterWidth(character: string): number {
+  if (character >= '0' && character <= '9') return digitWidth;
+  if (thinSpaces.includes(character)) return thinSpaceWidth;
+  const hundredths = widths[character.charCodeAt(0) - 32];
+  return hundredths === undefined ? otherWidth : hundredths / 100;
 }
 
 /** Breaks a label into lines no wider than `width`; a single longer word stays whole. */

@@ -48,14 +48,15 @@ export type AlignedRows = z.infer<typeof alignedRows>;
 
 export const leftOutYear = z.object({ year, reason: z.string() });
 
+/** null: does not exist, as for an exact fit or a constant y. */
 export const fitDiagnostics = z.object({
   nObs: z.int(),
-  rSquaredCentred: z.number(),
-  rSquaredUncentred: z.number(),
-  correlation: z.number(),
-  durbinWatson: z.number(),
-  lag1Autocorrelation: z.number(),
-  effectiveSampleSize: z.number(),
+  rSquaredCentred: z.number().nullable(),
+  rSquaredUncentred: z.number().nullable(),
+  correlation: z.number().nullable(),
+  durbinWatson: z.number().nullable(),
+  lag1Autocorrelation: z.number().nullable(),
+  effectiveSampleSize: z.number().nullable(),
   residualStandardDeviation: z.number(),
 });
 export type FitDiagnostics = z.infer<typeof fitDiagnostics>;

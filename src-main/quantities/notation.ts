@@ -16,11 +16,19 @@ export interface NumberFormat {
   withSign?: boolean;
 }
 
-/** A number with a true minus, digits as asked; very large and very small ones with a power of ten. */
-export function formatNumber(value: number, format: NumberFormat = {}): string {
+/**
+ * A number with a true minus, digits as asked; very large and very small ones with a power of ten. A number in place of
+ * the format means decimals. A number that does not exist (null) is a dash.
+ */
+export function formatNumber(value: number | null, format: NumberFormat | number = {}): string {
+  if (value === null) return '–';
   if (Number.isNaN(value)) return 'not a number';
   if (!Number.isFinite(value)) return value > 0 ? '∞' : '−∞';
-  const { decimals, significantDigits = 3, withSign = false } = format;
+  const {
+    decimals,
+    significantDigits = 3,
+    withSign = false,
+  } = typeof format === 'number' ? { decimals: format } : format;
   const magnitude = Math.abs(value);
   const digits =
     decimals === undefined ? significantText(magnitude, significantDigits) : fixedText(magnitude, decimals);
@@ -30,7 +38,7 @@ export function formatNumber(value: number, format: NumberFormat = {}): string {
 }
 
 /** A number with its unit; "1" is the unit of plain numbers and is not shown. */
-export function formatQuantity(value: number, unit: string, format: NumberFormat = {}): string {
+export function formatQuantity(value: number, unit: string, format: NumberFormat | number = {}): string {
   return withUnit(formatNumber(value, format), unit);
 }
 

@@ -1,0 +1,194 @@
+import type { Anchor, SlopeCovariance } from '../contract/claim.ts';
+import type { WindowSweepRequest } from '../contract/compute.ts';
+import type { WindowSweep } from '../contract/result.ts';
+import { InputError, NumericError } from '../errors.ts';
+import { finiteNumber, finiteValues } from '../statistics/finite-values.ts';
+import { quantileOfSorted } from '../statistics/quantile.ts';
+
+type SweepWindow = WindowSweep['windows'][number];
+
+/**
+ * Window sweep: the slope of y on x, with its standard error, over every window of consecutive rows that holds at least
+ * `minYears` years. It shows how far a number depends on where the record is made to start and end.
+ *
+ * Model    y − y0 = b (x − x0), through zero, or with a free intercept; (x0, y0) is the anchor of each window itself:
+ *          its first year, or the mean of its first k years. With `co2Ppm` the predictor is x = ln(C/C0) with C0 the
+ *          anchor's concentration (the mean is taken over ppm, before the logarithm). With `x` the predictor is what is
+ *          given (a logarithm, a forcing, a year), and x0 is the mean of x itself. With an intercept the anchor does
+ *          not change the slope
+ * Assumes  rows in order of time; a year without data is skipped and does not end a window, so a window's `n` can be
+ *          smaller than end − start + 1
+ *
+ * @param years     [nYears] strictly increasing
+ * @param co2Ppm    [nYears] ppm, above 0; or x [nYears] in any unit
+ * @param y         [nYears]
+ * @param minYears  3 … nYears, at least the anchor's years, above the Newey–West lag
+ * @returns  windows by start year, then end year; quantiles (type 7) of their slopes, in y per x.
+ *           Caveat `windows-without-spread` counts windows in which x does not vary
+ * @throws   InputError wrong-length, not-finite, not-positive, unordered-years, out-of-range, no-window;
+ *           NumericError no-spread when x varies in no window
+ *
+ * Source   least squares in closed form; covariance as in statistics/newey-west.ts (Newey & West 1987), Bartlett
+ *          weights, no prewhitening, factor n/(n − k) when `smallSample`
+ * Checked  test/unit/robustness/window-sweep.test.ts (C: closed forms); test/reference/robustness (B: R's lm, each window)
+ */
+export function windowSweep(request: WindowSweepRequest, onProgress?: (shareDone: number) => void): WindowSweep {
+  const { years, minYears, anchor, intercept, covariance = { kind: 'classical' } } = request;
+  const record = checkedRecord(request);
+  const nYears = years.length;
+  const nWindows = ((nYears - minYears + 1) * (nYears - minYears + 2)) / 2;
+  const windows: SweepWindow[] = [];
+  const slopeOf = slopeFitter(record, intercept, covariance);
+  const anchorOf = anchorFinder(record, anchor);
+  let nDone = 0;
+  for (let first = 0; first + minYears <= nYears; first++) {
+    const { x0, y0 } = anchorOf(first);
+    for (let last = first + minYears - 1; last < nYears; last++) {
+      const fit = slopeOf(first, last, x0, y0);
+      if (fit) windows.push({ start: years[first]!, end: years[last]!, n: last - first + 1, ...fit });
+      nDone++;
+    }
+    onProgress?.(nDone / nWindows);
+  }
+  if (windows.length === 0) {
+    throw new NumericError({
+      code: 'no-spread',
+      where: 'windowSweep, x',
+      expected: 'a predictor that varies within the windows',
+      received: `one value in each of ${nWindows} windows`,
+    });
+  }
+  const nLeftOut = nWindows - windows.length;
+  return {
+    windows,
+    quantiles: spreadOf(windows.map(({ slope }) => slope)),
+    caveats:
+      nLeftOut === 0
+        ? []
+        : [
+            {
+              code: 'windows-without-spread',
+              detail: `${nLeftOut} of ${nWindows} windows are left out: the predictor does not vary in them.`,
+            },
+          ],
+  };
+}
+
+/** Minimum, 5 %, median, 95 % and maximum (quantiles of type 7). */
+export function spreadOf(values: readonly number[]): WindowSweep['quantiles'] {
+  const sorted = Float64Array.from(values).sort();
+  const at = (probability: number) => quantileOfSorted(sorted, probability);
+  return { min: at(0), q05: at(0.05), q50: at(0.5), q95: at(0.95), max: at(1) };
+}
+
+interface SweepRecord {
+  /** The predictor; ln C when concentrations are given. */
+  x: Float64Array;
+  y: Float64Array;
+  /** What the anchor of x is averaged over, and how that mean becomes x0. */
+  anchored: { values: Float64Array; toX: (mean: number) => number };
+  /** Spread of x below which a window says nothing about a slope. */
+  smallestSpread: number;
+}
+
+function checkedRecord({ years, x, co2Ppm, y, minYears, anchor, covariance }: WindowSweepRequest): SweepRecord {
+  const caller = 'windowSweep';
+  const nYears = years.length;
+  years.forEach((year, row) => {
+    const before = years[row - 1];
+    if (before === undefined || year > before) return;
+    throw new InputError({
+      code: 'unordered-years',
+      where: `${caller}, years[${row}]`,
+      expected: `a year after ${before}`,
+      received: String(year),
+    });
+  });
+  finiteNumber(caller, 'minYears', minYears, { isWhole: true, atLeast: 3 });
+  if (minYears > nYears) {
+    throw new InputError({
+      code: 'no-window',
+      where: `${caller}, minYears`,
+      expected: `at most the ${nYears} years that have data`,
+      received: String(minYears),
+      hint: 'Choose a shorter window, or a longer record.',
+    });
+  }
+  if (anchor.kind === 'mean-of-first') {
+    finiteNumber(caller, 'anchor.years', anchor.years, { isWhole: true, atLeast: 1, atMost: minYears });
+  }
+  if (covariance?.kind === 'newey-west') {
+    finiteNumber(caller, 'covariance.lag', covariance.lag, { isWhole: true, atLeast: 0, atMost: minYears - 1 });
+  }
+  const checkedY = finiteValues(caller, 'y', y, { length: nYears });
+  const given = co2Ppm
+    ? finiteValues(caller, 'co2Ppm', co2Ppm, { length: nYears, sign: 'positive' })
+    : finiteValues(caller, 'x', x ?? [], { length: nYears });
+  const predictor = co2Ppm ? given.map(Math.log) : given;
+  return {
+    x: predictor,
+    y: checkedY,
+    anchored: { values: given, toX: co2Ppm ? Math.log : (mean) => mean },
+    smallestSpread: 1e-12 * predictor.reduce((largest, value) => Math.max(largest, Math.abs(value)), 0),
+  };
+}
+
+function anchorFinder({ y, anchored }: SweepRecord, anchor: Anchor): (first: number) => { x0: number; y0: number } {
+  const nAnchor = anchor.kind === 'first-year' ? 1 : anchor.years;
+  return (first) => {
+    let xSum = 0;
+    let ySum = 0;
+    for (let row = first; row < first + nAnchor; row++) {
+      xSum += anchored.values[row]!;
+      ySum += y[row]!;
+    }
+    return { x0: anchored.toX(xSum / nAnchor), y0: ySum / nAnchor };
+  };
+}
+
+/** Slope and standard error over rows first … last, counted from (x0, y0); null where x does not vary. */
+function slopeFitter({ x, y, smallestSpread }: SweepRecord, intercept: boolean, covariance: SlopeCovariance) {
+  const scores = new Float64Array(x.length);
+  const nCoefficients = intercept ? 2 : 1;
+  return (first: number, last: number, x0: number, y0: number): Pick<SweepWindow, 'slope' | 'standardError'> | null => {
+    const n = last - first + 1;
+    let xCentre = x0;
+    let yCentre = y0;
+    if (intercept) {
+      let xSum = 0;
+      let ySum = 0;
+      for (let row = first; row <= last; row++) {
+        xSum += x[row]! - x0;
+        ySum += y[row]! - y0;
+      }
+      xCentre += xSum / n;
+      yCentre += ySum / n;
+    }
+    let xx = 0;
+    let xy = 0;
+    for (let row = first; row <= last; row++) {
+      const dx = x[row]! - xCentre;
+      xx += dx * dx;
+      xy += dx * (y[row]! - yCentre);
+    }
+    if (xx <= n * smallestSpread ** 2) return null;
+    const slope = xy / xx;
+    let squares = 0;
+    for (let row = first; row <= last; row++) {
+      const dx = x[row]! - xCentre;
+      const residual = y[row]! - yCentre - slope * dx;
+      squares += residual * residual;
+      scores[row] = dx * residual;
+    }
+    if (covariance.kind === 'classical') return { slope, standardError: Math.sqrt(squares / (n - nCoefficients) / xx) };
+    let meat = 0;
+    for (let row = first; row <= last; row++) meat += scores[row]! ** 2;
+    for (let lag = 1; lag <= covariance.lag; lag++) {
+      let product = 0;
+      for (let row = first + lag; row <= last; row++) product += scores[row]! * scores[row - lag]!;
+      meat += 2 * (1 - lag / (covariance.lag + 1)) * product;
+    }
+    const factor = covariance.smallSample ? n / (n - nCoefficients) : 1;
+    return { slope, standardError: Math.sqrt(factor * Math.max(0, meat)) / xx };
+  };
+}

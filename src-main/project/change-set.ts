@@ -2,6 +2,7 @@ import type { RecordChange, RecordKind } from '../contract/trail.ts';
 import { InputError } from '../errors.ts';
 import { canonicalJson } from './canonical-json.ts';
 import type { ContentTable } from './content-table.ts';
+import type { FrozenRecords } from './frozen-records.ts';
 import type { RecordTables } from './record-tables.ts';
 import { type NewRecord, parseRecord, type RecordOf } from './records.ts';
 
@@ -27,13 +28,15 @@ interface Touched {
 export class ChangeSet implements Change {
   readonly #records: RecordTables;
   readonly #contents: ContentTable;
+  readonly #frozen: FrozenRecords;
   readonly #touched = new Map<string, Touched>();
   readonly #newContent: string[] = [];
   #isOpen = true;
 
-  constructor(records: RecordTables, contents: ContentTable) {
+  constructor(records: RecordTables, contents: ContentTable, frozen: FrozenRecords) {
     this.#records = records;
     this.#contents = contents;
+    this.#frozen = frozen;
   }
 
   add<Kind extends RecordKind>(kind: Kind, record: NewRecord<Kind>): RecordOf<Kind> {
@@ -66,6 +69,7 @@ export class ChangeSet implements Change {
     this.#requireOpen();
     const before = this.#records.read(kind, id) ?? null;
     if (before === body) return;
+    this.#frozen.refuseChange(kind, id, before, body);
     this.#records.write(kind, id, body);
     const key = `${kind} ${id}`;
     const first = this.#touched.get(key);

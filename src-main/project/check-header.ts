@@ -8,7 +8,7 @@ const magic = 'SQLite format 3\0';
  * Reads the first 100 bytes of a file and refuses it unless they are those of a project file of this version:
  * before SQLite has touched a file that may come from anywhere.
  *
- * @throws ProjectError not-found, not-a-project, newer-version, unknown-version
+ * @throws ProjectError not-found, not-a-project, newer-version, unknown-version, other-application
  * Source  The SQLite database file format, §1.3 "The Database Header", sqlite.org/fileformat2.html
  */
 export function checkHeader(path: string): void {
@@ -19,21 +19,25 @@ export function checkHeader(path: string): void {
   if (header.length < 100 || header.toString('latin1', 0, 16) !== magic) {
     refuse('not-a-project', 'a Footing project', header.length === 0 ? 'an empty file' : 'a file of another kind');
   }
-  const foundApplicationId = header.readUInt32BE(68);
+  const [foundApplicationId, version] = [header.readUInt32BE(68), header.readUInt32BE(60)];
   if (foundApplicationId !== applicationId) {
-    refuse('not-a-project', 'a Footing project', `a database with application id ${foundApplicationId}`);
+    const found = `a database whose application id is 0x${foundApplicationId.toString(16)}`;
+    refuse('other-application', 'a Footing project', found, 'It was made by another program.');
   }
-  const version = header.readUInt32BE(60);
   if (version > schemaVersion) {
-    const hint =
-      'It was written by a newer Footing. Open it with that one; this one would not know what it leaves out.';
+    const hint = 'It was written by a newer Footing. Open it with that one; this one would not see what is new in it.';
     refuse('newer-version', `a project file of version ${schemaVersion}`, `version ${version}`, hint);
   }
-  if (version < schemaVersion)
-    refuse('unknown-version', `a project file of version ${schemaVersion}`, `version ${version}`);
-  const [writeVersion, readVersion] = [header[18], header[19]];
-  if (writeVersion !== 1 || readVersion !== 1) {
-    refuse('not-a-project', 'a project file that keeps a rollback journal', 'one with another kind of journal');
+  if (version < schemaVersion) {
+    const hint = 'No Footing ever wrote this version.';
+    refuse('unknown-version', `a project file of version ${schemaVersion}`, `version ${version}`, hint);
+  }
+  if (header[18] !== 1 || header[19] !== 1) {
+    refuse(
+      'other-application',
+      'a project file with a rollback journal',
+      'one that another program switched to another journal',
+    );
   }
 }
 

@@ -4,18 +4,18 @@ import { digest } from './digest.ts';
 
 /** Bytes by their digest: imported files, series values, answers, signed statements. Written once, never changed. */
 export class ContentTable {
-  readonly #read: Statement<[string], Uint8Array>;
+  readonly #read: Statement<[string], Buffer>;
   readonly #has: Statement<[string], number>;
   readonly #insert: Statement<[string, Uint8Array]>;
 
   constructor(db: Database) {
-    this.#read = db.prepare<[string], Uint8Array>('SELECT bytes FROM content WHERE digest = ?').pluck();
+    this.#read = db.prepare<[string], Buffer>('SELECT bytes FROM content WHERE digest = ?').pluck();
     this.#has = db.prepare<[string], number>('SELECT 1 FROM content WHERE digest = ?').pluck();
     this.#insert = db.prepare<[string, Uint8Array]>('INSERT INTO content (digest, bytes) VALUES (?, ?)');
   }
 
   /** @throws ProjectError content-missing, content-altered */
-  read(contentDigest: string): Uint8Array {
+  read(contentDigest: string): Buffer {
     const bytes = this.#read.get(contentDigest);
     if (!bytes) throw contentError('content-missing', contentDigest, 'none');
     const actual = digest(bytes);

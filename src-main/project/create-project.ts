@@ -7,12 +7,14 @@ import { applicationId, schemaSql, schemaVersion } from './file-schema.ts';
 import { openLocked } from './open-project.ts';
 import { type Doing, Project } from './project.ts';
 import { asProjectError } from './sqlite-error.ts';
-import { acquireWriterLock, type WriterLock } from './writer-lock.ts';
+import { acquireWriterLock, type Holder } from './writer-lock.ts';
 
 export interface NewProject extends Doing {
   title: string;
   /** True for projects made of invented data. */
   isInvented: boolean;
+  /** Who has it open from now on: what a second writer is told. */
+  holder: Holder;
 }
 
 /**
@@ -20,13 +22,13 @@ export interface NewProject extends Doing {
  *
  * @throws ProjectError not-found (the folder), exists, in-use, not-writable
  */
-export function createProject(path: string, { title, isInvented, ...doing }: NewProject): Project {
+export function createProject(path: string, { holder, ...content }: NewProject): Project {
   const realPath = join(realFolder(path), basename(path));
-  const lock = acquireWriterLock(realPath, { reviewer: doing.reviewer.name, since: doing.at });
+  const lock = acquireWriterLock(realPath, holder);
   const draftPath = `${realPath}.${randomUUID()}.draft`;
   try {
     if (existsSync(realPath)) throw exists(realPath);
-    writeDraft(draftPath, { title, isInvented, ...doing });
+    writeDraft(draftPath, content);
     renameSync(draftPath, realPath);
   } catch (error) {
     rmSync(draftPath, { force: true });
@@ -36,14 +38,13 @@ export function createProject(path: string, { title, isInvented, ...doing }: New
   return openLocked(realPath, lock);
 }
 
-function writeDraft(path: string, { title, isInvented, ...doing }: NewProject): void {
+function writeDraft(path: string, { title, isInvented, ...doing }: Omit<NewProject, 'holder'>): void {
   const db = new Database(path);
   db.pragma('synchronous = FULL');
   db.pragma(`application_id = ${applicationId}`);
   db.pragma(`user_version = ${schemaVersion}`);
   db.exec(schemaSql);
-  const heldByTheDraft: WriterLock = { release: () => undefined };
-  const project = new Project(path, db, heldByTheDraft);
+  const project = new Project(path, db, { isReadOnly: false, close: () => db.close() });
   try {
     project.command({ ...doing, action: 'create project', subject: title }, (change) =>
       change.add('project', { title, isInvented, createdAt: doing.at }),

@@ -1,13 +1,16 @@
 import type { Database } from 'better-sqlite3';
-import type { RecordKind, TrailEntry, TrailHead } from '../contract/trail.ts';
+import type { RecordChange, RecordKind, TrailEntry, TrailHead, TrailLine } from '../contract/trail.ts';
 import { InputError, ProjectError } from '../errors.ts';
+import { canonicalJson } from './canonical-json.ts';
 import { type Change, ChangeSet, noSuchRecord } from './change-set.ts';
 import { ContentTable } from './content-table.ts';
+import { FrozenRecords } from './frozen-records.ts';
 import { RecordTables } from './record-tables.ts';
 import { parseRecord, type RecordOf } from './records.ts';
-import { asProjectError } from './sqlite-error.ts';
-import { parseEntry, TrailTable } from './trail-table.ts';
-import type { WriterLock } from './writer-lock.ts';
+import { asProjectError, brokenReference } from './sqlite-error.ts';
+import { TrailIndex } from './trail-index.ts';
+import { emptyHead, parseEntry, TrailTable } from './trail-table.ts';
+import { undoPlan, type UndoPlan, type UndoStep } from './undo-plan.ts';
 
 /** Who does something, when, and with which version of Footing: goes into the trail entry. */
 export interface Doing {
@@ -29,44 +32,63 @@ export class Project {
   readonly path: string;
   readonly isReadOnly: boolean;
   readonly #db: Database;
-  readonly #lock: WriterLock | null;
+  readonly #close: () => void;
   readonly #records: RecordTables;
   readonly #contents: ContentTable;
+  readonly #frozen: FrozenRecords;
   readonly #trail: TrailTable;
+  readonly #index: TrailIndex;
 
-  constructor(path: string, db: Database, lock: WriterLock | null) {
+  /** Takes over a connection whose file has been checked. To get a project, use openProject or createProject. */
+  constructor(path: string, db: Database, { isReadOnly, close }: { isReadOnly: boolean; close: () => void }) {
     this.path = path;
-    this.isReadOnly = lock === null;
+    this.isReadOnly = isReadOnly;
     this.#db = db;
-    this.#lock = lock;
+    this.#close = close;
     this.#records = new RecordTables(db);
     this.#contents = new ContentTable(db);
+    this.#frozen = new FrozenRecords(db);
     this.#trail = new TrailTable(db);
+    this.#index = new TrailIndex(this.#trail);
   }
 
   head(): TrailHead {
-    return this.#trail.head();
+    return this.#reading(() => this.#trail.head());
   }
 
   /** @throws InputError no-such-record */
   get<Kind extends RecordKind>(kind: Kind, id: number): RecordOf<Kind> {
-    const body = this.#records.read(kind, id);
+    const body = this.#reading(() => this.#records.read(kind, id));
     if (body === undefined) throw noSuchRecord(kind, id);
     return this.#parse(kind, body);
   }
 
   list<Kind extends RecordKind>(kind: Kind): RecordOf<Kind>[] {
-    return this.#records.all(kind).map((body) => this.#parse(kind, body));
+    return this.#reading(() => this.#records.all(kind)).map((body) => this.#parse(kind, body));
   }
 
   /** @throws ProjectError content-missing, content-altered */
-  content(contentDigest: string): Uint8Array {
-    return this.#contents.read(contentDigest);
+  content(contentDigest: string): Buffer {
+    return this.#reading(() => this.#contents.read(contentDigest));
   }
 
-  /** @throws InputError no-such-record */
+  /** Entries from the newest, or from the one before `before`, to the oldest. */
+  trailLines({ claimId, before = Infinity, limit }: { claimId?: number; before?: number; limit: number }): TrailLine[] {
+    const { undo, undone } = this.#undoPlan();
+    return this.#summaries()
+      .filter((entry) => entry.sequence < before && (claimId === undefined || entry.claimIds.includes(claimId)))
+      .slice(-limit)
+      .reverse()
+      .map(({ permanentBecause: _permanentBecause, signsClaimIds: _signsClaimIds, ...line }) => ({
+        ...line,
+        isUndone: undone.has(line.sequence),
+        canUndo: undo?.sequence === line.sequence && undo.refusal === null && !this.isReadOnly,
+      }));
+  }
+
+  /** @throws InputError no-such-entry */
   trailEntry(sequence: number): { entry: TrailEntry; previousHash: string; hash: string } {
-    const row = this.#trail.row(sequence);
+    const row = this.#reading(() => this.#trail.row(sequence));
     if (!row) {
       throw new InputError({
         code: 'no-such-entry',
@@ -75,49 +97,107 @@ export class Project {
         received: String(sequence),
       });
     }
-    return {
-      entry: parseEntry(row),
-      previousHash: this.#trail.row(sequence - 1)?.hash ?? '0'.repeat(64),
-      hash: row.hash,
-    };
+    const previous = this.#reading(() => this.#trail.row(sequence - 1)) ?? emptyHead;
+    return { entry: parseEntry(row), previousHash: previous.hash, hash: row.hash };
   }
 
   /**
    * Makes one change to the project: everything that `make` does, and the trail entry that says so, become
    * permanent together or not at all. A command that changes nothing leaves no entry.
+   *
+   * @throws InputError frozen, no-such-record, record-shape, still-referenced, nested-command, promise-in-command
+   * @throws ProjectError read-only, trail-broken, busy, disk
    */
   command<Outcome>(info: CommandInfo<Outcome>, make: (change: Change) => Outcome): Outcome {
-    if (this.isReadOnly) throw this.#refusal('read-only', 'a project opened for writing', 'one opened read-only');
-    if (this.#db.inTransaction)
-      throw this.#refusal('nested-command', 'one command at a time', 'a command inside another');
-    return this.#transaction(() => {
-      const changeSet = new ChangeSet(this.#records, this.#contents);
-      const outcome = make(changeSet);
-      const { changes, content } = changeSet.close();
-      if (isPromise(outcome)) throw this.#refusal('promise-in-command', 'a command that ends at once', 'a promise');
-      if (changes.length + content.length > 0) {
-        const { reviewer, at, action, engineVersion } = info;
-        const subject = typeof info.subject === 'function' ? info.subject(outcome) : info.subject;
-        this.#trail.append({ at, reviewer, action, subject, engineVersion, changes, content, undoes: null });
-      }
-      return outcome;
-    });
+    const { subject, ...rest } = info;
+    return this.#write(make, (outcome) => ({
+      ...rest,
+      subject: typeof subject === 'function' ? subject(outcome) : subject,
+      undoes: null,
+    }));
+  }
+
+  /** What Undo and Redo would do next, in words; null when there is nothing, or nothing that may be. */
+  undoState(): { undo: string | null; redo: string | null } {
+    const { undo, redo } = this.#undoPlan();
+    const words = (step: UndoStep | null) => (step && step.refusal === null && !this.isReadOnly ? step.words : null);
+    return { undo: words(undo), redo: words(redo) };
+  }
+
+  /** @throws InputError nothing-to-undo, cannot-undo */
+  undo(doing: Doing): void {
+    this.#takeBack(this.#undoPlan().undo, 'undo', doing);
+  }
+
+  /** @throws InputError nothing-to-redo, cannot-redo */
+  redo(doing: Doing): void {
+    this.#takeBack(this.#undoPlan().redo, 'redo', doing);
   }
 
   close(): void {
-    if (!this.#db.open) return;
-    this.#db.close();
-    this.#lock?.release();
+    if (this.#db.open) this.#close();
   }
 
-  #transaction<Outcome>(work: () => Outcome): Outcome {
+  /** Undo and redo are one thing: a new entry that turns an earlier one's changes round. */
+  #takeBack(step: UndoStep | null, action: 'undo' | 'redo', doing: Doing): void {
+    if (!step || step.refusal !== null) throw cannotTakeBack(step, action);
+    const { changes } = this.trailEntry(step.sequence).entry;
+    this.#write(
+      (changeSet) => {
+        for (const change of changes.toReversed()) this.#turnRound(changeSet, change);
+      },
+      () => ({ ...doing, action, subject: `entry ${step.sequence}: ${step.words}`, undoes: step.sequence }),
+    );
+  }
+
+  #turnRound(changeSet: ChangeSet, { kind, id, before, after }: RecordChange): void {
+    const text = (body: RecordChange['after']) => (body === null ? null : canonicalJson(body));
+    if ((this.#records.read(kind, id) ?? null) !== text(after)) {
+      throw new ProjectError({
+        code: 'record-altered',
+        where: `${kind} ${id}`,
+        expected: 'what the trail says about it',
+        received: 'something else',
+        hint: 'The file was changed from outside. Verify the project; continue on an earlier copy of the file.',
+      });
+    }
+    changeSet.write(kind, id, text(before));
+  }
+
+  #write<Outcome>(
+    make: (changeSet: ChangeSet) => Outcome,
+    describe: (outcome: Outcome) => Omit<TrailEntry, 'sequence' | 'changes' | 'content'>,
+  ): Outcome {
+    if (this.isReadOnly) throw readOnly(this.path);
+    if (this.#db.inTransaction) throw misuse('nested-command', 'one command at a time', 'a command inside another');
     try {
       this.#db.exec('BEGIN IMMEDIATE');
-      const outcome = work();
+      const changeSet = new ChangeSet(this.#records, this.#contents, this.#frozen);
+      const outcome = make(changeSet);
+      const changed = changeSet.close();
+      if (isPromise(outcome)) throw misuse('promise-in-command', 'a command that ends at once', 'a promise');
+      if (changed.changes.length + changed.content.length > 0) this.#trail.append({ ...describe(outcome), ...changed });
       this.#db.exec('COMMIT');
       return outcome;
     } catch (error) {
+      const reason = brokenReference(error, this.#db) ?? asProjectError(error, this.path);
       if (this.#db.inTransaction) this.#db.exec('ROLLBACK');
+      throw reason;
+    }
+  }
+
+  #summaries() {
+    return this.#reading(() => this.#index.summaries());
+  }
+
+  #undoPlan(): UndoPlan {
+    return undoPlan(this.#summaries());
+  }
+
+  #reading<Value>(read: () => Value): Value {
+    try {
+      return read();
+    } catch (error) {
       throw asProjectError(error, this.path);
     }
   }
@@ -135,12 +215,32 @@ export class Project {
       });
     }
   }
-
-  #refusal(code: string, expected: string, received: string): ProjectError {
-    return new ProjectError({ code, where: this.path, expected, received });
-  }
 }
 
 function isPromise(value: unknown): boolean {
   return typeof value === 'object' && value !== null && 'then' in value && typeof value.then === 'function';
+}
+
+function misuse(code: string, expected: string, received: string): InputError {
+  return new InputError({ code, where: 'command', expected, received });
+}
+
+function readOnly(path: string): ProjectError {
+  return new ProjectError({
+    code: 'read-only',
+    where: path,
+    expected: 'a project opened for writing',
+    received: 'one opened read-only',
+    hint: 'Open it again without read-only.',
+  });
+}
+
+function cannotTakeBack(step: UndoStep | null, action: 'undo' | 'redo'): InputError {
+  if (!step) return misuse(`nothing-to-${action}`, `something to ${action}`, 'nothing');
+  return new InputError({
+    code: `cannot-${action}`,
+    where: `${action} “${step.words}”`,
+    expected: 'an entry that may be taken back',
+    received: `one that may not: ${step.refusal}`,
+  });
 }

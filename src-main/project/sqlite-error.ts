@@ -1,5 +1,5 @@
 import Database from 'better-sqlite3';
-import { ProjectError } from '../errors.ts';
+import { InputError, ProjectError } from '../errors.ts';
 
 /** What SQLite said about a project file, as a ProjectError; anything else is handed back as it came. */
 export function asProjectError(error: unknown, path: string): unknown {
@@ -20,6 +20,14 @@ export function asProjectError(error: unknown, path: string): unknown {
       code: 'busy',
       expected: 'the file to be free for a moment',
       hint: 'Another program is reading or writing it. Try again; close the other program if this goes on.',
+    });
+  }
+  if (code === 'SQLITE_READONLY_ROLLBACK') {
+    return new ProjectError({
+      ...fields,
+      code: 'half-written',
+      expected: 'a file whose last change is complete',
+      hint: 'The program that writes it was stopped. Close the project and open it again.',
     });
   }
   if (/^SQLITE_(READONLY|CANTOPEN|PERM|AUTH)/.test(code)) {
@@ -43,5 +51,19 @@ export function asProjectError(error: unknown, path: string): unknown {
     code: 'sqlite',
     expected: 'a project file as Footing writes it',
     hint: 'Nothing was changed. Verify the project.',
+  });
+}
+
+/** For a COMMIT that failed on a record pointing at what is not there: the error that names both. Before ROLLBACK only. */
+export function brokenReference(error: unknown, db: Database.Database): InputError | undefined {
+  if (!(error instanceof Database.SqliteError) || error.code !== 'SQLITE_CONSTRAINT_FOREIGNKEY') return undefined;
+  const broken = db.prepare<[], { table: string; rowid: number; parent: string }>('PRAGMA foreign_key_check').get();
+  if (!broken) return undefined;
+  return new InputError({
+    code: 'still-referenced',
+    where: `${broken.table} ${broken.rowid}`,
+    expected: `the ${broken.parent} that it refers to`,
+    received: 'none',
+    hint: `Remove or change ${broken.table} ${broken.rowid} first.`,
   });
 }

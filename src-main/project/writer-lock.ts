@@ -5,11 +5,12 @@ import Database from 'better-sqlite3';
 import { ProjectError } from '../errors.ts';
 import { asProjectError } from './sqlite-error.ts';
 
-/** Who opens a project for writing, and when: told to anyone who tries to after them. */
+/** Who has a project open for writing: told to anyone who tries to after them. */
 export interface Holder {
   reviewer: string;
-  /** UTC, to the millisecond. */
-  since: string;
+  /** The kind of program they have it open in. */
+  host: string;
+  engineVersion: string;
 }
 
 export interface WriterLock {
@@ -17,12 +18,14 @@ export interface WriterLock {
 }
 
 interface HolderRow extends Holder {
-  host: string;
+  since: string;
+  computer: string;
   processId: number;
+  /** Tells this holding from every other one. */
   token: string;
 }
 
-const maxAttempts = 20;
+const maxAttempts = 50;
 
 /**
  * Makes this process the only writer of a project, for as long as it lives.
@@ -36,19 +39,29 @@ const maxAttempts = 20;
  */
 export function acquireWriterLock(projectPath: string, holder: Holder): WriterLock {
   const path = `${projectPath}.footing-lock`;
-  const row: HolderRow = { ...holder, host: hostname(), processId: process.pid, token: randomUUID() };
+  const row: HolderRow = {
+    ...holder,
+    since: new Date().toISOString(),
+    computer: hostname(),
+    processId: process.pid,
+    token: randomUUID(),
+  };
+  let lastSeen: HolderRow | null = null;
   for (let attempt = 0; attempt < maxAttempts; attempt++) {
     const db = tryToHold(path, row);
     if (!db) {
       const other = readHolder(path);
-      if (other) throw inUse(projectPath, other);
-      continue;
+      // Seen twice: the first time it may be what a killed process left, read while the next holder was writing.
+      if (other && other.token === lastSeen?.token) throw inUse(projectPath, other);
+      lastSeen = other;
+    } else {
+      // The last holder may have removed the file between our opening it and our locking it.
+      if (readHolder(path)?.token === row.token) return { release: () => letGo(db, path) };
+      db.close();
     }
-    // The file may have been removed by its last holder between our opening and locking it.
-    if (readHolder(path)?.token === row.token) return { release: () => letGo(db, path) };
-    db.close();
+    pause(2 + Math.random() * 8);
   }
-  throw inUse(projectPath, null);
+  throw inUse(projectPath, lastSeen);
 }
 
 function tryToHold(path: string, row: HolderRow): Database.Database | null {
@@ -63,9 +76,14 @@ function tryToHold(path: string, row: HolderRow): Database.Database | null {
     return db;
   } catch (error) {
     db?.close();
-    if (error instanceof Database.SqliteError && error.code.startsWith('SQLITE_BUSY')) return null;
+    if (isPassing(error)) return null;
     throw asProjectError(error, path);
   }
+}
+
+/** Busy; or the file went away between opening and using it, because its last holder let go just then. */
+function isPassing(error: unknown): boolean {
+  return error instanceof Database.SqliteError && /^SQLITE_(BUSY|READONLY_DBMOVED|IOERR_DELETE_NOENT)/.test(error.code);
 }
 
 function readHolder(path: string): HolderRow | null {
@@ -99,13 +117,17 @@ function tryToRemove(path: string): boolean {
   }
 }
 
+function pause(milliseconds: number): void {
+  Atomics.wait(new Int32Array(new SharedArrayBuffer(4)), 0, 0, milliseconds);
+}
+
 function inUse(projectPath: string, other: HolderRow | null): ProjectError {
   return new ProjectError({
     code: 'in-use',
     where: projectPath,
     expected: 'a project that nobody else has open for writing',
     received: other
-      ? `one that ${other.reviewer} has open since ${other.since} (computer ${other.host}, process ${other.processId})`
+      ? `one that ${other.reviewer} has open since ${other.since} (${other.host}, computer ${other.computer}, process ${other.processId})`
       : 'one that others are opening at this moment',
     hint: 'Open it read-only, or have it closed there first.',
   });

@@ -1,6 +1,6 @@
 import { NumericError } from '../errors.ts';
+import { errorInfluence, laggedCrossProduct } from './error-influence.ts';
 import type { LeastSquaresFit } from './least-squares.ts';
-import { laggedCrossProduct, sandwich, scores } from './sandwich.ts';
 
 export type HeteroskedasticKind = 'hc0' | 'hc1' | 'hc2' | 'hc3';
 
@@ -28,7 +28,7 @@ export function heteroskedasticCovariance(fit: LeastSquaresFit, kind: Heterosked
     if (leverage > LEVERAGE_OF_ONE) throw leverageOfOne(kind, i);
     return kind === 'hc2' ? 1 / Math.sqrt(1 - leverage) : 1 / (1 - leverage);
   });
-  return sandwich(fit.unscaledCovariance, laggedCrossProduct(scores(fit, factor), 0));
+  return laggedCrossProduct(errorInfluence(fit, factor), 0);
 }
 
 function leverageOfOne(kind: HeteroskedasticKind, row: number): NumericError {

@@ -34,6 +34,8 @@ export interface LeastSquaresFit {
   residualSumOfSquares: number;
   /** (X′WX)⁻¹, [nCoefficients × nCoefficients] row by row: the bread of every covariance. */
   unscaledCovariance: Float64Array;
+  /** nCoefficients × [nObs]: how each y enters each coefficient, b_j = Σ_t observationInfluence[j][t]·y_t. */
+  observationInfluence: readonly Float64Array[];
   /** Diagonal of the hat matrix. */
   leverage: Float64Array;
   /** Nearness to dependent columns: smallest over largest pivot of R, columns scaled to length about 1. */
@@ -110,6 +112,7 @@ export function leastSquares(input: LeastSquaresInput): LeastSquaresFit {
     fitted: y.map((value, i) => value - residuals[i]!),
     residualSumOfSquares: sumOfProducts(remainder, remainder) / yScale / yScale,
     unscaledCovariance: inverseCrossProduct(qr, scales),
+    observationInfluence: pseudoInverse(qr, scales, rootWeights, nObs),
     leverage: hatDiagonal(qr, nObs),
     pivotRatio: qr.pivotRatio,
   };
@@ -223,6 +226,25 @@ function inverseCrossProduct(qr: PivotedQr, scales: readonly number[]): Float64A
   }
   for (let i = 0; i < n; i++) for (let j = 0; j < i; j++) inverse[i * n + j] = inverse[j * n + i]!;
   return inverse;
+}
+
+/** Rows of (X′WX)⁻¹X′W = S P R⁻¹ Q′ √W. */
+function pseudoInverse(
+  qr: PivotedQr,
+  scales: readonly number[],
+  rootWeights: Float64Array | null,
+  nObs: number,
+): Float64Array[] {
+  const rows: Float64Array[] = [];
+  for (let j = 0; j < scales.length; j++) {
+    const unit = new Float64Array(scales.length);
+    unit[j] = 1;
+    const row = new Float64Array(nObs);
+    row.set(solveUpperTransposed(qr, unit));
+    multiplyByQ(qr, row);
+    rows[qr.pivot[j]!] = row.map((value, t) => value * scales[qr.pivot[j]!]! * (rootWeights?.[t] ?? 1));
+  }
+  return rows;
 }
 
 /** h_i = Σ_j Q_ij² over the first nCoefficients columns of Q. */

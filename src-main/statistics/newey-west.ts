@@ -1,6 +1,6 @@
+import { errorInfluence, laggedCrossProduct } from './error-influence.ts';
 import { finiteNumber } from './finite-values.ts';
 import type { LeastSquaresFit } from './least-squares.ts';
-import { laggedCrossProduct, sandwich, scores } from './sandwich.ts';
 
 export interface NeweyWestOptions {
   /** Largest lag L with a non-zero weight. 0 gives hc0. */
@@ -28,18 +28,18 @@ export interface NeweyWestOptions {
 export function neweyWest(fit: LeastSquaresFit, { lag, smallSample }: NeweyWestOptions): Float64Array {
   finiteNumber('neweyWest', 'lag', lag, { isWhole: true, atLeast: 0, atMost: fit.nObs - 1 });
   const k = fit.nCoefficients;
-  const rowScores = scores(fit);
-  const meat = laggedCrossProduct(rowScores, 0);
+  const influence = errorInfluence(fit);
+  const covariance = laggedCrossProduct(influence, 0);
   for (let j = 1; j <= lag; j++) {
     const weight = 1 - j / (lag + 1);
-    const product = laggedCrossProduct(rowScores, j);
+    const product = laggedCrossProduct(influence, j);
     for (let row = 0; row < k; row++) {
       for (let column = 0; column < k; column++) {
         const both = product[row * k + column]! + product[column * k + row]!;
-        meat[row * k + column] = meat[row * k + column]! + weight * both;
+        covariance[row * k + column] = covariance[row * k + column]! + weight * both;
       }
     }
   }
   const factor = smallSample ? fit.nObs / (fit.nObs - k) : 1;
-  return sandwich(fit.unscaledCovariance, meat).map((value) => value * factor);
+  return covariance.map((value) => value * factor);
 }

@@ -1,0 +1,15 @@
+import { ref, watch, type Ref } from 'vue';
+
+const storageKey = 'footing.margin';
+/** Below this width the margin would lie over the sheet: it stays shut until asked for. */
+const wideEnough = '(min-width: 1100px)';
+
+/** Whether the margin beside the sheet is open. What the reviewer chooses on a wide window is kept per machine. */
+export function useMargin(): { isMarginOpen: Ref<boolean> } {
+  const wide = matchMedia(wideEnough);
+  const isMarginOpen = ref(wide.matches && localStorage.getItem(storageKey) !== 'shut');
+  watch(isMarginOpen, (isOpen) => {
+    if (wide.matches) localStorage.setItem(storageKey, isOpen ? 'open' : 'shut');
+  });
+  return { isMarginOpen };
+}

@@ -89,4 +89,3 @@ export const computeMethods = {
 export type ComputeMethod = keyof typeof computeMethods;
 export type ComputeInput<Method extends ComputeMethod> = z.infer<(typeof computeMethods)[Method]['input']>;
 export type ComputeValue<Method extends ComputeMethod> = z.infer<(typeof computeMethods)[Method]['value']>;
-

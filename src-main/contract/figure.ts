@@ -17,7 +17,12 @@ export const stemFigure = z.object({
   kind: z.literal('stem'),
   ...figureFrame,
   unit: claimUnit,
-  stated: z.object({ text: z.string(), value: z.number(), bound, interval: z.object({ low: z.number(), high: z.number() }) }),
+  stated: z.object({
+    text: z.string(),
+    value: z.number(),
+    bound,
+    interval: z.object({ low: z.number(), high: z.number() }),
+  }),
   recomputed: z.object({ value: z.number(), interval: interval.nullable() }).nullable(),
   rows: z.array(
     z.object({

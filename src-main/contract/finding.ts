@@ -21,7 +21,12 @@ export const note = z.object({
 });
 export type Note = z.infer<typeof note>;
 
-export const conclusion = z.enum(['supported', 'supported on stated conditions', 'not supported', 'cannot be determined']);
+export const conclusion = z.enum([
+  'supported',
+  'supported on stated conditions',
+  'not supported',
+  'cannot be determined',
+]);
 export type Conclusion = z.infer<typeof conclusion>;
 
 export const publishedValue = z.object({

@@ -1,5 +1,14 @@
 import { z } from 'zod';
-import { agreement, assumptionOutcome, assumptionsAnswer, claimSweep, derivationAnswer, recomputation, result } from './result.ts';
+import {
+  agreement,
+  assumptionId,
+  assumptionOutcome,
+  assumptionsAnswer,
+  claimSweep,
+  derivationAnswer,
+  recomputation,
+  result,
+} from './result.ts';
 import { claim, statementQuestion } from './claim.ts';
 import { conclusion, finding, mark, note, publishedValue, reviewer, signature, signatureCheck } from './finding.ts';
 import { figure, stemFigure } from './figure.ts';
@@ -29,7 +38,15 @@ export type Source = z.infer<typeof source>;
 
 /** How far a section of the sheet has come. */
 export const sectionState = z.enum(['untouched', 'in progress', 'done']);
-export const sectionId = z.enum(['statement', 'arithmetic', 'data', 'recomputation', 'assumptions', 'robustness', 'finding']);
+export const sectionId = z.enum([
+  'statement',
+  'arithmetic',
+  'data',
+  'recomputation',
+  'assumptions',
+  'robustness',
+  'finding',
+]);
 export type SectionId = z.infer<typeof sectionId>;
 
 /** One row of the index: enough for its miniature. */
@@ -80,6 +97,17 @@ export const claimView = z.object({
   signatureChecks: z.array(signatureCheck),
   stem: stemFigure.nullable(),
   figures: z.record(z.enum(['fit', 'residuals', 'sweep']), figure.nullable()),
+  /** What the assumptions in the ledger are called and how each is tested. */
+  catalogue: z.array(
+    z.object({
+      id: assumptionId,
+      title: z.string(),
+      shortTitle: z.string(),
+      why: z.string(),
+      formula: z.string(),
+      source: z.string(),
+    }),
+  ),
   /** Published ranges of quantities that this claim may be held against. */
   published: z.array(publishedValue),
   /** Figures that a finding's text can name in braces, filled in. */

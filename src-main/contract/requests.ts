@@ -24,7 +24,10 @@ const longWork = onClaim.extend({
 /** The contract: every request with its checked input and its answer. */
 export const requests = {
   'session.get': { input: nothing, answer: session },
-  'reviewer.set': { input: z.object({ name: z.string().trim().min(1).max(120), role: z.string().trim().max(120) }), answer: reviewer },
+  'reviewer.set': {
+    input: z.object({ name: z.string().trim().min(1).max(120), role: z.string().trim().max(120) }),
+    answer: reviewer,
+  },
   'identity.create': { input: z.object({ passphrase }), answer: reviewer },
 
   'projects.list': {
@@ -33,10 +36,15 @@ export const requests = {
       directory: z.string(),
       parent: z.string().nullable(),
       folders: z.array(z.string()),
-      projects: z.array(z.object({ path: z.string(), fileName: z.string(), title: z.string().nullable(), modifiedAt: z.string() })),
+      projects: z.array(
+        z.object({ path: z.string(), fileName: z.string(), title: z.string().nullable(), modifiedAt: z.string() }),
+      ),
     }),
   },
-  'project.create': { input: z.object({ title: z.string().trim().min(1).max(200), directory: path.optional(), path: path.optional() }), answer: projectView },
+  'project.create': {
+    input: z.object({ title: z.string().trim().min(1).max(200), directory: path.optional(), path: path.optional() }),
+    answer: projectView,
+  },
   'project.open': { input: z.object({ path, readOnly: z.boolean().optional() }), answer: projectView },
   'project.openDemo': { input: z.object({ directory: path.optional() }), answer: projectView },
   'project.close': { input: nothing, answer: nothing },
@@ -117,16 +125,30 @@ export const requests = {
   'finding.revise': { input: onClaim.extend({ reason: z.string().trim().min(1).max(20_000) }), answer: claimView },
 
   'trail.list': {
-    input: z.object({ claimId: recordId.optional(), before: z.int().positive().optional(), limit: z.int().min(1).max(500) }),
+    input: z.object({
+      claimId: recordId.optional(),
+      before: z.int().positive().optional(),
+      limit: z.int().min(1).max(500),
+    }),
     answer: z.object({ lines: z.array(trailLine), hasMore: z.boolean() }),
   },
-  'trail.entry': { input: z.object({ sequence: z.int().positive() }), answer: z.object({ entry: trailEntry, previousHash: z.string(), hash: z.string() }) },
+  'trail.entry': {
+    input: z.object({ sequence: z.int().positive() }),
+    answer: z.object({ entry: trailEntry, previousHash: z.string(), hash: z.string() }),
+  },
   'trail.undo': { input: nothing, answer: projectView },
   'trail.redo': { input: nothing, answer: projectView },
 
-  'report.render': { input: z.object({ claimIds: z.array(recordId).optional() }), answer: z.object({ html: z.string(), report }) },
+  'report.render': {
+    input: z.object({ claimIds: z.array(recordId).optional() }),
+    answer: z.object({ html: z.string(), report }),
+  },
   'report.write': {
-    input: z.object({ directory: path, formats: z.array(z.enum(['html', 'json'])).min(1), claimIds: z.array(recordId).optional() }),
+    input: z.object({
+      directory: path,
+      formats: z.array(z.enum(['html', 'json'])).min(1),
+      claimIds: z.array(recordId).optional(),
+    }),
     answer: z.object({ files: z.array(z.string()) }),
   },
   'figure.export': {
@@ -157,5 +179,5 @@ export const errorAnswer = z.object({
 export type ErrorAnswer = z.infer<typeof errorAnswer>;
 
 /** What every request answers: a value, or an error as data. */
-export type Answer<Name extends RequestName> = { ok: true; value: RequestAnswer<Name> } | { ok: false; error: ErrorAnswer };
-
+export type Answer<Name extends RequestName> =
+  { ok: true; value: RequestAnswer<Name> } | { ok: false; error: ErrorAnswer };

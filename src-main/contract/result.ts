@@ -128,7 +128,10 @@ export type Weight = z.infer<typeof weight>;
 export const markValue = z.enum(['met', 'not met', 'untested']);
 export type MarkValue = z.infer<typeof markValue>;
 
-const figureRows = z.object({ columns: z.array(z.string()), rows: z.array(z.array(z.union([z.string(), z.number(), z.null()]))) });
+const figureRows = z.object({
+  columns: z.array(z.string()),
+  rows: z.array(z.array(z.union([z.string(), z.number(), z.null()]))),
+});
 
 /** What a test of one assumption returns. */
 export const assumptionOutcome = z.object({
@@ -151,7 +154,13 @@ export const assumptionOutcome = z.object({
   test: z.string(),
   /** The number under the changed assumption. Its quantity may differ from the claim's: say which. */
   alternative: z
-    .object({ value: z.number(), interval: interval.nullable(), quantity: quantityId, unit: claimUnit, label: z.string() })
+    .object({
+      value: z.number(),
+      interval: interval.nullable(),
+      quantity: quantityId,
+      unit: claimUnit,
+      label: z.string(),
+    })
     .nullable(),
   /** Alternative minus recomputed, in the claim's unit; null when there is no alternative of a comparable unit. */
   effect: z.number().nullable(),
@@ -218,8 +227,20 @@ export const claimSweep = windowSweep.extend({
 export type ClaimSweep = z.infer<typeof claimSweep>;
 
 export const energyBudgetAnswer = z.object({
-  effcs: z.object({ q05: z.number().nullable(), q17: z.number().nullable(), q50: z.number().nullable(), q83: z.number().nullable(), q95: z.number().nullable() }),
-  tcr: z.object({ q05: z.number().nullable(), q17: z.number().nullable(), q50: z.number().nullable(), q83: z.number().nullable(), q95: z.number().nullable() }),
+  effcs: z.object({
+    q05: z.number().nullable(),
+    q17: z.number().nullable(),
+    q50: z.number().nullable(),
+    q83: z.number().nullable(),
+    q95: z.number().nullable(),
+  }),
+  tcr: z.object({
+    q05: z.number().nullable(),
+    q17: z.number().nullable(),
+    q50: z.number().nullable(),
+    q83: z.number().nullable(),
+    q95: z.number().nullable(),
+  }),
   central: z.object({ effcs: z.number().nullable(), tcr: z.number().nullable(), feedbackWm2PerK: z.number() }),
   /** Share of draws whose denominator ΔF − ΔN is not positive; counted as unbounded above. */
   shareUndefined: z.number(),

@@ -3,7 +3,18 @@ import { recordId, sha256, shortText, timestamp } from './primitives.ts';
 import { signatureCheck } from './finding.ts';
 
 /** The kinds of record in a project; each is a table of the file. */
-export const recordKind = z.enum(['project', 'source', 'dataset', 'series', 'claim', 'result', 'mark', 'note', 'finding', 'signature']);
+export const recordKind = z.enum([
+  'project',
+  'source',
+  'dataset',
+  'series',
+  'claim',
+  'result',
+  'mark',
+  'note',
+  'finding',
+  'signature',
+]);
 export type RecordKind = z.infer<typeof recordKind>;
 
 export const recordChange = z.object({

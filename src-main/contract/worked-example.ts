@@ -17,7 +17,9 @@ export const workedExample = z.object({
   /** What the invented data were made of, so that the finding can be judged. */
   truth: longText,
   sources: z.array(source.omit({ id: true, file: true }).extend({ path: insidePath.nullable() })),
-  datasets: z.array(z.object({ path: insidePath, options: readOptions, choices: z.array(seriesChoice).min(1), licence: longText })),
+  datasets: z.array(
+    z.object({ path: insidePath, options: readOptions, choices: z.array(seriesChoice).min(1), licence: longText }),
+  ),
   claims: z.array(
     z.object({
       claim: claimDraft,

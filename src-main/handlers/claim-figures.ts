@@ -23,7 +23,12 @@ export function fitFigure(claim: Claim, { fit }: Recomputation, digests: string[
   const hasIntercept = fit.intercept !== null;
   const marks: Mark[] = [
     { label: 'years', mark: 'points', x, y, y2: null, role: 'data' },
-    line(hasIntercept ? 'line as stated' : 'line as stated, through zero', hasIntercept ? first : 0, hasIntercept ? second : first, 'stated'),
+    line(
+      hasIntercept ? 'line as stated' : 'line as stated, through zero',
+      hasIntercept ? first : 0,
+      hasIntercept ? second : first,
+      'stated',
+    ),
   ];
   if (!hasIntercept) {
     const free = regression({ x, y, intercept: true, covariance: { kind: 'classical' } }).coefficients;
@@ -50,13 +55,21 @@ export function residualsFigure(claim: Claim, { fit }: Recomputation, digests: s
     kind: 'xy',
     name: `claim-${claim.id}-residuals`,
     title: 'Residuals in time',
-    caption: 'What the stated line leaves over. Runs on one side of zero mean that neighbouring years are not independent.',
+    caption:
+      'What the stated line leaves over. Runs on one side of zero mean that neighbouring years are not independent.',
     digests,
     xLabel: 'Year',
     yLabel: 'Residual (K)',
     isXYears: true,
     marks: [
-      { label: 'zero', mark: 'line', x: [Math.min(...years), Math.max(...years)], y: [0, 0], y2: null, role: 'reference' },
+      {
+        label: 'zero',
+        mark: 'line',
+        x: [Math.min(...years), Math.max(...years)],
+        y: [0, 0],
+        y2: null,
+        role: 'reference',
+      },
       { label: 'residual', mark: 'points', x: years, y: stated.residuals, y2: null, role: 'data' },
     ],
   };
@@ -65,7 +78,12 @@ export function residualsFigure(claim: Claim, { fit }: Recomputation, digests: s
 /** The number with the start of the window varied and its end kept, and the other way round. */
 export function sweepFigure(claim: Claim, sweep: ClaimSweep, digests: string[]): XyFigure {
   const { stated, factor, windows, unit, minYears } = sweep;
-  const varied = (label: string, keep: (window: ClaimSweep['windows'][number]) => boolean, at: 'start' | 'end', role: Mark['role']): Mark[] => {
+  const varied = (
+    label: string,
+    keep: (window: ClaimSweep['windows'][number]) => boolean,
+    at: 'start' | 'end',
+    role: Mark['role'],
+  ): Mark[] => {
     const kept = windows.filter(keep);
     const x = kept.map((window) => window[at]);
     const value = (shift: number) => kept.map(({ slope, standardError }) => (slope + shift * standardError) * factor);
@@ -85,9 +103,21 @@ export function sweepFigure(claim: Claim, sweep: ClaimSweep, digests: string[]):
     yLabel: unit,
     isXYears: true,
     marks: [
-      ...varied(`from any year to ${stated.window.end}`, ({ end }) => end === stated.window.end, 'start', 'alternative'),
+      ...varied(
+        `from any year to ${stated.window.end}`,
+        ({ end }) => end === stated.window.end,
+        'start',
+        'alternative',
+      ),
       ...varied(`from ${stated.window.start} to any year`, ({ start }) => start === stated.window.start, 'end', 'data'),
-      { label: 'recomputed as stated', mark: 'line', x: [Math.min(...years), Math.max(...years)], y: [stated.value, stated.value], y2: null, role: 'stated' },
+      {
+        label: 'recomputed as stated',
+        mark: 'line',
+        x: [Math.min(...years), Math.max(...years)],
+        y: [stated.value, stated.value],
+        y2: null,
+        role: 'stated',
+      },
     ],
   };
 }

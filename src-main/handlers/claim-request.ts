@@ -44,16 +44,21 @@ export function requestFor(project: Project, claim: Claim, method: ResultMethod,
   const request = { method, statement, procedure, tolerance, seed, evidence, series };
   // A recomputation stands on the statement, the procedure and its series alone: new evidence does not make it stale.
   if (method === 'recomputation') return plain({ ...request, evidence: noEvidence, series: withoutForcing(series) });
-  return plain(method === 'claim-sweep' ? { ...request, evidence: noEvidence, series: withoutForcing(series), minYears } : request);
+  return plain(
+    method === 'claim-sweep' ? { ...request, evidence: noEvidence, series: withoutForcing(series), minYears } : request,
+  );
 }
 
 /** The computation that a stored request stands for: the same, with the values in place of their digests. */
 export function resolveRequest(project: Project, request: StoredRequest) {
   const { method, ...input } = request;
   const series = Object.fromEntries(
-    Object.entries((input['series'] ?? {}) as Record<string, Omit<SeriesData, 'values'> & { valuesDigest: string }>).map(
-      ([role, { valuesDigest, ...description }]) => [role, { ...description, values: readValues(project, valuesDigest) }],
-    ),
+    Object.entries(
+      (input['series'] ?? {}) as Record<string, Omit<SeriesData, 'values'> & { valuesDigest: string }>,
+    ).map(([role, { valuesDigest, ...description }]) => [
+      role,
+      { ...description, values: readValues(project, valuesDigest) },
+    ]),
   );
   switch (method) {
     case 'derivation':

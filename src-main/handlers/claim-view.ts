@@ -19,7 +19,8 @@ export function claimView(project: Project, claimId: number): ClaimView {
   const claim = project.get('claim', claimId);
   const own = <Row extends { claimId: number }>(rows: Row[]) => rows.filter((row) => row.claimId === claimId);
   const blocked = obstacles(project, claim);
-  const stored = <Method extends ResultMethod>(method: Method) => storedWithState(project, claim, method, blocked.length > 0);
+  const stored = <Method extends ResultMethod>(method: Method) =>
+    storedWithState(project, claim, method, blocked.length > 0);
 
   const results = {
     derivation: stored('derivation'),
@@ -58,7 +59,12 @@ export function claimView(project: Project, claimId: number): ClaimView {
   return { ...view, sections: sectionStates(view) };
 }
 
-function storedWithState<Method extends ResultMethod>(project: Project, claim: Claim, method: Method, isBlocked: boolean) {
+function storedWithState<Method extends ResultMethod>(
+  project: Project,
+  claim: Claim,
+  method: Method,
+  isBlocked: boolean,
+) {
   const latest = latestAnswer(project, claim.id, method);
   if (!latest) return null;
   if (method !== 'derivation' && isBlocked) return { ...latest, isStale: true };

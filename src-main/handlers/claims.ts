@@ -198,7 +198,9 @@ function checkSeries(project: Project, { procedure, evidence }: Pick<Claim, 'pro
   }
 }
 
-function withoutUndefined<Value extends object>(value: Value): { [Key in keyof Value]: Exclude<Value[Key], undefined> } {
+function withoutUndefined<Value extends object>(
+  value: Value,
+): { [Key in keyof Value]: Exclude<Value[Key], undefined> } {
   return Object.fromEntries(Object.entries(value).filter(([, entry]) => entry !== undefined)) as {
     [Key in keyof Value]: Exclude<Value[Key], undefined>;
   };

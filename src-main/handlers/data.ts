@@ -87,7 +87,10 @@ export const dataHandlers: Handlers<Names> = {
         hint: 'Choose another name.',
       });
     }
-    const changed = { ...series, ...Object.fromEntries(Object.entries(given).filter(([, value]) => value !== undefined)) };
+    const changed = {
+      ...series,
+      ...Object.fromEntries(Object.entries(given).filter(([, value]) => value !== undefined)),
+    };
     workspace.change('change series', changed.name, (change) => change.put('series', changed));
     return projectView(project);
   },

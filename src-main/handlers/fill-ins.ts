@@ -1,6 +1,6 @@
 import type { Claim } from '../contract/claim.ts';
 import type { AssumptionsAnswer, ClaimSweep, Recomputation } from '../contract/result.ts';
-import { formatInterval, formatNumber, formatValueWithUncertainty } from '../quantities/notation.ts';
+import { formatInterval, formatNumber, formatWithUncertainty } from '../quantities/notation.ts';
 
 /** Figures that the words of a finding can name in braces. Each carries its unit. */
 export function fillIns(
@@ -12,30 +12,32 @@ export function fillIns(
   const figures: Record<string, string> = { stated: `${statement.value} ${statement.unit}` };
   if (recomputation) {
     const { value, standardError, interval95, unit, fit } = recomputation;
-    figures['recomputed'] = formatValueWithUncertainty(value, standardError, unit);
+    figures['recomputed'] = formatWithUncertainty(value, standardError, unit);
     if (interval95) figures['recomputed-interval'] = formatInterval(interval95, unit);
     if (fit) {
       const { diagnostics, window, slopes, intercept } = fit;
       figures['window'] = `${window.start}–${window.end}`;
-      figures['r-squared-centred'] = formatNumber(diagnostics.rSquaredCentred, 2);
-      figures['r-squared-uncentred'] = formatNumber(diagnostics.rSquaredUncentred, 2);
-      figures['durbin-watson'] = formatNumber(diagnostics.durbinWatson, 2);
-      figures['effective-years'] = formatNumber(diagnostics.effectiveSampleSize, 0);
-      if (slopes[0]) figures['slope'] = formatValueWithUncertainty(slopes[0].value, slopes[0].standardError, '');
-      if (intercept) figures['intercept'] = formatValueWithUncertainty(intercept.value, intercept.standardError, 'K');
+      figures['r-squared-centred'] = formatNumber(diagnostics.rSquaredCentred, { decimals: 2 });
+      figures['r-squared-uncentred'] = formatNumber(diagnostics.rSquaredUncentred, { decimals: 2 });
+      figures['durbin-watson'] = formatNumber(diagnostics.durbinWatson, { decimals: 2 });
+      figures['effective-years'] = formatNumber(diagnostics.effectiveSampleSize, { decimals: 0 });
+      if (slopes[0]) figures['slope'] = formatWithUncertainty(slopes[0].value, slopes[0].standardError, '');
+      if (intercept) figures['intercept'] = formatWithUncertainty(intercept.value, intercept.standardError, 'K');
     }
   }
   for (const { id, alternative } of assumptions?.outcomes ?? []) {
     if (!alternative) continue;
     const range = alternative.interval ? ` (${formatInterval(alternative.interval, '')})` : '';
-    figures[id] = `${formatNumber(alternative.value, 2)} ${alternative.unit}${range}`;
+    figures[id] = `${formatNumber(alternative.value, { decimals: 2 })} ${alternative.unit}${range}`;
   }
   const last = assumptions?.ladder?.rungs.at(-1);
   if (last && assumptions?.ladder) {
-    figures['on-this-footing'] = `${formatNumber(last.value, 2)} ${assumptions.ladder.unit} (${formatInterval(last.interval90, '')})`;
+    figures['on-this-footing'] =
+      `${formatNumber(last.value, { decimals: 2 })} ${assumptions.ladder.unit} (${formatInterval(last.interval90, '')})`;
   }
   if (sweep) {
-    figures['windows-range'] = `${formatNumber(sweep.valueQuantiles.min, 2)} to ${formatNumber(sweep.valueQuantiles.max, 2)} ${sweep.unit}`;
+    figures['windows-range'] =
+      `${formatNumber(sweep.valueQuantiles.min, { decimals: 2 })} to ${formatNumber(sweep.valueQuantiles.max, { decimals: 2 })} ${sweep.unit}`;
   }
   return figures;
 }

@@ -18,7 +18,14 @@ export const findingHandlers: Handlers<'finding.save' | 'finding.sign' | 'findin
     const earlier = latestFinding(project, claimId);
     const revision = earlier?.revision ?? 1;
     workspace.change('write finding', `claim ${claimId} · revision ${revision}`, (change) => {
-      const record = { claimId, revision, ...words, resultIds: currentResults(project, claimId), reason: earlier?.reason ?? '', isSigned: false };
+      const record = {
+        claimId,
+        revision,
+        ...words,
+        resultIds: currentResults(project, claimId),
+        reason: earlier?.reason ?? '',
+        isSigned: false,
+      };
       return earlier ? change.put('finding', { ...record, id: earlier.id }) : change.add('finding', record);
     });
     return claimView(project, claimId);
@@ -43,7 +50,8 @@ export const findingHandlers: Handlers<'finding.save' | 'finding.sign' | 'findin
   'finding.revise'({ claimId, reason }, { workspace }) {
     const project = workspace.open();
     const finding = latestFinding(project, claimId);
-    if (!finding?.isSigned) throw unfinished(claimId, 'a signed finding to revise', finding ? 'an unsigned one' : 'none yet');
+    if (!finding?.isSigned)
+      throw unfinished(claimId, 'a signed finding to revise', finding ? 'an unsigned one' : 'none yet');
     const { id: _id, ...signed } = finding;
     workspace.change('revise finding', `claim ${claimId} · revision ${finding.revision + 1}`, (change) =>
       change.add('finding', { ...signed, revision: finding.revision + 1, reason, isSigned: false }),
@@ -74,21 +82,37 @@ function refuseUnfinished(project: Project, finding: Finding): void {
   }
   const { unknown } = fillIn(finding.text, view.fillIns);
   if (unknown.length > 0) {
-    throw unfinished(finding.claimId, `figures that exist (${Object.keys(view.fillIns).join(', ')})`, `{${unknown.join('}, {')}}`);
+    throw unfinished(
+      finding.claimId,
+      `figures that exist (${Object.keys(view.fillIns).join(', ')})`,
+      `{${unknown.join('}, {')}}`,
+    );
   }
   const stale = [view.derivation, view.recomputation, view.assumptions, view.sweep].filter((stored) => stored?.isStale);
   if (stale.length > 0) {
-    throw unfinished(finding.claimId, 'results that belong to the claim as it is now', `${stale.length} from before a change`);
+    throw unfinished(
+      finding.claimId,
+      'results that belong to the claim as it is now',
+      `${stale.length} from before a change`,
+    );
   }
   const current = currentResults(project, finding.claimId);
   if (current.join() !== finding.resultIds.join()) {
-    throw unfinished(finding.claimId, 'a finding written on the newest results', 'results that came after it; save it again');
+    throw unfinished(
+      finding.claimId,
+      'a finding written on the newest results',
+      'results that came after it; save it again',
+    );
   }
   const unmarked = (view.assumptions?.answer.outcomes ?? []).filter(
     (outcome) => outcome.weight === 'decisive' && !view.marks.some((mark) => mark.assumptionId === outcome.id),
   );
   if (unmarked.length > 0) {
-    throw unfinished(finding.claimId, 'your mark on every decisive assumption', `none on ${unmarked.map((outcome) => outcome.id).join(', ')}`);
+    throw unfinished(
+      finding.claimId,
+      'your mark on every decisive assumption',
+      `none on ${unmarked.map((outcome) => outcome.id).join(', ')}`,
+    );
   }
 }
 

@@ -53,10 +53,23 @@ export interface CoreOptions {
   now?: () => string;
 }
 
-export function createCore({ host, jobs, installation, home, reviewerIfUnknown, now = () => new Date().toISOString() }: CoreOptions): Core {
+export function createCore({
+  host,
+  jobs,
+  installation,
+  home,
+  reviewerIfUnknown,
+  now = () => new Date().toISOString(),
+}: CoreOptions): Core {
   const root = home ?? process.env['FOOTING_HOME'] ?? join(homedir(), 'Footing');
   const places = { home: join(root, 'reviewer'), projects: root, demoProjects: join(installation, 'demo-projects') };
-  const context: HandlerContext = { host, places, jobs, workspace: createWorkspace(identityStore(places.home), now), now };
+  const context: HandlerContext = {
+    host,
+    places,
+    jobs,
+    workspace: createWorkspace(identityStore(places.home), now),
+    now,
+  };
   if (reviewerIfUnknown) context.workspace.assumeReviewer(reviewerIfUnknown);
   // Requests that write take turns, so that what one read is still true when it writes.
   let turn: Promise<unknown> = Promise.resolve();
@@ -113,7 +126,14 @@ function errorAnswer(error: unknown, name: RequestName): ErrorAnswer {
     return { kind: error.name as ErrorAnswer['kind'], code, where, expected, received, hint };
   }
   if (error instanceof JobCancelled) {
-    return { kind: 'Cancelled', code: 'cancelled', where: name, expected: 'a finished computation', received: error.message, hint: '' };
+    return {
+      kind: 'Cancelled',
+      code: 'cancelled',
+      where: name,
+      expected: 'a finished computation',
+      received: error.message,
+      hint: '',
+    };
   }
   const message = error instanceof Error ? error.message : String(error);
   return {

@@ -22,9 +22,14 @@ export async function openDemo(context: HandlerContext, directory: string): Prom
   mkdirSync(resolve(directory), { recursive: true });
   workspace.replace(null);
   const path = freePath(directory, example.title);
-  workspace.replace(createProject(path, { title: example.title, isInvented: true, holder: holder(context), ...workspace.signed() }));
+  workspace.replace(
+    createProject(path, { title: example.title, isInvented: true, holder: holder(context), ...workspace.signed() }),
+  );
 
-  const read = (inside: string) => ({ name: basename(inside), bytes: readFileSync(join(folder, inside)).toString('base64') });
+  const read = (inside: string) => ({
+    name: basename(inside),
+    bytes: readFileSync(join(folder, inside)).toString('base64'),
+  });
   for (const { path: inside, ...source } of example.sources) {
     await sourceHandlers['source.save']({ ...source, file: inside ? read(inside) : null }, context);
   }
@@ -35,7 +40,10 @@ export async function openDemo(context: HandlerContext, directory: string): Prom
   for (const step of example.claims) await reviewClaim(step, context);
 }
 
-async function reviewClaim({ claim, minYears, marks, notes, finding }: WorkedExample['claims'][number], context: HandlerContext) {
+async function reviewClaim(
+  { claim, minYears, marks, notes, finding }: WorkedExample['claims'][number],
+  context: HandlerContext,
+) {
   const created = await claimHandlers['claim.create'](claim, context);
   const claimId = created.claim.id;
   if (created.claim.derivation.length > 0) await runClaimMethod(context, claimId, 'derivation', {});

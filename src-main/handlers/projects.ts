@@ -34,7 +34,12 @@ export const projectHandlers: Handlers<Names> = {
         .filter((entry) => entry.isFile() && entry.name.endsWith('.footing'))
         .map((entry) => {
           const path = join(folder, entry.name);
-          return { path, fileName: entry.name, title: readProjectTitle(path), modifiedAt: statSync(path).mtime.toISOString() };
+          return {
+            path,
+            fileName: entry.name,
+            title: readProjectTitle(path),
+            modifiedAt: statSync(path).mtime.toISOString(),
+          };
         })
         .sort((one, other) => other.modifiedAt.localeCompare(one.modifiedAt)),
     };
@@ -53,7 +58,8 @@ export const projectHandlers: Handlers<Names> = {
   'project.open'({ path, readOnly = false }, context) {
     const { workspace } = context;
     const file = resolve(path);
-    if (workspace.project?.path === file && workspace.project.isReadOnly === readOnly) return projectView(workspace.project);
+    if (workspace.project?.path === file && workspace.project.isReadOnly === readOnly)
+      return projectView(workspace.project);
     if (workspace.project?.path === file) workspace.replace(null);
     workspace.replace(openProject(file, { readOnly, holder: holder(context) }));
     return projectView(workspace.open());
@@ -73,7 +79,9 @@ export const projectHandlers: Handlers<Names> = {
 
   'project.rename'({ title }, { workspace }) {
     const project = workspace.open();
-    workspace.change('rename project', title, (change) => change.put('project', { ...project.get('project', 1), title }));
+    workspace.change('rename project', title, (change) =>
+      change.put('project', { ...project.get('project', 1), title }),
+    );
     return projectView(project);
   },
 

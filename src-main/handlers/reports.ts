@@ -87,7 +87,9 @@ function reportClaim(project: Project, claimId: number): ReportClaim {
     datasets: project.list('dataset').filter((dataset) => datasetIds.has(dataset.id)),
     series: used,
     notes: view.notes,
-    results: project.list('result').filter((result) => result.claimId === claimId && (cited.size === 0 || cited.has(result.id))),
+    results: project
+      .list('result')
+      .filter((result) => result.claimId === claimId && (cited.size === 0 || cited.has(result.id))),
   };
 }
 

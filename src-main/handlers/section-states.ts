@@ -6,7 +6,8 @@ type State = Sections['statement'];
 /** How far each section of a sheet has come, read from what is there. */
 export function sectionStates(view: Omit<ClaimView, 'sections'>): Sections {
   const { claim, questions, derivation, recomputation, assumptions, sweep, marks, findings } = view;
-  const computed = (stored: { isStale: boolean } | null): State => (!stored ? 'untouched' : stored.isStale ? 'in progress' : 'done');
+  const computed = (stored: { isStale: boolean } | null): State =>
+    !stored ? 'untouched' : stored.isStale ? 'in progress' : 'done';
   const marked = new Set(marks.map((mark) => mark.assumptionId));
   const isEveryWeightyOneMarked = (assumptions?.answer.outcomes ?? []).every(
     (outcome) => outcome.weight === null || outcome.weight === 'negligible' || marked.has(outcome.id),
@@ -14,7 +15,8 @@ export function sectionStates(view: Omit<ClaimView, 'sections'>): Sections {
   const finding = findings.at(-1);
   return {
     statement: questions.every((question) => question.answer !== null) ? 'done' : 'in progress',
-    arithmetic: claim.derivation.length === 0 ? 'untouched' : derivation && !derivation.isStale ? 'done' : 'in progress',
+    arithmetic:
+      claim.derivation.length === 0 ? 'untouched' : derivation && !derivation.isStale ? 'done' : 'in progress',
     data: view.obstacles.length === 0 ? 'done' : claim.procedure ? 'in progress' : 'untouched',
     recomputation: computed(recomputation),
     assumptions: computed(assumptions) === 'done' && !isEveryWeightyOneMarked ? 'in progress' : computed(assumptions),

@@ -2,7 +2,10 @@ import type { XyFigure } from '../contract/figure.ts';
 import type { Series, SeriesValues } from '../contract/series.ts';
 
 /** A series over time, with its limits as a band where the provider gives them. */
-export function seriesFigure(series: Series, { years, months, values, lower, upper, boundsLevelPercent }: SeriesValues): XyFigure {
+export function seriesFigure(
+  series: Series,
+  { years, months, values, lower, upper, boundsLevelPercent }: SeriesValues,
+): XyFigure {
   const x = years.map((year, place) => (months ? year + ((months[place] ?? 1) - 0.5) / 12 : year));
   const level = boundsLevelPercent === null ? '' : ` (${Number(boundsLevelPercent.toFixed(1))} %)`;
   const band = { label: `provider’s limits${level}`, mark: 'band' as const, x, role: 'data' as const };

@@ -49,7 +49,15 @@ function rowsOf(assumptions: AssumptionsAnswer | null, claim: Claim): StemFigure
   }
   return assumptions.outcomes.flatMap(({ id, alternative }) =>
     alternative && alternative.unit === claim.statement.unit
-      ? [{ label: shortTitleOf(id), value: alternative.value, interval: alternative.interval, quantity: alternative.quantity, isCumulative: false }]
+      ? [
+          {
+            label: shortTitleOf(id),
+            value: alternative.value,
+            interval: alternative.interval,
+            quantity: alternative.quantity,
+            isCumulative: false,
+          },
+        ]
       : [],
   );
 }
@@ -74,8 +82,11 @@ function bandsOf(published: readonly PublishedValue[], unit: Claim['statement'][
 
 function captionOf(rows: StemFigure['rows'], isRecomputed: boolean): string {
   if (!isRecomputed) return 'The stated number with its rounding interval. Nothing has been recomputed yet.';
-  if (rows.length === 0) return 'The stated number with its rounding interval, and the recomputed one with its 95 % interval.';
-  const order = rows[0]?.isCumulative ? 'Each row applies one more change to the row above it' : 'Each row changes one assumption';
+  if (rows.length === 0)
+    return 'The stated number with its rounding interval, and the recomputed one with its 95 % interval.';
+  const order = rows[0]?.isCumulative
+    ? 'Each row applies one more change to the row above it'
+    : 'Each row changes one assumption';
   const equilibrium = rows.filter((row) => row.quantity === 'effective-climate-sensitivity').length;
   const kinds =
     equilibrium === 0

@@ -22,7 +22,10 @@ export function serveJobs(port: MessagePort): void {
     } catch (error) {
       const message = error instanceof Error ? error.message : String(error);
       const known = isFootingError(error);
-      send({ kind: 'error', error: { name: known ? error.name : 'Error', fields: known ? error.fields : null, message } });
+      send({
+        kind: 'error',
+        error: { name: known ? error.name : 'Error', fields: known ? error.fields : null, message },
+      });
     }
   });
 }

@@ -112,5 +112,7 @@ export function workerRunner(workerFile: string, now: () => number = () => perfo
 
 /** Errors lose their class on the way out of a worker; the fields do not. */
 function revive({ name, fields, message }: { name: string; fields: ErrorFields | null; message: string }): Error {
-  return fields && name in errorClasses ? new errorClasses[name as keyof typeof errorClasses](fields) : new Error(message);
+  return fields && name in errorClasses
+    ? new errorClasses[name as keyof typeof errorClasses](fields)
+    : new Error(message);
 }

@@ -43,7 +43,10 @@ export const claimCommands: Command[] = [
         recomputation: recomputation?.answer ?? null,
         derivation: derivation?.answer ?? null,
       }));
-      return { json: args.has('claim') ? json[0] : json, text: views.map(recomputationText).join('\n\n') || 'No claims yet.' };
+      return {
+        json: args.has('claim') ? json[0] : json,
+        text: views.map(recomputationText).join('\n\n') || 'No claims yet.',
+      };
     },
   },
   {
@@ -71,15 +74,16 @@ export const claimCommands: Command[] = [
       await tools.ask('project.open', { path: args.positionals[0] ?? '' });
       const claimId = await claimNumber(args, tools);
       const minYears = Number(args.option('min-years') ?? 20);
-      if (!Number.isInteger(minYears)) throw badUsage('--min-years', 'a whole number of years', args.option('min-years') ?? '');
+      if (!Number.isInteger(minYears))
+        throw badUsage('--min-years', 'a whole number of years', args.option('min-years') ?? '');
       const { sweep } = await tools.ask('claim.sweep', { claimId, minYears });
       if (!sweep) return { json: null, text: 'No sweep.' };
       const { valueQuantiles: q, windows, stated, unit, shareAtOrBelowStated } = sweep.answer;
       const text = [
         `${windows.length} windows of at least ${minYears} years, in ${unit}:`,
-        `  lowest ${formatNumber(q.min, 2)} · 5 % ${formatNumber(q.q05, 2)} · middle ${formatNumber(q.q50, 2)} · 95 % ${formatNumber(q.q95, 2)} · highest ${formatNumber(q.max, 2)}`,
-        `  the stated window ${stated.window.start}–${stated.window.end} gives ${formatNumber(stated.value, 2)}, percentile ${formatNumber(stated.percentile, 0)}`,
-        `  ${formatNumber(100 * shareAtOrBelowStated, 0)} % of the windows lie at or below the stated number`,
+        `  lowest ${formatNumber(q.min, { decimals: 2 })} · 5 % ${formatNumber(q.q05, { decimals: 2 })} · middle ${formatNumber(q.q50, { decimals: 2 })} · 95 % ${formatNumber(q.q95, { decimals: 2 })} · highest ${formatNumber(q.max, { decimals: 2 })}`,
+        `  the stated window ${stated.window.start}–${stated.window.end} gives ${formatNumber(stated.value, { decimals: 2 })}, percentile ${formatNumber(stated.percentile, { decimals: 0 })}`,
+        `  ${formatNumber(100 * shareAtOrBelowStated, { decimals: 0 })} % of the windows lie at or below the stated number`,
       ];
       return { json: sweep.answer, text: text.join('\n') };
     },
@@ -99,7 +103,12 @@ export const claimCommands: Command[] = [
       if (!value.success) throw badUsage('MARK', `one of ${markValue.options.join(', ')}`, mark);
       await tools.ask('project.open', { path });
       const claimId = await claimNumber(args, tools);
-      const view = await tools.ask('claim.mark', { claimId, assumptionId: id.data, mark: value.data, note: args.option('note') ?? '' });
+      const view = await tools.ask('claim.mark', {
+        claimId,
+        assumptionId: id.data,
+        mark: value.data,
+        note: args.option('note') ?? '',
+      });
       return { json: view.marks, text: `claim ${claimId} · ${id.data}: ${value.data}` };
     },
   },
@@ -110,27 +119,46 @@ function readDraft(file: string, text: string): ClaimDraft {
   try {
     value = JSON.parse(text);
   } catch (error) {
-    throw badUsage(file, 'JSON', error instanceof Error ? error.message : String(error), 'footing schema claim prints the form.');
+    throw badUsage(
+      file,
+      'JSON',
+      error instanceof Error ? error.message : String(error),
+      'footing schema claim prints the form.',
+    );
   }
   const draft = claimDraft.safeParse(value);
   if (draft.success) return draft.data;
   const [issue] = draft.error.issues;
-  throw badUsage(`${file}, ${issue?.path.join('.') || 'top level'}`, 'what footing schema claim prints', issue?.message ?? 'something else');
+  throw badUsage(
+    `${file}, ${issue?.path.join('.') || 'top level'}`,
+    'what footing schema claim prints',
+    issue?.message ?? 'something else',
+  );
 }
 
 function recomputationText({ claim, recomputation, derivation }: ClaimView): string {
   const lines = [`claim ${claim.id}  ${claim.title}`];
   for (const line of derivation?.answer.lines ?? []) {
-    const verdict = line.problem ?? (line.agrees === null ? 'nothing stated to compare with' : line.agrees ? 'agrees' : `does not agree${line.likelySlip ? `: ${line.likelySlip}` : ''}`);
+    const verdict =
+      line.problem ??
+      (line.agrees === null
+        ? 'nothing stated to compare with'
+        : line.agrees
+          ? 'agrees'
+          : `does not agree${line.likelySlip ? `: ${line.likelySlip}` : ''}`);
     lines.push(`  ${line.line}   ${verdict}`);
   }
   if (!recomputation) return [...lines, '  not recomputed'].join('\n');
   const { value, standardError, unit, interval95, agreement, fit, caveats } = recomputation.answer;
-  lines.push(`  ${formatNumber(value, 4)} ± ${standardError === null ? '?' : formatNumber(standardError, 4)} ${unit}${interval95 ? ` (95 %: ${intervalText(interval95)})` : ''}`);
+  lines.push(
+    `  ${formatNumber(value, { decimals: 4 })} ± ${standardError === null ? '?' : formatNumber(standardError, { decimals: 4 })} ${unit}${interval95 ? ` (95 %: ${intervalText(interval95)})` : ''}`,
+  );
   lines.push(`  ${agreement.sentence}`);
   if (fit) {
     const { diagnostics } = fit;
-    lines.push(`  R² centred ${formatNumber(diagnostics.rSquaredCentred, 3)}, uncentred ${formatNumber(diagnostics.rSquaredUncentred, 3)} · Durbin–Watson ${formatNumber(diagnostics.durbinWatson, 2)} · effective years ${formatNumber(diagnostics.effectiveSampleSize, 1)} of ${diagnostics.nObs}`);
+    lines.push(
+      `  R² centred ${formatNumber(diagnostics.rSquaredCentred, { decimals: 3 })}, uncentred ${formatNumber(diagnostics.rSquaredUncentred, { decimals: 3 })} · Durbin–Watson ${formatNumber(diagnostics.durbinWatson, { decimals: 2 })} · effective years ${formatNumber(diagnostics.effectiveSampleSize, { decimals: 1 })} of ${diagnostics.nObs}`,
+    );
   }
   return [...lines, ...caveats.map((caveat) => `  note: ${caveat.detail}`)].join('\n');
 }
@@ -140,20 +168,35 @@ function ledgerText({ claim, assumptions }: ClaimView): string {
   const { outcomes, ladder } = assumptions.answer;
   const rows = outcomes.map(({ id, test, alternative, weight, proposal, missing }) => [
     id,
-    alternative ? `${formatNumber(alternative.value, 2)}${alternative.interval ? ` (${intervalText(alternative.interval)})` : ''}` : '–',
+    alternative
+      ? `${formatNumber(alternative.value, { decimals: 2 })}${alternative.interval ? ` (${intervalText(alternative.interval)})` : ''}`
+      : '–',
     weight ?? 'untested',
     missing ? `${missing.reason} ${missing.wouldNeed}` : `${test}; proposed: ${proposal.mark}`,
   ]);
-  const lines = [`claim ${claim.id}  ${claim.title}`, textTable([['assumption', 'moves it to', 'weight', 'test'], ...rows])];
+  const lines = [
+    `claim ${claim.id}  ${claim.title}`,
+    textTable([['assumption', 'moves it to', 'weight', 'test'], ...rows]),
+  ];
   if (ladder) {
-    const rungs = ladder.rungs.map(({ label, value, interval90, quantity }) => [label, formatNumber(value, 2), intervalText(interval90), quantity]);
+    const rungs = ladder.rungs.map(({ label, value, interval90, quantity }) => [
+      label,
+      formatNumber(value, { decimals: 2 }),
+      intervalText(interval90),
+      quantity,
+    ]);
     const { value, interval90, quantity } = ladder.start;
     lines.push('', `The ladder, ${ladder.unit}, 5–95 % (seed ${ladder.random.seed}, ${ladder.random.nDraws} draws)`);
-    lines.push(textTable([['as recomputed', formatNumber(value, 2), intervalText(interval90), quantity], ...rungs]));
+    lines.push(
+      textTable([
+        ['as recomputed', formatNumber(value, { decimals: 2 }), intervalText(interval90), quantity],
+        ...rungs,
+      ]),
+    );
   }
   return lines.join('\n');
 }
 
 function intervalText({ low, high }: Interval): string {
-  return `${low === null ? 'unbounded' : formatNumber(low, 2)} to ${high === null ? 'unbounded' : formatNumber(high, 2)}`;
+  return `${low === null ? 'unbounded' : formatNumber(low, { decimals: 2 })} to ${high === null ? 'unbounded' : formatNumber(high, { decimals: 2 })}`;
 }

@@ -77,10 +77,16 @@ export async function claimNumber(args: CommandArguments, tools: CommandTools): 
   const { claims } = await tools.ask('project.view', {});
   const [only, ...others] = claims;
   if (only && others.length === 0) return only.id;
-  throw badUsage('--claim', 'the number of a claim', only ? `none, and ${claims.length} to choose from` : 'none, and no claim in the project');
+  throw badUsage(
+    '--claim',
+    'the number of a claim',
+    only ? `none, and ${claims.length} to choose from` : 'none, and no claim in the project',
+  );
 }
 
-export const claimOption = { claim: { value: 'N', help: 'number of the claim; may be left out when there is only one' } };
+export const claimOption = {
+  claim: { value: 'N', help: 'number of the claim; may be left out when there is only one' },
+};
 export const reviewerOptions = {
   reviewer: { value: 'NAME', help: 'who is reviewing; kept for the next time' },
   role: { value: 'ROLE', help: 'the reviewer’s role' },

@@ -15,7 +15,8 @@ export const computeCommands: Command[] = [
       const text = file === '-' ? await tools.readStandardInput() : tools.readFile(file).toString('utf8');
       const request = parseJson(file, text);
       const answers = [];
-      for (const one of Array.isArray(request) ? request : [request]) answers.push(answerOf(await tools.tryAsk('compute', one)));
+      for (const one of Array.isArray(request) ? request : [request])
+        answers.push(answerOf(await tools.tryAsk('compute', one)));
       const isEveryOneDone = answers.every((answer) => answer.ok);
       const json = Array.isArray(request) ? answers : answers[0];
       return { json, text: '', status: isEveryOneDone ? 0 : 2 };
@@ -41,7 +42,11 @@ function parseJson(file: string, text: string): unknown {
   try {
     return JSON.parse(text);
   } catch (error) {
-    throw badUsage(file === '-' ? 'standard input' : file, 'JSON', error instanceof Error ? error.message : String(error));
+    throw badUsage(
+      file === '-' ? 'standard input' : file,
+      'JSON',
+      error instanceof Error ? error.message : String(error),
+    );
   }
 }
 

@@ -23,7 +23,9 @@ export const dataCommands: Command[] = [
       unit: { value: 'U', help: 'unit, where the file does not give it' },
       baseline: { value: 'A-B', help: 'baseline period, such as 1951-1980' },
       licence: { value: 'TEXT', help: 'licence or source note, kept with the file' },
-      'refuse-bad-rows': { help: 'import nothing when a row cannot be used; otherwise such rows are left out, listed and recorded' },
+      'refuse-bad-rows': {
+        help: 'import nothing when a row cannot be used; otherwise such rows are left out, listed and recorded',
+      },
     },
     async run(args, tools) {
       const [path = '', ...files] = args.positionals;
@@ -46,14 +48,25 @@ export const dataCommands: Command[] = [
           ...(licence === undefined ? {} : { licence }),
         });
         const series = project.series.filter((row) => seriesIds.includes(row.id));
-        imported.push({ file, datasetId, reader: preview.reader, nRows: preview.nRows, leftOut: preview.badRows, notes: preview.notes, series });
+        imported.push({
+          file,
+          datasetId,
+          reader: preview.reader,
+          nRows: preview.nRows,
+          leftOut: preview.badRows,
+          notes: preview.notes,
+          series,
+        });
       }
       const text = imported.flatMap(({ file, reader, nRows, leftOut, notes, series }) => [
         `${file}: ${reader.title} (${reader.why})`,
         `  ${nRows} rows read, ${leftOut.length} left out`,
         ...leftOut.map(badRowLine),
         ...notes.map((note) => `  note: ${note}`),
-        ...series.map((row) => `  series ${row.id} ${row.name}: ${row.quantity}, ${row.unit || 'unit unknown'}, ${row.startYear}–${row.endYear} by ${row.step}, ${row.nMissing} missing, ${row.nAbsent} absent`),
+        ...series.map(
+          (row) =>
+            `  series ${row.id} ${row.name}: ${row.quantity}, ${row.unit || 'unit unknown'}, ${row.startYear}–${row.endYear} by ${row.step}, ${row.nMissing} missing, ${row.nAbsent} absent`,
+        ),
       ]);
       return { json: imported, text: text.join('\n') };
     },
@@ -77,7 +90,10 @@ export const dataCommands: Command[] = [
         row.baseline ? `vs ${row.baseline.start}–${row.baseline.end}` : 'no baseline',
         row.valuesDigest.slice(0, 12),
       ]);
-      return { json: series, text: rows.length > 0 ? textTable(rows) : 'No series yet. footing import FILE DATA… brings some in.' };
+      return {
+        json: series,
+        text: rows.length > 0 ? textTable(rows) : 'No series yet. footing import FILE DATA… brings some in.',
+      };
     },
   },
   {
@@ -102,7 +118,10 @@ export const dataCommands: Command[] = [
           file: { name: basename(file), bytes: tools.readFile(file).toString('base64') },
         });
       }
-      const text = view.sources.map((source) => `source ${source.id}  ${source.title} (${source.kind})  ${source.file?.digest.slice(0, 12) ?? 'no file'}`);
+      const text = view.sources.map(
+        (source) =>
+          `source ${source.id}  ${source.title} (${source.kind})  ${source.file?.digest.slice(0, 12) ?? 'no file'}`,
+      );
       return { json: view.sources, text: text.join('\n') };
     },
   },
@@ -110,13 +129,24 @@ export const dataCommands: Command[] = [
 
 function chooseSeries(preview: ImportPreview, args: CommandArguments, nFiles: number): SeriesChoice[] {
   const keys = args.options('series');
-  const taken = preview.series.filter((series) => (keys.length > 0 ? keys.includes(series.key) : args.has('all') || series.isMain));
+  const taken = preview.series.filter((series) =>
+    keys.length > 0 ? keys.includes(series.key) : args.has('all') || series.isMain,
+  );
   if (taken.length === 0) {
-    throw badUsage('--series', `one of ${preview.series.map((series) => series.key).join(', ')}`, keys.join(', ') || 'none');
+    throw badUsage(
+      '--series',
+      `one of ${preview.series.map((series) => series.key).join(', ')}`,
+      keys.join(', ') || 'none',
+    );
   }
   const name = args.option('as');
   if (name !== undefined && (taken.length > 1 || nFiles > 1)) {
-    throw badUsage('--as', 'one file and one series to name', `${nFiles} file(s), ${taken.length} series`, 'Choose one with --series.');
+    throw badUsage(
+      '--as',
+      'one file and one series to name',
+      `${nFiles} file(s), ${taken.length} series`,
+      'Choose one with --series.',
+    );
   }
   const quantity = args.option('quantity');
   const known = seriesQuantity.safeParse(quantity);

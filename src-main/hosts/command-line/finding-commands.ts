@@ -49,7 +49,8 @@ export const findingCommands: Command[] = [
     },
     async run(args, tools) {
       const meaning = signatureMeaning.safeParse(args.option('meaning') ?? 'sign-off');
-      if (!meaning.success) throw badUsage('--meaning', `one of ${signatureMeaning.options.join(', ')}`, args.option('meaning') ?? '');
+      if (!meaning.success)
+        throw badUsage('--meaning', `one of ${signatureMeaning.options.join(', ')}`, args.option('meaning') ?? '');
       await tools.ask('project.open', { path: args.positionals[0] ?? '' });
       const claimId = await claimNumber(args, tools);
       const { reviewer } = await tools.ask('session.get', {});
@@ -59,7 +60,12 @@ export const findingCommands: Command[] = [
         const made = await tools.ask('identity.create', { passphrase });
         tools.tell(`Made a signing key: ${made.fingerprint ?? ''}`);
       }
-      const view = await tools.ask('finding.sign', { claimId, passphrase, meaning: meaning.data, remark: args.option('remark') ?? '' });
+      const view = await tools.ask('finding.sign', {
+        claimId,
+        passphrase,
+        meaning: meaning.data,
+        remark: args.option('remark') ?? '',
+      });
       const signature = view.signatures.at(-1);
       const check = view.signatureChecks.at(-1);
       return {
@@ -101,7 +107,13 @@ export const findingCommands: Command[] = [
       const wanted = (args.option('format') ?? 'html').split(',');
       const known = formats.filter((format) => wanted.includes(format));
       const unknown = wanted.filter((format) => !(formats as readonly string[]).includes(format));
-      if (unknown.length > 0) throw badUsage('--format', formats.join(' or '), unknown.join(', '), 'Print the HTML report in a browser for a PDF.');
+      if (unknown.length > 0)
+        throw badUsage(
+          '--format',
+          formats.join(' or '),
+          unknown.join(', '),
+          'Print the HTML report in a browser for a PDF.',
+        );
       await tools.ask('project.open', { path: args.positionals[0] ?? '', readOnly: true });
       const { files } = await tools.ask('report.write', { directory, formats: known });
       return { json: files, text: files.join('\n') };

@@ -13,8 +13,14 @@ export const projectCommands: Command[] = [
     nPositionals: { min: 1, max: 1 },
     options: { title: { value: 'TITLE', help: 'title of the review; the file name unless given' } },
     async run({ positionals: [path = ''], option }, tools) {
-      const view = await tools.ask('project.create', { path, title: option('title') ?? path.replace(/^.*[\\/]|\.footing$/g, '') });
-      return { json: view, text: `${view.path}\n${view.project.title} · trail ${view.head.sequence} ${view.head.hash}` };
+      const view = await tools.ask('project.create', {
+        path,
+        title: option('title') ?? path.replace(/^.*[\\/]|\.footing$/g, ''),
+      });
+      return {
+        json: view,
+        text: `${view.path}\n${view.project.title} · trail ${view.head.sequence} ${view.head.hash}`,
+      };
     },
   },
   {
@@ -30,7 +36,10 @@ export const projectCommands: Command[] = [
         await signDemo(tools, claim.id);
         tools.tell(`Claim ${claim.id}: ${claim.title} — signed.`);
       }
-      const { files } = await tools.ask('report.write', { directory: join(directory, 'report'), formats: ['html', 'json'] });
+      const { files } = await tools.ask('report.write', {
+        directory: join(directory, 'report'),
+        formats: ['html', 'json'],
+      });
       const check = await tools.ask('project.verify', {});
       const recheck = await tools.ask('project.recheck', {});
       const claims = (await tools.ask('project.view', {})).claims;
@@ -38,7 +47,9 @@ export const projectCommands: Command[] = [
         json: { project: view.path, report: files, claims, verify: check, recheck },
         text: [
           `Project  ${view.path} (invented data)`,
-          ...claims.map((claim) => `Claim ${claim.id}  ${claim.title}: ${claim.status}${claim.isSigned ? ', signed' : ''}`),
+          ...claims.map(
+            (claim) => `Claim ${claim.id}  ${claim.title}: ${claim.status}${claim.isSigned ? ', signed' : ''}`,
+          ),
           ...files.map((file) => `Report   ${file}`),
           `Verified ${check.isSound ? 'sound' : 'NOT SOUND'}: ${check.nEntries} entries, head ${check.head.hash}`,
           `Recheck  ${recheck.nResults} results, ${recheck.isIdentical ? 'identical to the last digit' : 'DIFFERENT'}`,
@@ -107,21 +118,19 @@ export const projectCommands: Command[] = [
       return { json: lines, text: textTable(rows) };
     },
   },
-  ...(['undo', 'redo'] as const).map(
-    (name): Command => ({
-      name,
-      usage: 'FILE',
-      summary: name === 'undo' ? 'takes back the last change, as an entry of its own' : 'does again what was undone last',
-      examples: [`${name} review.footing`],
-      nPositionals: { min: 1, max: 1 },
-      options: {},
-      async run({ positionals: [path = ''] }, tools) {
-        const before = await open(tools, path);
-        const view = await tools.ask(`trail.${name}`, {});
-        return { json: view, text: `${name === 'undo' ? 'Undone' : 'Done again'}: ${before[name] ?? ''}` };
-      },
-    }),
-  ),
+  ...(['undo', 'redo'] as const).map((name): Command => ({
+    name,
+    usage: 'FILE',
+    summary: name === 'undo' ? 'takes back the last change, as an entry of its own' : 'does again what was undone last',
+    examples: [`${name} review.footing`],
+    nPositionals: { min: 1, max: 1 },
+    options: {},
+    async run({ positionals: [path = ''] }, tools) {
+      const before = await open(tools, path);
+      const view = await tools.ask(`trail.${name}`, {});
+      return { json: view, text: `${name === 'undo' ? 'Undone' : 'Done again'}: ${before[name] ?? ''}` };
+    },
+  })),
 ];
 
 /** The worked example is signed by its invented reviewer, with a key made for it and kept beside it. */
@@ -129,5 +138,10 @@ async function signDemo(tools: CommandTools, claimId: number): Promise<void> {
   const { reviewer } = await tools.ask('session.get', {});
   const passphrase = 'worked example, invented';
   if (!reviewer?.publicKey) await tools.ask('identity.create', { passphrase });
-  await tools.ask('finding.sign', { claimId, passphrase, meaning: 'sign-off', remark: 'Worked example with invented data.' });
+  await tools.ask('finding.sign', {
+    claimId,
+    passphrase,
+    meaning: 'sign-off',
+    remark: 'Worked example with invented data.',
+  });
 }

@@ -67,26 +67,42 @@ export async function runCommand(argv: string[], core: CommandCore, streams: Str
 function findCommand(name: string): Command {
   const command = commands.find((candidate) => candidate.name === name);
   if (command) return command;
-  throw badUsage('footing', `one of ${commands.map((candidate) => candidate.name).join(', ')}`, name, 'footing help says what each does.');
+  throw badUsage(
+    'footing',
+    `one of ${commands.map((candidate) => candidate.name).join(', ')}`,
+    name,
+    'footing help says what each does.',
+  );
 }
 
 function readArguments(command: Command, argv: string[]): CommandArguments {
   const rules = { ...command.options, ...reviewerOptions };
   const config: NonNullable<ParseArgsConfig['options']> = { json: { type: 'boolean' } };
   for (const [name, rule] of Object.entries(rules)) {
-    config[name] = { type: rule.value ? 'string' : 'boolean', multiple: 'isRepeatable' in rule && rule.isRepeatable === true };
+    config[name] = {
+      type: rule.value ? 'string' : 'boolean',
+      multiple: 'isRepeatable' in rule && rule.isRepeatable === true,
+    };
   }
   const parsed = parse(command, argv, config);
   const { min, max } = command.nPositionals;
   const count = parsed.positionals.length;
   if (count < min || count > max) {
-    throw badUsage(`footing ${command.name}`, `${command.usage || 'no further words'}`, `${count} argument(s)`, `footing help ${command.name} shows examples.`);
+    throw badUsage(
+      `footing ${command.name}`,
+      `${command.usage || 'no further words'}`,
+      `${count} argument(s)`,
+      `footing help ${command.name} shows examples.`,
+    );
   }
   const values = parsed.values as Record<string, string | boolean | (string | boolean)[] | undefined>;
   const all = (name: string) => [values[name] ?? []].flat();
   return {
     positionals: parsed.positionals,
-    option: (name) => all(name).filter((value) => typeof value === 'string').at(-1),
+    option: (name) =>
+      all(name)
+        .filter((value) => typeof value === 'string')
+        .at(-1),
     options: (name) => all(name).filter((value) => typeof value === 'string'),
     has: (name) => values[name] !== undefined,
   };
@@ -97,7 +113,12 @@ function parse(command: Command, argv: string[], options: NonNullable<ParseArgsC
     return parseArgs({ args: argv, options, allowPositionals: true });
   } catch (error) {
     const message = error instanceof Error ? error.message : String(error);
-    throw badUsage(`footing ${command.name}`, 'options that this command knows', message, `footing help ${command.name} lists them.`);
+    throw badUsage(
+      `footing ${command.name}`,
+      'options that this command knows',
+      message,
+      `footing help ${command.name} lists them.`,
+    );
   }
 }
 
@@ -113,7 +134,12 @@ function commandTools(core: CommandCore, streams: Streams): CommandTools {
       try {
         return readFileSync(path);
       } catch (error) {
-        throw badUsage(path, 'a file that can be read', error instanceof Error ? error.message : String(error), 'Check the path.');
+        throw badUsage(
+          path,
+          'a file that can be read',
+          error instanceof Error ? error.message : String(error),
+          'Check the path.',
+        );
       }
     },
     async readStandardInput() {
@@ -125,7 +151,12 @@ function commandTools(core: CommandCore, streams: Streams): CommandTools {
       const given = streams.environment['FOOTING_PASSPHRASE'];
       if (given !== undefined) return given;
       if (!streams.isTerminal) {
-        throw badUsage('Passphrase', `a passphrase ${purpose}`, 'none', 'Set FOOTING_PASSPHRASE, or run in a terminal to be asked.');
+        throw badUsage(
+          'Passphrase',
+          `a passphrase ${purpose}`,
+          'none',
+          'Set FOOTING_PASSPHRASE, or run in a terminal to be asked.',
+        );
       }
       const terminal = createInterface({ input: process.stdin, output: process.stderr });
       const answer = await terminal.question(`Passphrase ${purpose} (shown as typed): `);

@@ -1,16 +1,16 @@
-import tCdf from '@stdlib/stats-base-dists-t-cdf';
 import { finiteNumber } from './finite-values.ts';
+import { upperTailF } from './upper-tail-f.ts';
 
 /**
- * Two-sided p-value of a t statistic, taken from the lower tail, so that it keeps its digits when it is tiny
- * (1 − F(t) would be 0 or rounding from t ≈ 9 on).
+ * Two-sided p-value of a t statistic: P(|T| > |t|), as the upper tail of t², which is F with 1 and ν degrees of freedom.
+ * Tiny values keep their digits (2(1 − F(|t|)) has none left at t ≈ 9).
  *
  * @throws   InputError out-of-range
  *
  * Checked  test/reference/statistics/distributions.test.ts (B: R's pt over the tails)
  */
 export function twoSidedP(t: number, degreesOfFreedom: number): number {
-  finiteNumber('twoSidedP', 't', t);
+  finiteNumber('twoSidedP', 't', t, { atLeast: -1e150, atMost: 1e150 });
   finiteNumber('twoSidedP', 'degreesOfFreedom', degreesOfFreedom, { above: 0 });
-  return 2 * tCdf(-Math.abs(t), degreesOfFreedom);
+  return upperTailF(t ** 2, 1, degreesOfFreedom);
 }

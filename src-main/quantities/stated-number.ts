@@ -3,7 +3,7 @@ import type { Agreement } from '../contract/result.ts';
 import { InputError } from '../errors.ts';
 import { formatNumber, formatQuantity } from './notation.ts';
 
-const printedNumber = /^([+\-−]?)(?:(\d+)(?:[.,](\d*))?|[.,](\d+))(?:[eE]([+-]?\d{1,3}))?$/;
+const printedNumber = /^([+\-−]?)(?:(\d+)(?:[.,](\d*))?|[.,](\d+))(?:[eE]([+\-−]?\d{1,3}))?$/;
 
 interface PrintedDigits {
   isNegative: boolean;
@@ -106,6 +106,12 @@ export function decimalsPrinted(text: string): number {
   return Math.max(0, -readDigits(text).lastPlace);
 }
 
+/** Digits from the first that is not zero: 1.90 has three, 0.05 has one. */
+export function significantDigitsPrinted(text: string): number {
+  const { digits } = readDigits(text);
+  return digits === 0n ? 1 : digits.toString().length;
+}
+
 function printedText(text: string): string {
   return text.trim().replace(/^-/, '−');
 }
@@ -126,7 +132,7 @@ function readDigits(text: string): PrintedDigits {
   return {
     isNegative: sign === '-' || sign === '−',
     digits: BigInt(whole + decimals),
-    lastPlace: Number(exponent) - decimals.length,
+    lastPlace: Number(exponent.replace('−', '-')) - decimals.length,
   };
 }
 

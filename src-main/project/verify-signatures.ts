@@ -31,11 +31,12 @@ export function verifySignatures(tables: RawTables): { problems: VerifyProblem[]
 
 function evidenceIn({ records, contentBytes, trail }: RawTables): SignatureEvidence {
   const parsed = new Map<RecordKind, Record<string, unknown>[]>();
-  for (const [kind, rows] of records)
+  for (const [kind, rows] of records) {
     parsed.set(
       kind,
-      (rows ?? []).flatMap(({ body }) => parseObject(body) ?? []),
+      (rows ?? []).map(({ body }) => parseObject(body)).filter((record) => record !== undefined),
     );
+  }
   const hashes = new Map((trail ?? []).map(({ sequence, hash }) => [sequence, hash]));
   return {
     records: (kind) => parsed.get(kind) ?? [],

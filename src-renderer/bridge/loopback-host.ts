@@ -1,5 +1,5 @@
 import type { ProgressEvent } from '../../src-main/contract/events.ts';
-import type { Host } from './host.ts';
+import type { Host } from './host-shape.ts';
 
 /** Requests to the program that served this page: one POST each, progress as server-sent events. */
 export function loopbackHost(): Host {

@@ -1,6 +1,6 @@
 import type { RequestName } from '../../src-main/contract/request-names.ts';
 import type { Answer, ErrorAnswer, RequestInput } from '../../src-main/contract/requests.ts';
-import { currentHost } from './current-host.ts';
+import { host } from './host.ts';
 
 /** What a request answers when nobody is there to answer it. */
 export const hostGone: ErrorAnswer = {
@@ -17,7 +17,7 @@ export async function request<Name extends RequestName>(name: Name, input: Reque
   // JSON drops what must not travel: reactive proxies, functions, undefined fields.
   const inputJson = JSON.stringify(input);
   try {
-    return JSON.parse(await currentHost().send(name, inputJson)) as Answer<Name>;
+    return JSON.parse(await host().send(name, inputJson)) as Answer<Name>;
   } catch {
     return { ok: false, error: hostGone };
   }

@@ -1,11 +1,11 @@
 import { onScopeDispose, readonly, shallowRef, type ShallowRef } from 'vue';
-import { currentHost } from './current-host.ts';
+import { host } from './host.ts';
 
 /** True while the program behind this window does not answer. */
 export function useHostAbsence(): Readonly<ShallowRef<boolean>> {
   const isAway = shallowRef(false);
   onScopeDispose(
-    currentHost().onAbsence((isAwayNow) => (isAway.value = isAwayNow)),
+    host().onAbsence((isAwayNow) => (isAway.value = isAwayNow)),
     true,
   );
   return readonly(isAway);

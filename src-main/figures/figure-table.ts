@@ -17,12 +17,12 @@ function stemTable({ unit, stated, recomputed, rows, bands }: StemFigure): Figur
     rows: [
       [
         'stated' + (stated.bound === 'equals' ? '' : `, ${stated.bound}`),
-        null,
+        'limits: all that rounds to it',
         stated.value,
         stated.interval.low,
         stated.interval.high,
         null,
-        'rounds to the stated digits',
+        null,
         unit,
       ],
       ...(recomputed
@@ -62,9 +62,12 @@ function xyTable({ xLabel, yLabel, marks }: XyFigure): FigureTable {
   const shareX =
     first && marks.every(({ x }) => x.length === first.x.length && x.every((each, at) => each === first.x[at]));
   if (!shareX) {
+    const hasBand = marks.some(({ y2 }) => y2 !== null);
     return {
-      columns: ['mark', xLabel, yLabel, `${yLabel}, upper`],
-      rows: marks.flatMap(({ label, x, y, y2 }) => x.map((each, at) => [label, each, y[at] ?? null, y2?.[at] ?? null])),
+      columns: ['mark', xLabel, yLabel, ...(hasBand ? [`${yLabel}, upper`] : [])],
+      rows: marks.flatMap(({ label, x, y, y2 }) =>
+        x.map((each, at) => [label, each, y[at] ?? null, ...(hasBand ? [y2?.[at] ?? null] : [])]),
+      ),
     };
   }
   return {

@@ -24,7 +24,7 @@ export const lightPalette: Palette = {
   accent: '#0b5c63',
   stated: '#a23b12',
   bands: ['#e6e9e2', '#d6dfe3', '#e9e1ec'],
-  series: ['#0072b2', '#b85700', '#007f5f', '#a8588a', '#5f6972'],
+  series: ['#0072b2', '#007f5f', '#a8588a', '#b85700', '#5f6972'],
 };
 
 export const darkPalette: Palette = {
@@ -37,7 +37,7 @@ export const darkPalette: Palette = {
   accent: '#6fc3c4',
   stated: '#f0956a',
   bands: ['#262d2a', '#26333a', '#322a36'],
-  series: ['#56b4e9', '#e69f00', '#1fb58c', '#cc79a7', '#98a1a6'],
+  series: ['#56b4e9', '#1fb58c', '#cc79a7', '#e69f00', '#98a1a6'],
 };
 
 /** White paper; otherwise as light. */

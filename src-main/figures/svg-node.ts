@@ -3,9 +3,11 @@ export type SvgAttributes = Readonly<Record<string, string | number>>;
 /** A drawing as plain data: the screen renders it, the report writes it out, the exporter paints it. */
 export type SvgNode =
   | { readonly tag: string; readonly attributes: SvgAttributes; readonly children: readonly SvgNode[] }
-  | { readonly tag: 'text' | 'title' | 'tspan'; readonly attributes: SvgAttributes; readonly text: string };
+  | { readonly tag: 'text' | 'title' | 'tspan' | 'style'; readonly attributes: SvgAttributes; readonly text: string };
 
-export const figureFont = "'Atkinson Hyperlegible Next Variable', 'Atkinson Hyperlegible Next', system-ui, sans-serif";
+/** Greek comes from Literata: the first family has none. */
+export const figureFont =
+  "'Atkinson Hyperlegible Next Variable', 'Atkinson Hyperlegible Next', 'Literata Variable', 'Literata', sans-serif";
 
 export function shape(tag: 'line' | 'rect' | 'circle' | 'path', attributes: SvgAttributes): SvgNode {
   return { tag, attributes, children: [] };

@@ -18,6 +18,7 @@ export const stemFigure = z.object({
   ...figureFrame,
   unit: claimUnit,
   stated: z.object({
+    /** Label of its row, with the digits as printed: "Stated, at most 1.9". */
     text: z.string(),
     value: z.number(),
     bound,

@@ -28,8 +28,9 @@ export function axisDecimals({ low, high }: Domain): number {
 
 /** A domain with room at both ends; never empty. */
 export function paddedDomain(values: readonly number[], share: number): Domain {
-  const low = Math.min(...values);
-  const high = Math.max(...values);
+  // Not spread into arguments: a series can be longer than an argument list.
+  const low = values.reduce((least, value) => Math.min(least, value), Infinity);
+  const high = values.reduce((most, value) => Math.max(most, value), -Infinity);
   const length = high - low;
   const margin = length > 0 ? length * share : Math.max(Math.abs(low) * 0.1, 0.5);
   return { low: low - margin, high: high + margin };

@@ -8,13 +8,12 @@ export function stemDescription(figure: StemFigure): string {
   const decimals = axisDecimals(stemDomain(figure));
   const { stated, recomputed, rows, bands } = figure;
   const unit = figure.unit === '1' ? '' : ` ${figure.unit}`;
-  const boundWords = stated.bound === 'equals' ? '' : `${stated.bound} `;
   const row = ({ label, value, interval, quantity, isCumulative }: StemFigure['rows'][number]) =>
     `${isCumulative ? 'then ' : ''}${label}: ${formatNumber(value, { decimals })}` +
     (interval ? ` (${formatInterval(interval, '', decimals)})` : '') +
     `, ${shortQuantity(quantity)}`;
   return [
-    `Stated ${boundWords}${stated.text}${unit}`,
+    `${stated.text}${unit}`,
     recomputed
       ? `recomputed as stated ${formatNumber(recomputed.value, { decimals })}` +
         (recomputed.interval ? ` (${formatInterval(recomputed.interval, '', decimals)})` : '')

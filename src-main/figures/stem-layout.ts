@@ -1,6 +1,6 @@
 import type { StemFigure } from '../contract/figure.ts';
 import type { Interval, QuantityId } from '../contract/primitives.ts';
-import { formatInterval, formatLevel, formatNumber } from '../quantities/notation.ts';
+import { formatInterval, formatLevel, formatNumber, withUnit } from '../quantities/notation.ts';
 import { quantityNames } from '../quantities/quantity-names.ts';
 import { axisDecimals, paddedDomain, type Domain } from './axis.ts';
 import { textWidth, wrapText } from './text-width.ts';
@@ -87,7 +87,8 @@ export function stemLayout(figure: StemFigure, width: number): StemLayout {
   const drafts = draftRows(figure, decimals);
   const widest = (texts: readonly string[]) =>
     Math.ceil(Math.max(0, ...texts.map((each) => textWidth(each, stemFontSize))) * 1.03);
-  const rangeHeading = intervalHeading(figure);
+  const level = commonLevel(figure);
+  const rangeHeading = level === null ? '' : formatLevel(level);
   const valueWidth = widest(drafts.map((row) => row.valueText)) * 1.06;
   const rangeWidth = widest([rangeHeading, ...drafts.map((row) => row.rangeText)]);
   const quantityWidth = widest(drafts.map((row) => row.quantityText));
@@ -121,34 +122,34 @@ export function stemLayout(figure: StemFigure, width: number): StemLayout {
   };
 }
 
-/** What the bars are: one level for all, or none when the levels differ and each row names its own. */
-function intervalHeading({ recomputed, rows }: StemFigure): string {
-  const levels = new Set(
-    [recomputed?.interval, ...rows.map((row) => row.interval)].flatMap((each) => each?.levelPercent ?? []),
-  );
-  const [level] = levels;
-  return levels.size === 1 && level !== undefined ? formatLevel(level) : '';
+/** The level that most bars have, in per cent; null without bars. Rows of another level name their own. */
+function commonLevel({ recomputed, rows }: StemFigure): number | null {
+  const levels = [recomputed?.interval, ...rows.map((row) => row.interval)].flatMap((each) => each?.levelPercent ?? []);
+  const count = (level: number) => levels.filter((each) => each === level).length;
+  return levels.toSorted((a, b) => count(b) - count(a))[0] ?? null;
 }
 
 type DraftRow = Omit<StemRow, 'lines' | 'y' | 'height'> & { readonly label: string };
 
 function draftRows(figure: StemFigure, decimals: number): DraftRow[] {
   const { stated, recomputed } = figure;
-  const namesLevel = intervalHeading(figure) === '';
+  const level = commonLevel(figure);
   const quantities = new Set([...figure.rows, ...figure.bands].map(({ quantity }) => quantity));
   const rangeText = (interval: Interval | null) =>
     interval === null
       ? ''
-      : formatInterval(interval, '', decimals) + (namesLevel ? ` (${formatLevel(interval.levelPercent)})` : '');
-  const boundWords = stated.bound === 'equals' ? '' : `${stated.bound} `;
+      : formatInterval(interval, '', decimals) +
+        (interval.levelPercent === level ? '' : ` (${withUnit(String(interval.levelPercent), '%')})`);
+  // The digits as printed: their rounding interval is one unit of the last of them.
+  const printedDecimals = Math.max(0, Math.round(-Math.log10(stated.interval.high - stated.interval.low)));
   const statedRow: DraftRow = {
     kind: 'stated',
-    label: `Stated, ${boundWords}${stated.text}`,
+    label: stated.text,
     value: stated.value,
     interval: stated.interval,
     quantity: null,
     isCumulative: false,
-    valueText: stated.text,
+    valueText: formatNumber(stated.value, { decimals: printedDecimals }),
     rangeText: '',
     quantityText: '',
   };

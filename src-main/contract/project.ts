@@ -54,6 +54,8 @@ export const claimLine = z.object({
   id: recordId,
   title: z.string(),
   unit: z.string(),
+  /** As printed, with its bound: "at most 1.9". */
+  stated: z.string(),
   statedValue: z.number(),
   recomputed: z.object({ value: z.number(), low: z.number().nullable(), high: z.number().nullable() }).nullable(),
   /** "not begun", "in review", or the conclusion. */

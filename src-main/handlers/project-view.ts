@@ -20,6 +20,7 @@ export function projectView(project: Project): ProjectView {
 
 function claimLine(project: Project, claimId: number): ClaimLine {
   const claim = project.get('claim', claimId);
+  const { bound, value, unit } = claim.statement;
   const recomputation = latestAnswer(project, claimId, 'recomputation');
   const finding = project
     .list('finding')
@@ -28,8 +29,9 @@ function claimLine(project: Project, claimId: number): ClaimLine {
   return {
     id: claim.id,
     title: claim.title,
-    unit: claim.statement.unit,
-    statedValue: statedValue(claim.statement.value),
+    unit,
+    stated: bound === 'equals' ? value : `${bound} ${value}`,
+    statedValue: statedValue(value),
     recomputed: recomputation && {
       value: recomputation.answer.value,
       low: recomputation.answer.interval95?.low ?? null,

@@ -65,7 +65,7 @@ export const claimComputation = z.object({
   tolerance,
   seed,
   /** Series by the name of the procedure's or the evidence's field. */
-  series: z.record(
+  series: z.partialRecord(
     z.enum(['temperatureSeriesId', 'co2SeriesId', 'seriesId', 'totalForcingSeriesId', 'co2ForcingSeriesId']),
     seriesData,
   ),

@@ -3,13 +3,14 @@ import type { ClaimView } from '../contract/project.ts';
 import type { ResultMethod } from '../contract/result.ts';
 import { checkSignatures } from '../project/check-signatures.ts';
 import type { Project } from '../project/project.ts';
-import { publishedForClaim } from '../quantities/published-values.ts';
+import { catalogueEntries } from '../assumptions/catalogue.ts';
 import { statedValue } from '../quantities/stated-number.ts';
 import { statementQuestions } from '../quantities/statement-questions.ts';
 import { fitFigure, residualsFigure, sweepFigure } from './claim-figures.ts';
 import { obstacles, requestDigest, requestFor } from './claim-request.ts';
 import { fillIns } from './fill-ins.ts';
 import { defaultMinYears } from './run-claim-method.ts';
+import { publishedForClaim } from './published-for-claim.ts';
 import { sectionStates } from './section-states.ts';
 import { stemOf } from './stem-of.ts';
 import { latestAnswer } from './stored-results.ts';
@@ -33,7 +34,7 @@ export function claimView(project: Project, claimId: number): ClaimView {
   const digests = digestsOf(project, claim);
   const recomputation = results.recomputation?.answer ?? null;
   const sweep = results.sweep?.answer ?? null;
-  const published = publishedForClaim(claim.statement);
+  const published = publishedForClaim(claim);
   const view = {
     claim,
     questions: statementQuestions(claim.statement, claim.answers),
@@ -51,6 +52,7 @@ export function claimView(project: Project, claimId: number): ClaimView {
       residuals: recomputation && residualsFigure(claim, recomputation, digests),
       sweep: sweep && sweepFigure(claim, sweep, digests),
     },
+    catalogue: catalogueEntries,
     published,
     fillIns: fillIns(claim, recomputation, results.assumptions?.answer ?? null, sweep),
     trail: project.trailLines({ claimId, limit: 40 }),

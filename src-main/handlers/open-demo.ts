@@ -1,7 +1,7 @@
 import { mkdirSync, readdirSync, readFileSync } from 'node:fs';
 import { basename, join, resolve } from 'node:path';
 import { workedExample, type WorkedExample } from '../contract/worked-example.ts';
-import { createProject } from '../project/project.ts';
+import { createProject } from '../project/create-project.ts';
 import { claimHandlers } from './claims.ts';
 import type { HandlerContext } from './context.ts';
 import { dataHandlers } from './data.ts';

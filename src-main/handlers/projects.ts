@@ -1,7 +1,8 @@
 import { existsSync, mkdirSync, readdirSync, statSync } from 'node:fs';
 import { dirname, join, resolve } from 'node:path';
 import { InputError } from '../errors.ts';
-import { createProject, openProject } from '../project/project.ts';
+import { createProject } from '../project/create-project.ts';
+import { openProject } from '../project/open-project.ts';
 import { readProjectTitle } from '../project/read-project-title.ts';
 import { verifyProject } from '../project/verify-project.ts';
 import { engineVersion } from '../engine-version.ts';

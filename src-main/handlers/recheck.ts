@@ -1,8 +1,8 @@
 import type { RecheckReport } from '../contract/trail.ts';
 import { canonicalJson } from '../project/canonical-json.ts';
+import { firstDifference } from '../project/first-difference.ts';
 import { resolveRequest } from './claim-request.ts';
 import type { HandlerContext } from './context.ts';
-import { firstDifference } from './first-difference.ts';
 import { readAnswer } from './stored-results.ts';
 
 /** Computes every stored result again and lists what comes out otherwise, to the last digit. */
@@ -16,7 +16,8 @@ export async function recheck({ workspace, jobs }: HandlerContext, jobId: string
     const answer: unknown = await jobs.run(method, input, { jobId, label });
     const difference = firstDifference(readAnswer(project, result), JSON.parse(canonicalJson(answer)));
     if (difference) {
-      differences.push({ resultId: result.id, claimId: result.claimId, method: result.method, ...difference });
+      const { path, one: stored, other: recomputed } = difference;
+      differences.push({ resultId: result.id, claimId: result.claimId, method: result.method, path, stored, recomputed });
     }
   }
   return {

@@ -3,7 +3,7 @@ import { join, resolve } from 'node:path';
 import { cautions } from '../contract/cautions.ts';
 import type { Report, ReportClaim } from '../contract/project.ts';
 import { engineVersion } from '../engine-version.ts';
-import { titleOf } from '../assumptions/catalogue.ts';
+import { catalogueEntries } from '../assumptions/catalogue.ts';
 import { canonicalJson } from '../project/canonical-json.ts';
 import type { Project } from '../project/project.ts';
 import { reportHtml } from '../report/report-html.ts';
@@ -70,7 +70,7 @@ function reportClaim(project: Project, claimId: number): ReportClaim {
     derivation: view.derivation?.answer ?? null,
     ledger: (assumptions?.answer.outcomes ?? []).map((outcome) => ({
       outcome,
-      title: titleOf(outcome.id),
+      title: catalogueEntries.find((entry) => entry.id === outcome.id)?.title ?? outcome.id,
       mark: view.marks.find((mark) => mark.assumptionId === outcome.id) ?? null,
     })),
     ladder: assumptions?.answer.ladder ?? null,

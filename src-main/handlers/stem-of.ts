@@ -1,11 +1,15 @@
-import { shortTitleOf } from '../assumptions/catalogue.ts';
+import { catalogueEntries } from '../assumptions/catalogue.ts';
 import type { Claim } from '../contract/claim.ts';
 import type { StemFigure } from '../contract/figure.ts';
 import type { PublishedValue } from '../contract/finding.ts';
 import type { AssumptionsAnswer, Recomputation } from '../contract/result.ts';
+import { quantityNames } from '../quantities/quantity-names.ts';
 import { statedInterval, statedValue } from '../quantities/stated-number.ts';
 
 const fahrenheitPerKelvin = 1.8;
+
+/** Assessed ranges that a reader of a stem should have before his eyes. */
+const bandIds = ['ar6-tcr', 'ar6-ecs'];
 
 /** The stem of a sheet: what is stated, what comes out, and where each changed assumption moves it. */
 export function stemOf(
@@ -51,7 +55,7 @@ function rowsOf(assumptions: AssumptionsAnswer | null, claim: Claim): StemFigure
     alternative && alternative.unit === claim.statement.unit
       ? [
           {
-            label: shortTitleOf(id),
+            label: (catalogueEntries.find((entry) => entry.id === id)?.shortTitle ?? id),
             value: alternative.value,
             interval: alternative.interval,
             quantity: alternative.quantity,
@@ -67,12 +71,12 @@ function bandsOf(published: readonly PublishedValue[], unit: Claim['statement'][
   const factor = unit === 'K per doubling' ? 1 : unit === '°F per doubling' ? fahrenheitPerKelvin : null;
   if (factor === null) return [];
   return published
-    .filter((value) => value.isBand)
-    .flatMap(({ shortLabel, quantity, edition, ranges }) =>
+    .filter((value) => bandIds.includes(value.id))
+    .flatMap(({ quantity, ranges }) =>
       ranges
         .filter(({ interval }) => interval.levelPercent === 66 && interval.low !== null && interval.high !== null)
-        .map(({ interval, words }) => ({
-          label: `${shortLabel}, ${words} (${edition})`,
+        .map(({ interval }) => ({
+          label: `${quantityNames[quantity].symbol}, likely (AR6)`,
           low: (interval.low ?? 0) * factor,
           high: (interval.high ?? 0) * factor,
           quantity,

@@ -2,7 +2,8 @@ import type { Reviewer } from '../contract/finding.ts';
 import { engineVersion } from '../engine-version.ts';
 import { InputError, ProjectError } from '../errors.ts';
 import type { IdentityStore } from '../project/identity.ts';
-import type { Change, Project } from '../project/project.ts';
+import type { Change } from '../project/change-set.ts';
+import type { Project } from '../project/project.ts';
 
 /** The project that is open, and who is working on it. */
 export interface Workspace {

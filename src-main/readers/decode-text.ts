@@ -1,0 +1,98 @@
+import { InputError } from '../errors.ts';
+
+/** A text file as lines, with what was noticed while decoding it. */
+export interface TextFile {
+  fileName: string;
+  lines: readonly string[];
+  notes: readonly string[];
+}
+
+/** First bytes of files that are no text, with what they are. */
+const signatures: readonly { bytes: readonly number[]; kind: string; hint: string }[] = [
+  {
+    bytes: [0x50, 0x4b, 0x03, 0x04],
+    kind: 'a spreadsheet (.xlsx, .ods) or another zip archive',
+    hint: 'This kind of file is not read yet. Save the sheet that holds the numbers as CSV and import that.',
+  },
+  {
+    bytes: [0xd0, 0xcf, 0x11, 0xe0],
+    kind: 'a spreadsheet of the older kind (.xls)',
+    hint: 'This kind of file is not read yet. Save the sheet that holds the numbers as CSV and import that.',
+  },
+  {
+    bytes: [0x89, 0x48, 0x44, 0x46],
+    kind: 'a NetCDF-4 or HDF5 file',
+    hint: 'This kind of file is not read yet. Export the time series as text and import that.',
+  },
+  {
+    bytes: [0x43, 0x44, 0x46],
+    kind: 'a NetCDF file',
+    hint: 'This kind of file is not read yet. Export the time series as text and import that.',
+  },
+  {
+    bytes: [0x25, 0x50, 0x44, 0x46],
+    kind: 'a PDF document',
+    hint: 'A document is material under review: attach it as a source. Data are imported from text files.',
+  },
+  { bytes: [0x1f, 0x8b], kind: 'a gzip archive', hint: 'Unpack it first and import the file inside.' },
+];
+
+/**
+ * Bytes as lines of text: UTF-8 with or without byte order mark, UTF-16 with one, else Windows-1252 (of which Latin-1's
+ * printable characters are a part). Lines end with LF, CRLF or CR.
+ *
+ * @throws InputError `empty-file`, `not-text` or `web-page`
+ */
+export function decodeText(fileName: string, bytes: Uint8Array): TextFile {
+  if (bytes.length === 0)
+    throw unreadable(fileName, 'empty-file', 'an empty file', 'Look whether the download broke off.');
+  const signature = signatures.find((known) => known.bytes.every((byte, place) => bytes[place] === byte));
+  if (signature) throw unreadable(fileName, 'not-text', signature.kind, signature.hint);
+  const { text, notes } = decode(bytes);
+  if (text.trim() === '') {
+    throw unreadable(fileName, 'empty-file', 'nothing but blanks', 'Look whether the download broke off.');
+  }
+  if (text.includes('\0')) {
+    throw unreadable(fileName, 'not-text', 'binary content', 'This kind of file is not read yet. Export it as text.');
+  }
+  if (/^\s*<(!doctype|html|\?xml)/i.test(text)) {
+    throw unreadable(
+      fileName,
+      'web-page',
+      'a web page',
+      'The page was saved in place of the data file it links to. Download the file itself.',
+    );
+  }
+  const lines = text.split(/\r\n|\n|\r/);
+  if (lines.at(-1) === '') lines.pop();
+  return { fileName, lines, notes };
+}
+
+function decode(bytes: Uint8Array): { text: string; notes: string[] } {
+  const [first, second] = bytes;
+  if (first === 0xff && second === 0xfe) return withMark('utf-16le', bytes);
+  if (first === 0xfe && second === 0xff) return withMark('utf-16be', bytes);
+  if (first === 0xef && second === 0xbb && bytes[2] === 0xbf) {
+    return { text: decodeAs('utf-8', bytes), notes: ['The file begins with a byte order mark; it was skipped.'] };
+  }
+  try {
+    return { text: new TextDecoder('utf-8', { fatal: true }).decode(bytes), notes: [] };
+  } catch {
+    return {
+      text: decodeAs('windows-1252', bytes),
+      notes: ['The file is not UTF-8; it was read as Windows-1252 (Latin-1).'],
+    };
+  }
+}
+
+function withMark(encoding: string, bytes: Uint8Array): { text: string; notes: string[] } {
+  return { text: decodeAs(encoding, bytes), notes: [`The file is ${encoding.toUpperCase()} by its byte order mark.`] };
+}
+
+function decodeAs(encoding: string, bytes: Uint8Array): string {
+  return new TextDecoder(encoding).decode(bytes);
+}
+
+function unreadable(fileName: string, code: string, received: string, hint: string): InputError {
+  return new InputError({ code, where: fileName, expected: 'a text file with a table of numbers', received, hint });
+}

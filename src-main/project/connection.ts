@@ -8,9 +8,19 @@ export interface Connection {
   close(): void;
 }
 
-/** Opens SQLite on a project file to read and write it. */
+/** Opens SQLite on a project file to read and write it. What a killed process left half done is taken back. */
 export function connect(path: string): Connection {
-  return start(path, {});
+  const connection = start(path, {});
+  if (existsSync(`${path}-journal`)) removeSpentJournal(connection.db, path);
+  return connection;
+}
+
+/** A process killed before its journal counted leaves one that SQLite ignores and does not clear away. */
+function removeSpentJournal(db: Database.Database, path: string): void {
+  // With the file to ourselves, any journal that counted has been played back, and none is in use.
+  db.exec('BEGIN EXCLUSIVE');
+  rmSync(`${path}-journal`, { force: true });
+  db.exec('ROLLBACK');
 }
 
 /**

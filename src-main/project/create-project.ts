@@ -1,4 +1,3 @@
-import { randomUUID } from 'node:crypto';
 import { existsSync, realpathSync, renameSync, rmSync } from 'node:fs';
 import { basename, dirname, join } from 'node:path';
 import Database from 'better-sqlite3';
@@ -25,13 +24,15 @@ export interface NewProject extends Doing {
 export function createProject(path: string, { holder, ...content }: NewProject): Project {
   const realPath = join(realFolder(path), basename(path));
   const lock = acquireWriterLock(realPath, holder);
-  const draftPath = `${realPath}.${randomUUID()}.draft`;
+  // One name is enough, since the lock is held; and a draft left by a killed process goes away with the next.
+  const draftPath = `${realPath}.footing-draft`;
   try {
     if (existsSync(realPath)) throw exists(realPath);
+    removeDraft(draftPath);
     writeDraft(draftPath, content);
     renameSync(draftPath, realPath);
   } catch (error) {
-    rmSync(draftPath, { force: true });
+    removeDraft(draftPath);
     lock.release();
     throw asProjectError(error, realPath);
   }
@@ -52,6 +53,10 @@ function writeDraft(path: string, { title, isInvented, ...doing }: Omit<NewProje
   } finally {
     project.close();
   }
+}
+
+function removeDraft(path: string): void {
+  for (const file of [path, `${path}-journal`]) rmSync(file, { force: true });
 }
 
 function realFolder(path: string): string {

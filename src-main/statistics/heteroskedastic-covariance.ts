@@ -1,11 +1,8 @@
 import { NumericError } from '../errors.ts';
 import { errorInfluence, laggedCrossProduct } from './error-influence.ts';
-import type { LeastSquaresFit } from './least-squares.ts';
+import { LEVERAGE_OF_ONE, type LeastSquaresFit } from './least-squares.ts';
 
 export type HeteroskedasticKind = 'hc0' | 'hc1' | 'hc2' | 'hc3';
-
-/** Leverage this near 1 leaves a residual that is rounding only. */
-const LEVERAGE_OF_ONE = 1 - 1e-10;
 
 /**
  * Heteroskedasticity-consistent covariance of least-squares coefficients: errors may differ in variance from row to

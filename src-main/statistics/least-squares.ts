@@ -42,6 +42,9 @@ export interface LeastSquaresFit {
   pivotRatio: number;
 }
 
+/** From here on a row's leverage is 1 but for rounding: the fit goes through it whatever its value. */
+export const LEVERAGE_OF_ONE = 1 - 1e-10;
+
 const EPSILON = 2 ** -52;
 /** Data are doubles, rounded at 1e-16 of their size: below this ratio fewer than four digits of a coefficient are theirs. */
 const SMALLEST_PIVOT_RATIO = 1e-12;

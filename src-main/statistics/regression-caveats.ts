@@ -1,6 +1,6 @@
 import type { RegressionRequest } from '../contract/compute.ts';
 import type { Caveat } from '../contract/primitives.ts';
-import type { LeastSquaresFit } from './least-squares.ts';
+import { LEVERAGE_OF_ONE, type LeastSquaresFit } from './least-squares.ts';
 import { varianceInflation } from './variance-inflation.ts';
 
 interface RegressionDoubts {
@@ -49,6 +49,12 @@ export function regressionCaveats({ fit, hasIntercept, covariance, isExact, isCo
     high.length > 0,
     'high-leverage',
     `${high.length} of ${nObs} rows with leverage above 3k/n = ${bound.toPrecision(3)}; the highest, row ${highest + 1}, has ${leverage[highest]!.toPrecision(3)}.`,
+  );
+  const alone = Array.from(leverage.keys()).filter((row) => leverage[row]! > LEVERAGE_OF_ONE);
+  add(
+    alone.length > 0,
+    'leverage-of-one',
+    `Some coefficient rests on one row alone (row ${alone.map((row) => row + 1).join(', ')}): the fit goes through it whatever its value, and its Cook’s distance does not exist.`,
   );
   const worst = Math.max(...varianceInflation(fit, hasIntercept));
   add(

@@ -5,7 +5,7 @@ import { InputError } from '../errors.ts';
 import { designColumns } from './design-columns.ts';
 import { durbinWatson } from './durbin-watson.ts';
 import { heteroskedasticCovariance } from './heteroskedastic-covariance.ts';
-import { leastSquares, type LeastSquaresFit } from './least-squares.ts';
+import { LEVERAGE_OF_ONE, leastSquares, type LeastSquaresFit } from './least-squares.ts';
 import { neweyWest } from './newey-west.ts';
 import { regressionCaveats } from './regression-caveats.ts';
 import { sum, sumOfProducts } from './summation.ts';
@@ -149,7 +149,7 @@ function normalLogLikelihood({ nObs, residualSumOfSquares, weights }: LeastSquar
 function cooksDistance(fit: LeastSquaresFit, residualVariance: number): (number | null)[] {
   return Array.from(fit.residuals, (residual, i) => {
     const leverage = fit.leverage[i]!;
-    if (leverage > 1 - 1e-10) return null;
+    if (leverage > LEVERAGE_OF_ONE) return null;
     const weightedSquare = residual ** 2 * (fit.weights?.[i] ?? 1);
     return (weightedSquare * leverage) / ((1 - leverage) ** 2 * residualVariance * fit.nCoefficients);
   });

@@ -46,10 +46,15 @@ export function alignByYear(seriesList: readonly AnnualSeries[], window: YearSpa
   return aligned;
 }
 
+/** Years that lie within the span of every series, whether or not they could be used. */
 function sharedSpan(seriesList: readonly AnnualSeries[]): YearSpan {
-  const start = Math.max(...seriesList.map(({ years }) => years[0] ?? Infinity));
-  const end = Math.min(...seriesList.map(({ years }) => years.at(-1) ?? -Infinity));
-  return { start, end };
+  const spans = seriesList.map(({ years, leftOut }) =>
+    [...years, ...leftOut.map(({ year }) => year)].sort((a, b) => a - b),
+  );
+  return {
+    start: Math.max(...spans.map((years) => years[0] ?? Infinity)),
+    end: Math.min(...spans.map((years) => years.at(-1) ?? -Infinity)),
+  };
 }
 
 function outsideReason(series: AnnualSeries): string {

@@ -84,6 +84,7 @@ export function formatLevel(levelPercent: number): string {
 /** `p = 0.012`, `p < 0.001`. */
 export function formatP(p: number): string {
   if (p < 0.001) return 'p < 0.001';
+  if (p >= 0.995) return 'p > 0.99';
   return `p = ${p < 0.0995 ? p.toFixed(3) : p.toFixed(2)}`;
 }
 

@@ -118,7 +118,8 @@ function printedText(text: string): string {
 
 function readDigits(text: string): PrintedDigits {
   const match = printedNumber.exec(text.trim());
-  if (!match) {
+  const isInRange = match !== null && Number.isFinite(Number(text.trim().replace(',', '.').replaceAll('−', '-')));
+  if (!match || !isInRange) {
     throw new InputError({
       code: 'not-a-number',
       where: 'stated number',

@@ -1,6 +1,7 @@
 import type { ClaimUnit } from '../contract/claim.ts';
 import type { Caveat, QuantityId } from '../contract/primitives.ts';
 import type { AssumptionId, Ladder } from '../contract/result.ts';
+import { isFootingError } from '../errors.ts';
 import { quantilesWithUnbounded } from '../climate/quantiles-with-unbounded.ts';
 import { generatorId, randomStream } from '../statistics/random-stream.ts';
 
@@ -10,6 +11,7 @@ export type DrawnName = (typeof drawnNames)[number];
 
 /** Standard-normal draws by name. Whoever asks for a name gets the same draws: that is what joins the rungs. */
 export interface JointDraws {
+  seed: number;
   nDraws: number;
   standardNormal(name: DrawnName): Float64Array;
 }
@@ -35,8 +37,7 @@ export interface LadderPlan<Footing> {
   numberOn(footing: Footing, draws: JointDraws): DrawnNumber;
   notApplied: Ladder['notApplied'];
   unit: ClaimUnit;
-  seed: number;
-  nDraws: number;
+  draws: JointDraws;
   caveats: Caveat[];
 }
 
@@ -50,15 +51,14 @@ export interface LadderPlan<Footing> {
  *          of draws. The steps depend on the order; the last value does not, because a footing is a set of choices
  *
  * @param plan  start, rungs, and the function that gives the number on a footing for joint draws
- * @returns  5–95 % of the draws per rung; null at an end where that quantile is unbounded. A rung whose central value
- *           is not finite is not applied and says so
+ * @returns  5–95 % of the draws per rung; null at an end where that quantile is unbounded. A rung whose number
+ *           cannot be computed, or has no finite central value, is not applied and says why
  *
  * Source   Monte Carlo propagation of distributions: JCGM 101:2008, §5.9 and §7
  * Checked  test/unit/robustness/ladder.test.ts (C: additive and multiplicative footings with known quantiles)
  */
 export function ladder<Footing>(plan: LadderPlan<Footing>): Ladder {
-  const { rungs, numberOn, unit, seed, nDraws, caveats } = plan;
-  const draws = jointDraws(seed, nDraws);
+  const { rungs, numberOn, unit, draws, caveats } = plan;
   const start = numberOn(plan.start, draws);
   const notApplied = [...plan.notApplied];
   const applied: Ladder['rungs'] = [];
@@ -66,9 +66,9 @@ export function ladder<Footing>(plan: LadderPlan<Footing>): Ladder {
   let before = start.value;
   for (const { assumptionId, label, change } of rungs) {
     const changed = change(footing);
-    const number = numberOn(changed, draws);
-    if (!Number.isFinite(number.value)) {
-      notApplied.push({ assumptionId, reason: 'The number has no finite central value under this change.' });
+    const number = numberOrReason(() => numberOn(changed, draws));
+    if (typeof number === 'string') {
+      notApplied.push({ assumptionId, reason: number });
       continue;
     }
     const { value, quantity } = number;
@@ -81,15 +81,26 @@ export function ladder<Footing>(plan: LadderPlan<Footing>): Ladder {
     rungs: applied,
     notApplied,
     unit,
-    random: { generator: generatorId, seed, nDraws },
+    random: { generator: generatorId, seed: draws.seed, nDraws: draws.nDraws },
     caveats,
   };
+}
+
+function numberOrReason(compute: () => DrawnNumber): DrawnNumber | string {
+  try {
+    const number = compute();
+    return Number.isFinite(number.value) ? number : 'The number has no finite central value under this change.';
+  } catch (error) {
+    if (isFootingError(error)) return error.message;
+    throw error;
+  }
 }
 
 /** Draws that are made when first asked for and then kept. The digits depend on the seed and the name alone. */
 export function jointDraws(seed: number, nDraws: number): JointDraws {
   const kept = new Map<DrawnName, Float64Array>();
   return {
+    seed,
     nDraws,
     standardNormal(name) {
       const known = kept.get(name);

@@ -35,8 +35,7 @@ const plan: LadderPlan<Footing> = {
   },
   notApplied: [{ assumptionId: 'anchor-year', reason: 'not asked for' }],
   unit: 'K per doubling',
-  seed: 7,
-  nDraws,
+  draws: jointDraws(7, nDraws),
   caveats: [],
 };
 
@@ -97,7 +96,7 @@ describe('ladder', () => {
 
   it('gives the same digits for the same seed and others for another', () => {
     expect(ladder(plan)).toEqual(ladder(plan));
-    const other = ladder({ ...plan, seed: 8 });
+    const other = ladder({ ...plan, draws: jointDraws(8, nDraws) });
     expect(other.start.interval90).not.toEqual(ladder(plan).start.interval90);
     expect(other.random.seed).toBe(8);
   });

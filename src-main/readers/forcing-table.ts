@@ -1,6 +1,6 @@
-import { InputError } from '../errors.ts';
 import type { TextFile } from './decode-text.ts';
 import { numericMarksOf } from './missing-marks.ts';
+import { otherFormat } from './other-format.ts';
 import { nameOf } from './name-of.ts';
 import { parseNumber } from './parse-number.ts';
 import { type Row, type ValueColumn, readRows } from './read-rows.ts';
@@ -68,7 +68,8 @@ export const forcingTable: Reader = {
 
   read(file): Reading {
     const layout = layoutOf(file);
-    if (layout === null) throw notThisFormat(file);
+    if (layout === null)
+      throw otherFormat(file, 0, 'a header with a year and forcing agents: year, co2, ch4, …, solar, volcanic, total');
     const { table, timeColumn, time } = layout;
     const read = readRows(table, {
       nCells: table.header.length,
@@ -83,8 +84,7 @@ export const forcingTable: Reader = {
       badRows: read.badRows,
       notes: [...(time.note === null ? [] : [time.note]), ...read.notes, ...notesOn(file, layout, read.rows)],
       columns: table.header.map((name, column) => name || `column ${column + 1}`),
-      firstRows: table.lines.flatMap(({ cells }) => (cells ? [cells] : [])),
-      headerLine: table.headerLine,
+      table,
       options: null,
     };
   },
@@ -200,17 +200,7 @@ function isSum({ agents }: Layout, rows: readonly Row[]): boolean | null {
   if (places.includes(-1)) return null;
   return rows.every(({ values }) => {
     const [total, ...parts] = places.map((place) => values[place] ?? null);
-    if (total == null || parts.includes(null)) return true;
+    if (total === undefined || total === null || parts.includes(null)) return true;
     return Math.abs(parts.reduce<number>((sum, part) => sum + (part ?? 0), 0) - total) <= roundingWm2;
-  });
-}
-
-function notThisFormat(file: TextFile): InputError {
-  return new InputError({
-    code: 'other-format',
-    where: `${file.fileName}, line 1`,
-    expected: 'a header with a year and forcing agents: year, co2, ch4, …, solar, volcanic, total',
-    received: `“${(file.lines[0] ?? '').trim().slice(0, 80)}”`,
-    hint: 'Let the format be recognised, or choose delimited text.',
   });
 }

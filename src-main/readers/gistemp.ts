@@ -1,7 +1,7 @@
 import type { BadRow, SeriesValues } from '../contract/series.ts';
-import { InputError } from '../errors.ts';
 import type { TextFile } from './decode-text.ts';
 import { monthOfName } from './month-names.ts';
+import { otherFormat } from './other-format.ts';
 import { parseNumber } from './parse-number.ts';
 import { type PartialYear, partialYears } from './partial-years.ts';
 import { type Row, readRows } from './read-rows.ts';
@@ -44,7 +44,8 @@ export const gistemp: Reader = {
 
   read(file): Reading {
     const layout = layoutOf(file);
-    if (layout === null) throw notThisFormat(file);
+    if (layout === null)
+      throw otherFormat(file, 0, 'a GISTEMP table: a header Year, Jan, …, Dec, J-D, D-N, DJF, MAM, JJA, SON');
     const { table, delimiter, columns, unitC } = layout;
     const read = readRows(table, {
       nCells: table.header.length,
@@ -67,8 +68,7 @@ export const gistemp: Reader = {
         'The base period 1951–1980 is the provider’s.',
       ],
       columns: table.header,
-      firstRows: table.lines.flatMap(({ cells }) => (cells ? [cells] : [])),
-      headerLine: table.headerLine,
+      table,
       options: null,
     };
   },
@@ -138,14 +138,4 @@ function noteFurniture(lines: readonly BadRow[]): string[] {
   if (lines.length === 0) return [];
   const listed = lines.map(({ line }) => line).join(', ');
   return [`Repeated headers and remarks under the table, as in all files of this kind: lines ${listed}.`];
-}
-
-function notThisFormat(file: TextFile): InputError {
-  return new InputError({
-    code: 'other-format',
-    where: `${file.fileName}, lines 1 to 20`,
-    expected: 'a GISTEMP table: a header Year, Jan, …, Dec, J-D, D-N, DJF, MAM, JJA, SON',
-    received: `“${(file.lines[0] ?? '').trim().slice(0, 80)}”`,
-    hint: 'Let the format be recognised, or choose delimited text.',
-  });
 }

@@ -1,5 +1,5 @@
-import { InputError } from '../errors.ts';
 import type { TextFile } from './decode-text.ts';
+import { otherFormat } from './other-format.ts';
 import { type PartialYear, partialYears } from './partial-years.ts';
 import { readRows } from './read-rows.ts';
 import type { Reader, Reading, Recognition } from './reader.ts';
@@ -35,7 +35,12 @@ export const hadcrut5: Reader = {
 
   read(file): Reading {
     const layout = layoutOf(file);
-    if (layout === null) throw notThisFormat(file);
+    if (layout === null)
+      throw otherFormat(
+        file,
+        0,
+        'the header Time,Anomaly (deg C),Lower confidence limit (2.5%),Upper confidence limit (97.5%)',
+      );
     const { table, time, levelPercent } = layout;
     const read = readRows(table, {
       nCells: 4,
@@ -79,8 +84,7 @@ export const hadcrut5: Reader = {
         ...doubt.notes,
       ],
       columns: table.header,
-      firstRows: table.lines.flatMap(({ cells }) => (cells ? [cells] : [])),
-      headerLine: table.headerLine,
+      table,
       options: null,
     };
   },
@@ -147,14 +151,4 @@ function nameOfSeries(fileName: string): { title: string; id: string } {
     variant === '' ? '' : 'not-infilled',
   ];
   return { title: `${name}${variant}, ${region}`, id: id.filter((part) => part !== '').join('-') };
-}
-
-function notThisFormat(file: TextFile): InputError {
-  return new InputError({
-    code: 'other-format',
-    where: `${file.fileName}, line 1`,
-    expected: 'the header Time,Anomaly (deg C),Lower confidence limit (2.5%),Upper confidence limit (97.5%)',
-    received: `“${(file.lines[0] ?? '').trim().slice(0, 80)}”`,
-    hint: 'Let the format be recognised, or choose delimited text.',
-  });
 }

@@ -1,6 +1,6 @@
-import { InputError } from '../errors.ts';
 import type { TextFile } from './decode-text.ts';
 import { numericMarksOf } from './missing-marks.ts';
+import { otherFormat } from './other-format.ts';
 import { parseNumber } from './parse-number.ts';
 import { readRows } from './read-rows.ts';
 import type { Reader, Reading, Recognition } from './reader.ts';
@@ -37,7 +37,7 @@ export const igccGmst: Reader = {
 
   read(file): Reading {
     const layout = layoutOf(file);
-    if (layout === null) throw notThisFormat(file);
+    if (layout === null) throw otherFormat(file, 0, 'a header with year and gmst, and a row for each year');
     const { table, timeColumn, time, valueColumn } = layout;
     const numbers = table.lines.map(({ cells }) => parseNumber(cells?.[valueColumn] ?? '', '.'));
     const { rows, badRows, notes } = readRows(table, {
@@ -77,8 +77,7 @@ export const igccGmst: Reader = {
           : 'The values do not average to zero over 1850–1900, the provider’s base period: state the base period.',
       ],
       columns: table.header,
-      firstRows: table.lines.flatMap(({ cells }) => (cells ? [cells] : [])),
-      headerLine: table.headerLine,
+      table,
       options: null,
     };
   },
@@ -106,14 +105,4 @@ function isZeroOverBaseline({ table, timeColumn, time, valueColumn }: Layout): b
   });
   const mean = values.reduce((sum, value) => sum + value, 0) / values.length;
   return values.length === baseline.end - baseline.start + 1 && Math.abs(mean) <= zeroMeanK;
-}
-
-function notThisFormat(file: TextFile): InputError {
-  return new InputError({
-    code: 'other-format',
-    where: `${file.fileName}, line 1`,
-    expected: 'a header with year and gmst, and a row for each year',
-    received: `“${(file.lines[0] ?? '').trim().slice(0, 80)}”`,
-    hint: 'Let the format be recognised, or choose delimited text.',
-  });
 }

@@ -1,7 +1,7 @@
-import { InputError } from '../errors.ts';
 import { placeName } from './arrange-rows.ts';
 import type { TextFile } from './decode-text.ts';
 import { isNegative } from './missing-marks.ts';
+import { otherFormat } from './other-format.ts';
 import { parseNumber } from './parse-number.ts';
 import { partialYears } from './partial-years.ts';
 import { type Row, type ValueColumn, readRows } from './read-rows.ts';
@@ -78,7 +78,12 @@ export const noaaGml: Reader = {
 
   read(file): Reading {
     const layout = layoutOf(file);
-    if (layout === null) throw notThisFormat(file);
+    if (layout === null)
+      throw otherFormat(
+        file,
+        firstRow(file),
+        'rows of a NOAA GML file: year, month, decimal date, average, …; or year, mean, uncertainty',
+      );
     const { table, roles } = layout;
     const timeColumn = roles.indexOf('year');
     const monthColumn = roles.indexOf('month');
@@ -96,8 +101,7 @@ export const noaaGml: Reader = {
       badRows: read.badRows,
       notes: [...read.notes, ...notesOn(layout, read.rows)],
       columns: table.headerLine === 0 ? roles : table.header,
-      firstRows: table.lines.flatMap(({ cells }) => (cells ? [cells] : [])),
-      headerLine: table.headerLine || (table.lines[0]?.line ?? 1) - 1,
+      table,
       options: null,
     };
   },
@@ -105,7 +109,7 @@ export const noaaGml: Reader = {
 
 function layoutOf(file: TextFile): Layout | null {
   const comments = file.lines.filter((line) => isComment(line, ['#'])).join('\n');
-  const first = file.lines.findIndex((line) => line.trim() !== '' && !isComment(line, ['#']));
+  const first = firstRow(file);
   if (first === -1) return null;
   const text = file.lines[first] ?? '';
   const hasHeader = /^\s*"?year\b/i.test(text);
@@ -124,6 +128,10 @@ function layoutOf(file: TextFile): Layout | null {
   const level = median(sample.map((row) => row[average] ?? null));
   const gas = gasOf(comments, level);
   return gas && { table, roles, gas, site: siteOf(comments, file.fileName), comments };
+}
+
+function firstRow({ lines }: TextFile): number {
+  return lines.findIndex((line) => line.trim() !== '' && !isComment(line, ['#']));
 }
 
 function roleOfName(name: string): Role {
@@ -256,15 +264,4 @@ function limitsOf(uncertainty: number, deviation: number): Limits {
 function median(values: readonly (number | null)[]): number {
   const sorted = values.filter((value) => value !== null).toSorted((a, b) => a - b);
   return sorted[Math.floor(sorted.length / 2)] ?? Number.NaN;
-}
-
-function notThisFormat(file: TextFile): InputError {
-  const first = file.lines.findIndex((line) => line.trim() !== '' && !isComment(line, ['#']));
-  return new InputError({
-    code: 'other-format',
-    where: `${file.fileName}, line ${first + 1}`,
-    expected: 'rows of a NOAA GML file: year, month, decimal date, average, …; or year, mean, uncertainty',
-    received: `“${(file.lines[first] ?? '').trim().slice(0, 80)}”`,
-    hint: 'Let the format be recognised, or choose delimited text.',
-  });
 }

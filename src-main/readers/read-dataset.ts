@@ -23,7 +23,7 @@ export interface DatasetRead {
 }
 
 const nHeadRows = 20;
-/** The head shows this many lines beyond the header. */
+/** The head shows this many lines from the first row on, and all above it. */
 const nHeadLines = 25;
 const maxHeadLines = 250;
 
@@ -38,6 +38,7 @@ export function previewDataset({
   options,
 }: ReceivedFile): Omit<ImportPreview, 'digest' | 'alreadyImportedAs'> {
   const { file, reader, why, reading } = readFile({ fileName, bytes, options });
+  const firstLine = reading.table.lines[0]?.line ?? 1;
   return {
     fileName,
     sizeBytes: bytes.length,
@@ -48,9 +49,9 @@ export function previewDataset({
     badRows: reading.badRows,
     notes: notesOf(file, reading),
     head: {
-      lines: file.lines.slice(0, Math.min(reading.headerLine + nHeadLines, maxHeadLines)),
+      lines: file.lines.slice(0, Math.min(firstLine + nHeadLines, maxHeadLines)),
       columns: [...reading.columns],
-      rows: reading.firstRows.slice(0, nHeadRows),
+      rows: reading.table.lines.slice(0, nHeadRows).map(({ cells, text }) => cells ?? [text]),
       options: reading.options,
     },
   };

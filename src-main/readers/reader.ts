@@ -1,5 +1,6 @@
 import type { BadRow, DelimitedOptions, OfferedSeries, SeriesValues } from '../contract/series.ts';
 import type { TextFile } from './decode-text.ts';
+import type { Table } from './split-table.ts';
 
 /** Why a reader thinks that a file is of its format, and how sure it is: from 0 to 1. */
 export interface Recognition {
@@ -20,10 +21,8 @@ export interface Reading {
   badRows: BadRow[];
   notes: string[];
   columns: readonly string[];
-  /** The first rows as they were split. */
-  firstRows: string[][];
-  /** Line of the header, 1-based; 0 when there is none. */
-  headerLine: number;
+  /** The lines as they were split. */
+  table: Table;
   /** How the text was split; null for a format that leaves no choice. */
   options: DelimitedOptions | null;
 }

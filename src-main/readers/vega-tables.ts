@@ -1,6 +1,6 @@
-import { InputError } from '../errors.ts';
 import type { TextFile } from './decode-text.ts';
 import { isMissingText, numericMarksOf } from './missing-marks.ts';
+import { otherFormat } from './other-format.ts';
 import { parseNumber } from './parse-number.ts';
 import { partialYears } from './partial-years.ts';
 import { readRows } from './read-rows.ts';
@@ -93,7 +93,12 @@ export const vegaTables: Reader = {
 
   read(file): Reading {
     const layout = layoutOf(file);
-    if (layout === null) throw notThisFormat(file);
+    if (layout === null)
+      throw otherFormat(
+        file,
+        0,
+        'the header and values of a vega-datasets table: Date,CO2,adjusted CO2 from 1958, or year,temp from 1880',
+      );
     const { known, table, time } = layout;
     const read = readRows(table, {
       nCells: table.header.length,
@@ -125,8 +130,7 @@ export const vegaTables: Reader = {
         `The file states no unit. Header, first year and values agree with the vega-datasets table, which holds ${known.origin}; correct it if this file is another.`,
       ],
       columns: table.header,
-      firstRows: table.lines.flatMap(({ cells }) => (cells ? [cells] : [])),
-      headerLine: 1,
+      table,
       options: null,
     };
   },
@@ -147,14 +151,4 @@ function layoutOf(file: TextFile): Layout | null {
     return year === undefined ? [] : [{ year, value: isMissingText(value) ? null : parseNumber(value, '.') }];
   });
   return known.fits(rows) ? { known, table, time } : null;
-}
-
-function notThisFormat(file: TextFile): InputError {
-  return new InputError({
-    code: 'other-format',
-    where: `${file.fileName}, line 1`,
-    expected: 'the header and values of a vega-datasets table: Date,CO2,adjusted CO2 from 1958, or year,temp from 1880',
-    received: `“${(file.lines[0] ?? '').trim().slice(0, 80)}”`,
-    hint: 'Let the format be recognised, or choose delimited text.',
-  });
 }

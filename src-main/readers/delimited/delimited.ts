@@ -60,8 +60,7 @@ export const delimited: Reader = {
       badRows: read.badRows,
       notes: [...notesOn(layout), ...read.notes, ...notes],
       columns: names.map((_, column) => columnName(names, column)),
-      firstRows: table.lines.flatMap(({ cells }) => (cells ? [cells] : [])),
-      headerLine: table.headerLine,
+      table,
       options: {
         delimiter: split.delimiter,
         decimalMark: split.decimalMark,

@@ -37,7 +37,8 @@ export function recogniseTimeColumns(
 ): TimeColumns | null {
   const rows = table.lines.flatMap(({ cells }) => (cells?.length === split.nCells ? [cells] : []));
   for (const column of [options.timeColumn, options.monthColumn]) {
-    if (column != null && column >= split.nCells) throw noSuchColumn(table, column, split.nCells);
+    if (column !== undefined && column !== null && column >= split.nCells)
+      throw noSuchColumn(table, column, split.nCells);
   }
   const candidates = options.timeColumn === undefined ? candidatesOf(names, rows, split) : [options.timeColumn];
   const readings = candidates

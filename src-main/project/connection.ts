@@ -67,12 +67,9 @@ function needsRollback(error: unknown): boolean {
 function privateCopy(path: string): Connection | null {
   const folder = mkdtempSync(join(tmpdir(), 'footing-'));
   const discard = () => rmSync(folder, { recursive: true, force: true });
-  const copyPath = join(folder, 'copy.footing');
   try {
-    const before = stateOf(path);
-    copyFileSync(path, copyPath);
-    if (existsSync(`${path}-journal`)) copyFileSync(`${path}-journal`, `${copyPath}-journal`);
-    if (stateOf(path) !== before) {
+    const copyPath = join(folder, 'copy.footing');
+    if (!copyAtRest(path, copyPath)) {
       discard();
       return null;
     }
@@ -89,6 +86,20 @@ function privateCopy(path: string): Connection | null {
     discard();
     throw error;
   }
+}
+
+/** Copies file and journal; false when they changed while they were copied. */
+function copyAtRest(path: string, copyPath: string): boolean {
+  const before = stateOf(path);
+  copyFileSync(path, copyPath);
+  try {
+    copyFileSync(`${path}-journal`, `${copyPath}-journal`);
+  } catch (error) {
+    // Put right and cleared away by a writer who came just now.
+    if (error instanceof Error && 'code' in error && error.code === 'ENOENT') return false;
+    throw error;
+  }
+  return stateOf(path) === before;
 }
 
 function stateOf(path: string): string {

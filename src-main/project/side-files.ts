@@ -28,14 +28,22 @@ export function checkSideFiles(path: string): void {
 const journalMagic = Buffer.from('d9d505f920a163d7', 'hex');
 
 function namesAnotherFile(journalPath: string): boolean {
-  if (!existsSync(journalPath)) return false;
-  const file = openSync(journalPath, 'r');
+  const ending = readEnding(journalPath, 16);
+  return ending.length === 16 && ending.subarray(8).equals(journalMagic) && ending.readUInt32BE(0) > 0;
+}
+
+/** The last bytes of a file; nothing when there is no such file, or no longer: a writer's own journal comes and goes. */
+function readEnding(path: string, nBytes: number): Buffer {
+  let file: number;
   try {
+    file = openSync(path, 'r');
+  } catch {
+    return Buffer.alloc(0);
+  }
+  try {
+    const ending = Buffer.alloc(nBytes);
     const { size } = fstatSync(file);
-    if (size < 16) return false;
-    const ending = Buffer.alloc(16);
-    readSync(file, ending, 0, 16, size - 16);
-    return ending.subarray(8).equals(journalMagic) && ending.readUInt32BE(0) > 0;
+    return ending.subarray(0, readSync(file, ending, 0, nBytes, Math.max(0, size - nBytes)));
   } finally {
     closeSync(file);
   }

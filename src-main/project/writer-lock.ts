@@ -77,13 +77,17 @@ function tryToHold(path: string, row: HolderRow): Database.Database | null {
   } catch (error) {
     db?.close();
     if (isPassing(error)) return null;
-    throw asProjectError(error, path);
+    throw isNoDatabase(error) ? unusable(path) : asProjectError(error, path);
   }
 }
 
 /** Busy; or the file went away between opening and using it, because its last holder let go just then. */
 function isPassing(error: unknown): boolean {
   return error instanceof Database.SqliteError && /^SQLITE_(BUSY|READONLY_DBMOVED|IOERR_DELETE_NOENT)/.test(error.code);
+}
+
+function isNoDatabase(error: unknown): boolean {
+  return error instanceof Database.SqliteError && /^SQLITE_(NOTADB|CORRUPT|ERROR)/.test(error.code);
 }
 
 function readHolder(path: string): HolderRow | null {
@@ -119,6 +123,16 @@ function tryToRemove(path: string): boolean {
 
 function pause(milliseconds: number): void {
   Atomics.wait(new Int32Array(new SharedArrayBuffer(4)), 0, 0, milliseconds);
+}
+
+function unusable(path: string): ProjectError {
+  return new ProjectError({
+    code: 'lock-unusable',
+    where: path,
+    expected: 'no file here, or the lock file that Footing makes',
+    received: 'something else',
+    hint: 'Delete this file if nobody has the project open.',
+  });
 }
 
 function inUse(projectPath: string, other: HolderRow | null): ProjectError {

@@ -14,7 +14,7 @@ export const co2LogCoefficientWm2 = 5.35;
  * @throws  InputError `not-positive`
  *
  * Source   Myhre, Highwood, Shine & Stordal 1998, Geophys. Res. Lett. 25, 2715–2718, table 3
- * Checked  test/unit/climate (closed form: 5.35 ln 2 = 3.708); effective forcing in later assessments is larger
+ * Checked  test/unit/climate/co2-log-forcing.test.ts (C: 5.35 ln 2 = 3.708). Later assessments have larger effective forcing
  */
 export function co2LogForcing(co2Ppm: number, co2ReferencePpm: number): number {
   if (!(co2Ppm > 0 && co2ReferencePpm > 0 && Number.isFinite(co2Ppm) && Number.isFinite(co2ReferencePpm))) {

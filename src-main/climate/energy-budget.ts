@@ -43,14 +43,14 @@ export function energyBudget(
   let nTcr = 0;
   let nDone = 0;
   for (let block = 0; nDone < nDraws; block++) {
-    const { normal } = randomStream(seed, block);
+    const stream = randomStream(seed, block);
     const blockEnd = Math.min(nDone + drawsPerBlock, nDraws);
     for (; nDone < blockEnd; nDone++) {
-      const warming = warmingK.mean + warmingK.sd * normal();
-      const forcingNormal = normal();
+      const warming = warmingK.mean + warmingK.sd * stream.normal();
+      const forcingNormal = stream.normal();
       const forcing = forcingWm2.mean + forcingWm2.sd * forcingNormal;
-      const uptake = uptakeWm2.mean + uptakeWm2.sd * normal();
-      const doublingNormal = correlation * forcingNormal + independentShare * normal();
+      const uptake = uptakeWm2.mean + uptakeWm2.sd * stream.normal();
+      const doublingNormal = correlation * forcingNormal + independentShare * stream.normal();
       const response = (doublingWm2.mean + doublingWm2.sd * doublingNormal) * warming;
       if (forcing > uptake) effcs[nEffcs++] = response / (forcing - uptake);
       if (forcing > 0) tcr[nTcr++] = response / forcing;

@@ -34,6 +34,8 @@ export interface LeastSquaresFit {
   residualSumOfSquares: number;
   /** (X′WX)⁻¹, [nCoefficients × nCoefficients] row by row: the bread of every covariance. */
   unscaledCovariance: Float64Array;
+  /** log |X′WX|. */
+  logDeterminant: number;
   /** nCoefficients × [nObs]: how each y enters each coefficient, b_j = Σ_t observationInfluence[j][t]·y_t. */
   observationInfluence: readonly Float64Array[];
   /** Diagonal of the hat matrix. */
@@ -115,6 +117,8 @@ export function leastSquares(input: LeastSquaresInput): LeastSquaresFit {
     fitted: y.map((value, i) => value - residuals[i]!),
     residualSumOfSquares: sumOfProducts(remainder, remainder) / yScale / yScale,
     unscaledCovariance: inverseCrossProduct(qr, scales),
+    logDeterminant:
+      2 * scales.reduce((total, scale, j) => total + Math.log(Math.abs(qr.diagonal[j]!)) - Math.log(scale), 0),
     observationInfluence: pseudoInverse(qr, scales, rootWeights, nObs),
     leverage: hatDiagonal(qr, nObs),
     pivotRatio: qr.pivotRatio,

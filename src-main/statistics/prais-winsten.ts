@@ -1,4 +1,5 @@
 import { NumericError } from '../errors.ts';
+import { ar1Rows } from './ar1-rows.ts';
 import { designColumns } from './design-columns.ts';
 import { leastSquares } from './least-squares.ts';
 import { sumOfProducts } from './summation.ts';
@@ -42,7 +43,11 @@ export function praisWinsten(request: { x: number[] | number[][]; y: number[]; i
   const columns = designColumns('praisWinsten', x, y.length, intercept);
   let rho = 0;
   for (let nIterations = 1; nIterations <= MOST_ITERATIONS; nIterations++) {
-    const fit = leastSquares({ columns: columns.map((c) => freed(c, rho)), y: freed(y, rho), caller: 'praisWinsten' });
+    const fit = leastSquares({
+      columns: columns.map((c) => ar1Rows(c, rho)),
+      y: ar1Rows(y, rho),
+      caller: 'praisWinsten',
+    });
     const next = lagOneShare(y, columns, fit.coefficients);
     if (Math.abs(next - rho) <= STANDSTILL) {
       const degreesOfFreedom = fit.nObs - fit.nCoefficients;
@@ -76,10 +81,6 @@ export function praisWinsten(request: { x: number[] | number[][]; y: number[]; i
     received: `one that still moves near ${rho.toPrecision(4)}`,
     hint: 'Use Newey–West errors instead.',
   });
-}
-
-function freed(values: Float64Array, rho: number): Float64Array {
-  return values.map((value, t) => (t === 0 ? value * Math.sqrt(1 - rho ** 2) : value - rho * values[t - 1]!));
 }
 
 function lagOneShare(y: Float64Array, columns: readonly Float64Array[], coefficients: Float64Array): number {

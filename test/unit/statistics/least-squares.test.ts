@@ -23,6 +23,7 @@ describe('leastSquares', () => {
     expectClose(fit.residualSumOfSquares, 2 / 7, rounding);
     // (X′X)⁻¹ = [[21, −7], [−7, 3]]/14; h = 1/3 + (x − 7/3)²·3/14.
     expectClose(fit.unscaledCovariance, [1.5, -0.5, -0.5, 3 / 14], rounding);
+    expectClose(fit.logDeterminant, Math.log(14), rounding);
     expectClose(fit.leverage, [5 / 7, 5 / 14, 13 / 14], rounding);
     expect(fit).toMatchObject({ nObs: 3, nCoefficients: 2, weights: null });
   });
@@ -78,6 +79,7 @@ describe('leastSquares', () => {
     const x = [1, 2, 4].map((value) => value * unit);
     const fit = leastSquares({ columns: [[1, 1, 1], x], y: line.y });
     expectClose(fit.coefficients[1]! * unit, 12 / 7, rounding);
+    expectClose(fit.logDeterminant, Math.log(14) + 2 * Math.log(unit), { ...rounding, abs: 1e-12 });
     const y = line.y.map((value) => value * unit);
     expectClose(leastSquares({ columns: line.columns, y }).coefficients[1]! / unit, 12 / 7, rounding);
   });

@@ -1,0 +1,29 @@
+# AR(1) GLS with the full n x n covariance of the errors: shares no step with an estimator that frees rows from rho.
+gls_at <- function(x, y, intercept, rho, reml) {
+  n <- length(y)
+  X <- matrix(x, n)
+  if (intercept) X <- cbind(1, X)
+  k <- ncol(X)
+  V <- toeplitz(rho^(0:(n - 1))) / (1 - rho^2)
+  L <- t(chol(V))
+  Xs <- forwardsolve(L, X)
+  fit <- lm.fit(Xs, forwardsolve(L, y))
+  rss <- sum(fit$residuals^2)
+  degrees <- if (reml) n - k else n
+  XVX <- crossprod(Xs)
+  logLik <- -degrees / 2 * (log(2 * pi * rss / degrees) + 1) - sum(log(diag(L))) -
+    (if (reml) as.numeric(determinant(XVX)$modulus) / 2 else 0)
+  list(
+    coefficients = fit$coefficients, standardErrors = sqrt(diag(solve(XVX)) * rss / (n - k)), rho = rho,
+    sigma = sqrt(rss / degrees), logLikelihood = logLik
+  )
+}
+
+# The highest likelihood over a fine grid of rho, refined.
+gls_best <- function(x, y, intercept, reml) {
+  value <- function(rho) gls_at(x, y, intercept, rho, reml)$logLikelihood
+  grid <- seq(-0.995, 0.995, by = 0.01)
+  top <- grid[which.max(sapply(grid, value))]
+  best <- optimize(value, c(top - 0.02, min(top + 0.02, 0.99999)), maximum = TRUE, tol = 1e-10)
+  list(rho = best$maximum, logLikelihood = best$objective)
+}

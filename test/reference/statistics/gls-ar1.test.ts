@@ -28,7 +28,7 @@ const figures = ({ coefficients, standardErrors, rho, sigma, logLikelihood }: Gl
 });
 
 async function lakeHuron() {
-  const { x = [], y = [] } = await r.numbers('list(x = as.vector(time(LakeHuron)) - 1923, y = LakeHuron)');
+  const { x = [], y = [] } = await r.numbers('list(x = as.vector(time(LakeHuron)) - 1923, y = LakeHuron - 579)');
   return { x, y };
 }
 const { co2Ppm, temperatureK, years } = co2AndTemperature();

@@ -76,22 +76,25 @@ export function agreementWithStated(text: string, value: number, context: Agreem
   const decimals = Math.min(Math.max(decimalsPrinted(text) + 1, 2), 12);
   const shown = formatQuantity(value, unit, { decimals });
   const range = `${formatNumber(interval.low, { decimals })} to ${formatNumber(interval.high, { decimals })}`;
-  const stated = `${bound === 'equals' ? '' : `${bound} `}${printedText(text)}`;
+  const stated = `the stated ${printedText(text)} (${range})`;
   const first = isReproduced
-    ? `Reproduced within rounding: ${shown} against the stated ${stated} (${range}).`
-    : `Not reproduced: ${shown} is ${formatNumber(Math.abs(difference), { decimals })} ${difference > 0 ? 'above' : 'below'} the stated ${stated} (${range}).`;
+    ? `Reproduced within rounding: ${shown} against ${stated}.`
+    : `Not reproduced: ${shown} is ${formatNumber(Math.abs(difference), { decimals })} ${difference > 0 ? 'above' : 'below'} ${stated}.`;
   return {
     statedInterval: interval,
     isReproduced,
     difference,
-    sentence: first + boundSentence(value, interval, bound, isReproduced),
+    sentence: isReproduced ? first : first + boundSentence(text, value, bound),
   };
 }
 
-function boundSentence(value: number, interval: RoundingInterval, bound: Bound, isReproduced: boolean): string {
-  if (bound === 'equals' || isReproduced) return '';
-  const holds = bound === 'at most' ? value < interval.high : value >= interval.low;
-  return holds ? ' It lies inside the stated bound.' : ' It lies outside the stated bound.';
+/** On which side of a stated bound a number lies that is not the number stated. */
+function boundSentence(text: string, value: number, bound: Bound): string {
+  const { low, high } = statedInterval(text);
+  const words = `“${bound} ${printedText(text)}”`;
+  if (bound === 'at most') return value < high ? ` It stays within ${words}.` : ` It exceeds ${words}.`;
+  if (bound === 'at least') return value >= low ? ` It stays within ${words}.` : ` It falls short of ${words}.`;
+  return '';
 }
 
 /** Whether an interval of computed values and the interval of the printed digits have numbers in common. */

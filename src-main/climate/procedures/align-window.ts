@@ -92,7 +92,7 @@ function yearCaveats(series: SeriesData, annual: AnnualSeries | undefined, years
     for (const { year, note } of series.partialYears.filter((part) => inUse.has(part.year))) {
       caveats.push({
         code: 'part-year',
-        detail: `${series.name}: the value of ${formatYear(year)} is not of a whole year. ${note}`,
+        detail: `${series.name}, ${formatYear(year)}: ${note}. Leave the year out of the window, or say why it may stay.`,
       });
     }
   }

@@ -128,19 +128,25 @@ describe('agreementWithStated', () => {
   });
 
   it.each([
-    ['at most', 2.3, 'outside'],
-    ['at most', 1.5, 'inside'],
-    ['at least', 2.3, 'inside'],
-    ['at least', 1.5, 'outside'],
+    ['at most', 2.3, 'It exceeds “at most 1.9”.'],
+    ['at most', 1.5, 'It stays within “at most 1.9”.'],
+    ['at least', 2.3, 'It stays within “at least 1.9”.'],
+    ['at least', 1.5, 'It falls short of “at least 1.9”.'],
   ] as const)(
     'compares a bound as the number it names, and adds where the value lies: %s 1.9, %d',
-    (bound, value, side) => {
+    (bound, value, end) => {
       const { isReproduced, sentence } = agreementWithStated('1.9', value, { bound, unit });
       expect(isReproduced).toBe(false);
-      expect(sentence).toContain(`the stated ${bound} 1.9`);
-      expect(sentence).toContain(`It lies ${side} the stated bound.`);
+      expect(sentence).toMatch(/^Not reproduced: .* the stated 1\.9 \(1\.85 to 1\.95\)\. /);
+      expect(sentence.endsWith(end)).toBe(true);
     },
   );
+
+  it('says nothing of a bound that is the number recomputed', () => {
+    expect(agreementWithStated('1.9', 1.93, { bound: 'at most', unit }).sentence).toMatch(
+      /^Reproduced .*\(1\.85 to 1\.95\)\.$/,
+    );
+  });
 
   it('takes the rounding of the inputs into account where there is one', () => {
     const context = { bound: 'equals', unit: '1' } as const;

@@ -35,10 +35,10 @@ describe('alignWindow', () => {
   });
 
   it('warns of a part year that the provider put in, only where it is used', () => {
-    const withPart = { ...temperature, partialYears: [{ year: 2005, note: 'January to July.' }] };
+    const withPart = { ...temperature, partialYears: [{ year: 2005, note: '7 of 12 months have a value' }] };
     expect(alignWindow([withPart], 12, null).caveats).toContainEqual({
       code: 'part-year',
-      detail: 't: the value of 2005 is not of a whole year. January to July.',
+      detail: 't, 2005: 7 of 12 months have a value. Leave the year out of the window, or say why it may stay.',
     });
     expect(alignWindow([withPart], 12, { start: 2000, end: 2004 }).caveats.map(({ code }) => code)).toEqual([
       'gap-in-window',

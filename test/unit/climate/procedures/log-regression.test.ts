@@ -114,7 +114,7 @@ describe('logRegression', () => {
     const { value } = run();
     expect(run({}, { value: value.toFixed(2) }).agreement).toMatchObject({ isReproduced: true });
     expect(run({}, { value: (value + 0.3).toFixed(2), bound: 'at most' }).agreement.sentence).toMatch(
-      /^Not reproduced.*inside the stated bound/,
+      /^Not reproduced.*stays within “at most/,
     );
   });
 

@@ -1,29 +1,7 @@
 import type { ClaimComputation } from '../contract/compute.ts';
-import type { AssumptionId, AssumptionOutcome } from '../contract/result.ts';
+import type { AssumptionId, AssumptionOutcome, CatalogueEntry } from '../contract/result.ts';
 import type { RungOffer } from './footing.ts';
 import type { TestContext } from './test-context.ts';
-
-export type AssumptionGroup = 'The line' | 'The errors' | 'What the slope stands for';
-
-/** What the catalogue page shows of an assumption: plain data. */
-export interface CatalogueEntry {
-  id: AssumptionId;
-  group: AssumptionGroup;
-  /** What the number needs, as a sentence without its full stop. */
-  title: string;
-  /** A few words, for figures and narrow columns. */
-  shortTitle: string;
-  /** Why it matters, for a reader who is not a statistician. */
-  explanation: string;
-  /** What the test does. */
-  method: string;
-  /** In plain text; symbols: x = ln(C/C0), y = T − T0, b the slope of y on x, S = b ln 2. */
-  formula: string;
-  /** Series and figures that the test needs. */
-  needs: string;
-  /** Author year, equation or section. */
-  source: string;
-}
 
 /** Something the number needs in order to mean what is said, with the test of it. One file each. */
 export interface Assumption extends CatalogueEntry {

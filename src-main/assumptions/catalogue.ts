@@ -1,5 +1,6 @@
+import type { CatalogueEntry } from '../contract/result.ts';
 import { anchorYear } from './anchor-year.ts';
-import type { Assumption, CatalogueEntry } from './assumption.ts';
+import type { Assumption } from './assumption.ts';
 import { independentErrors } from './independent-errors.ts';
 import { likeForLike } from './like-for-like.ts';
 import { omittedForcings } from './omitted-forcings.ts';

@@ -1,38 +1,15 @@
-import type { LogRegressionProcedure, Statement } from '../../src-main/contract/claim.ts';
+import type { EnergyBudgetInputs, LogRegressionProcedure, Statement } from '../../src-main/contract/claim.ts';
 import type { ClaimComputation } from '../../src-main/contract/compute.ts';
-import type { SeriesData, SeriesQuantity } from '../../src-main/contract/series.ts';
+import { randomStream } from '../../src-main/statistics/random-stream.ts';
+import { annualSeries, computationOf, logRegressionProcedure } from './claim-computation.ts';
 
-/** An annual series with invented or given values. */
-export function annualSeries(
-  name: string,
-  quantity: SeriesQuantity,
-  unit: string,
-  years: readonly number[],
-  values: readonly (number | null)[],
-): SeriesData {
-  return {
-    name,
-    quantity,
-    agent: quantity === 'forcing' ? 'total' : null,
-    unit,
-    step: 'year',
-    baseline: null,
-    partialYears: [],
-    values: {
-      years: [...years],
-      months: null,
-      values: [...values],
-      lower: null,
-      upper: null,
-      boundsLevelPercent: null,
-    },
-  };
+export interface AnnualRecord {
+  years: number[];
+  co2Ppm: number[];
+  temperatureK: number[];
 }
 
-export interface LogRegressionClaim {
-  years: readonly number[];
-  co2Ppm: readonly number[];
-  temperatureK: readonly number[];
+export interface LogRegressionClaim extends AnnualRecord {
   totalForcingWm2?: readonly (number | null)[];
   co2ForcingWm2?: readonly number[];
   statement?: Partial<Statement>;
@@ -45,50 +22,46 @@ export interface LogRegressionClaim {
 /** A claim of "at most 1.9 K per doubling" from a line through its first year, unless said otherwise. */
 export function logRegressionClaim(claim: LogRegressionClaim): ClaimComputation {
   const { years, co2Ppm, temperatureK, totalForcingWm2, co2ForcingWm2 } = claim;
+  const forcing = (name: string, values: readonly (number | null)[]) =>
+    annualSeries(name, 'forcing', 'W/m²', years, values);
+  const series: ClaimComputation['series'] = {
+    temperatureSeriesId: annualSeries('air', 'temperature-anomaly', 'K', years, temperatureK),
+    co2SeriesId: annualSeries('carbon', 'co2', 'ppm', years, co2Ppm),
+    ...(totalForcingWm2 && { totalForcingSeriesId: forcing('all-forcings', totalForcingWm2) }),
+    ...(co2ForcingWm2 && { co2ForcingSeriesId: forcing('co2-forcing', co2ForcingWm2) }),
+  };
+  const computation = computationOf({ ...logRegressionProcedure, ...claim.procedure }, series, claim.statement);
   return {
-    statement: {
-      words: 'A doubling of CO2 warms the planet by 1.9 °C at the most.',
-      sourceId: null,
-      locator: 'slide 14',
-      quantity: 'apparent-sensitivity',
-      value: '1.9',
-      unit: 'K per doubling',
-      bound: 'at most',
-      definition: '',
-      presentedAs: null,
-      statedRSquared: null,
-      ...claim.statement,
-    },
-    procedure: {
-      kind: 'log-regression',
-      temperatureSeriesId: 1,
-      co2SeriesId: 2,
-      minMonths: 12,
-      window: null,
-      anchor: { kind: 'first-year' },
-      intercept: false,
-      covariance: { kind: 'classical' },
-      conversion: 'per-doubling',
-      ...claim.procedure,
-    },
-    tolerance: claim.tolerance ?? { notableShare: 0.1, decisiveShare: 0.25 },
-    seed: claim.seed ?? 20_261,
-    series: {
-      temperatureSeriesId: annualSeries('air', 'temperature-anomaly', 'K', years, temperatureK),
-      co2SeriesId: annualSeries('carbon', 'co2', 'ppm', years, co2Ppm),
-      ...(totalForcingWm2 && {
-        totalForcingSeriesId: annualSeries('forcing', 'forcing', 'W/m²', years, totalForcingWm2),
-      }),
-      ...(co2ForcingWm2 && {
-        co2ForcingSeriesId: annualSeries('co2 forcing', 'forcing', 'W/m²', years, co2ForcingWm2),
-      }),
-    },
-    evidence: { energyBudget: null, comparedWith: null, doublingWm2: null, ...claim.evidence },
+    ...computation,
+    evidence: { ...computation.evidence, ...claim.evidence },
+    tolerance: claim.tolerance ?? computation.tolerance,
+    seed: claim.seed ?? computation.seed,
   };
 }
 
-/** The inputs of AR6 WG1 §7.5.2.1 (1850–1900 to 2006–2019); the forcing range as symmetric. */
-export const ar6EnergyBudget = {
+/** Invented: concentrations that rise faster and faster; x is their logarithm from the first year. */
+export function inventedCo2(nYears: number, startYear = 1950) {
+  const years = Array.from({ length: nYears }, (_, row) => startYear + row);
+  const co2Ppm = years.map((_, row) => 310 * Math.exp(0.002 * row + 0.00003 * row * row));
+  const x = co2Ppm.map((value) => Math.log(value / 310));
+  return { years, co2Ppm, x };
+}
+
+/** Noise whose every value carries over a share of the one before; standard deviation `sd` throughout. */
+export function ar1Noise(nYears: number, { sd, carryOver, seed }: { sd: number; carryOver: number; seed: number }) {
+  const { normal } = randomStream(seed, 0);
+  const noise: number[] = [];
+  for (let row = 0; row < nYears; row++) {
+    const before = noise[row - 1];
+    noise.push(
+      before === undefined ? sd * normal() : carryOver * before + sd * Math.sqrt(1 - carryOver ** 2) * normal(),
+    );
+  }
+  return noise;
+}
+
+/** The inputs of AR6 WG1 §7.5.2.1 (1850–1900 to 2006–2019); the forcing range, 1.53 to 2.91, taken as symmetric. */
+export const ar6EnergyBudget: EnergyBudgetInputs = {
   warmingK: { mean: 1.03, halfWidth90: 0.2, source: 'AR6 WG1 §7.5.2.1' },
   forcingWm2: { mean: 2.2, halfWidth90: 0.7, source: 'AR6 WG1 §7.5.2.1' },
   uptakeWm2: { mean: 0.59, halfWidth90: 0.35, source: 'AR6 WG1 §7.5.2.1' },

@@ -4,13 +4,15 @@ import { createCore } from './handlers/handle.ts';
 import { runCommand } from './hosts/command-line/run-command.ts';
 import { directRunner } from './jobs/direct-runner.ts';
 
-const core = createCore({
-  host: 'command line',
-  jobs: directRunner(),
-  installation: join(import.meta.dirname, '..', '..'),
-  reviewerIfUnknown: { name: userInfo().username, role: 'account name on this machine' },
-});
-process.exitCode = await runCommand(process.argv.slice(2), core, {
+const createCommandCore = (home: string | undefined) =>
+  createCore({
+    host: 'command line',
+    jobs: directRunner(),
+    installation: join(import.meta.dirname, '..', '..'),
+    reviewerIfUnknown: { name: userInfo().username, role: 'account name on this machine' },
+    ...(home === undefined ? {} : { home }),
+  });
+process.exitCode = await runCommand(process.argv.slice(2), createCommandCore, {
   out: (text) => process.stdout.write(text),
   error: (text) => process.stderr.write(text),
   isTerminal: process.stderr.isTTY && process.stdin.isTTY,

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import {
   agreement,
-  assumptionId,
+  catalogueEntry,
   assumptionOutcome,
   assumptionsAnswer,
   claimSweep,
@@ -100,16 +100,7 @@ export const claimView = z.object({
   stem: stemFigure.nullable(),
   figures: z.record(z.enum(['fit', 'residuals', 'sweep']), figure.nullable()),
   /** What the assumptions in the ledger are called and how each is tested. */
-  catalogue: z.array(
-    z.object({
-      id: assumptionId,
-      title: z.string(),
-      shortTitle: z.string(),
-      why: z.string(),
-      formula: z.string(),
-      source: z.string(),
-    }),
-  ),
+  catalogue: z.array(catalogueEntry),
   /** Published ranges of quantities that this claim may be held against. */
   published: z.array(publishedValue),
   /** Figures that a finding's text can name in braces, filled in. */

@@ -123,6 +123,27 @@ export const assumptionId = z.enum([
 ]);
 export type AssumptionId = z.infer<typeof assumptionId>;
 
+/** What the catalogue says of an assumption. */
+export const catalogueEntry = z.object({
+  id: assumptionId,
+  group: z.enum(['The line', 'The errors', 'What the slope stands for']),
+  /** What the number needs, as a sentence without its full stop. */
+  title: z.string(),
+  /** A few words, for figures and narrow columns. */
+  shortTitle: z.string(),
+  /** Why it matters, for a reader who is not a statistician. */
+  explanation: z.string(),
+  /** What the test does. */
+  method: z.string(),
+  /** In plain text; symbols: x = ln(C/C0), y = T − T0, b the slope of y on x, S = b ln 2. */
+  formula: z.string(),
+  /** Series and figures that the test needs. */
+  needs: z.string(),
+  /** Author year, equation or section. */
+  source: z.string(),
+});
+export type CatalogueEntry = z.infer<typeof catalogueEntry>;
+
 export const weight = z.enum(['negligible', 'notable', 'decisive']);
 export type Weight = z.infer<typeof weight>;
 export const markValue = z.enum(['met', 'not met', 'untested']);

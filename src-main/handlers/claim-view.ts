@@ -52,7 +52,7 @@ export function claimView(project: Project, claimId: number): ClaimView {
       residuals: recomputation && residualsFigure(claim, recomputation, digests),
       sweep: sweep && sweepFigure(claim, sweep, digests),
     },
-    catalogue: catalogueEntries,
+    catalogue: [...catalogueEntries],
     published,
     fillIns: fillIns(claim, recomputation, results.assumptions?.answer ?? null, sweep),
     trail: project.trailLines({ claimId, limit: 40 }),

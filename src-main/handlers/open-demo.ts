@@ -1,4 +1,4 @@
-import { mkdirSync, readdirSync, readFileSync } from 'node:fs';
+import { mkdirSync, readdirSync, readFileSync, rmSync } from 'node:fs';
 import { basename, join, resolve } from 'node:path';
 import { workedExample, type WorkedExample } from '../contract/worked-example.ts';
 import { createProject } from '../project/create-project.ts';
@@ -30,14 +30,28 @@ export async function openDemo(context: HandlerContext, directory: string): Prom
     name: basename(inside),
     bytes: readFileSync(join(folder, inside)).toString('base64'),
   });
-  for (const { path: inside, ...source } of example.sources) {
-    await sourceHandlers['source.save']({ ...source, file: inside ? read(inside) : null }, context);
+  try {
+    await fill();
+  } catch (error) {
+    // Half an example would mislead: whoever opens it takes it for the whole.
+    workspace.replace(null);
+    rmSync(path, { force: true });
+    throw error;
   }
-  for (const { path: inside, options, choices, licence } of example.datasets) {
-    const { name: fileName, bytes } = read(inside);
-    await dataHandlers['data.import']({ fileName, bytes, options, choices, licence, leaveOutBadRows: false }, context);
+
+  async function fill(): Promise<void> {
+    for (const { path: inside, ...source } of example.sources) {
+      await sourceHandlers['source.save']({ ...source, file: inside ? read(inside) : null }, context);
+    }
+    for (const { path: inside, options, choices, licence } of example.datasets) {
+      const { name: fileName, bytes } = read(inside);
+      await dataHandlers['data.import'](
+        { fileName, bytes, options, choices, licence, leaveOutBadRows: false },
+        context,
+      );
+    }
+    for (const step of example.claims) await reviewClaim(step, context);
   }
-  for (const step of example.claims) await reviewClaim(step, context);
 }
 
 async function reviewClaim(

@@ -93,7 +93,7 @@ export const projectHandlers: Handlers<Names> = {
 
 /** Who a second writer is told about. */
 export function holder({ workspace, host }: HandlerContext) {
-  return { reviewer: workspace.identity.reviewer()?.name ?? 'someone', host, engineVersion };
+  return { reviewer: workspace.knownReviewer()?.name ?? 'someone', host, engineVersion };
 }
 
 function readFolder(folder: string) {

@@ -17,7 +17,14 @@ export async function recheck({ workspace, jobs }: HandlerContext, jobId: string
     const difference = firstDifference(readAnswer(project, result), JSON.parse(canonicalJson(answer)));
     if (difference) {
       const { path, one: stored, other: recomputed } = difference;
-      differences.push({ resultId: result.id, claimId: result.claimId, method: result.method, path, stored, recomputed });
+      differences.push({
+        resultId: result.id,
+        claimId: result.claimId,
+        method: result.method,
+        path,
+        stored,
+        recomputed,
+      });
     }
   }
   return {

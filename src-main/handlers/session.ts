@@ -5,7 +5,7 @@ import { projectView } from './project-view.ts';
 export const sessionHandlers: Handlers<'session.get' | 'reviewer.set' | 'identity.create' | 'job.cancel'> = {
   'session.get': (_, { workspace, places, host }) => ({
     project: workspace.project ? projectView(workspace.project) : null,
-    reviewer: workspace.identity.reviewer(),
+    reviewer: workspace.knownReviewer(),
     engineVersion,
     host,
     projectsDirectory: places.projects,

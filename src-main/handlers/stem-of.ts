@@ -55,7 +55,7 @@ function rowsOf(assumptions: AssumptionsAnswer | null, claim: Claim): StemFigure
     alternative && alternative.unit === claim.statement.unit
       ? [
           {
-            label: (catalogueEntries.find((entry) => entry.id === id)?.shortTitle ?? id),
+            label: catalogueEntries.find((entry) => entry.id === id)?.shortTitle ?? id,
             value: alternative.value,
             interval: alternative.interval,
             quantity: alternative.quantity,

@@ -14,6 +14,8 @@ export interface Workspace {
   open(): Project;
   /** Puts another project in the open one's place, closing that first. */
   replace(project: Project | null): void;
+  /** Who is reviewing, as far as anybody has said. */
+  knownReviewer(): Reviewer | null;
   /** Who is reviewing; refuses when nobody has said so. */
   reviewer(): Reviewer;
   /** Stands in, for this session only, while nobody has said who is reviewing. */
@@ -46,8 +48,9 @@ export function createWorkspace(identity: IdentityStore, now: () => string): Wor
       project?.close();
       project = next;
     },
+    knownReviewer: () => identity.reviewer() ?? assumed,
     reviewer() {
-      const reviewer = identity.reviewer() ?? assumed;
+      const reviewer = workspace.knownReviewer();
       if (reviewer) return reviewer;
       throw new InputError({
         code: 'no-reviewer',

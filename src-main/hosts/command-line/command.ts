@@ -47,6 +47,8 @@ export interface Command {
   examples: string[];
   nPositionals: { min: number; max: number };
   options: Record<string, OptionRule>;
+  /** The folder that stands for the reviewer's own, where a command must leave that alone. */
+  home?(args: CommandArguments): string;
   /** Always JSON, whether asked for or not. */
   isJsonOnly?: boolean;
   run(args: CommandArguments, tools: CommandTools): Promise<CommandOutcome>;

@@ -30,6 +30,7 @@ export const projectCommands: Command[] = [
     examples: ['demo /tmp/footing-demo'],
     nPositionals: { min: 1, max: 1 },
     options: {},
+    home: ({ positionals: [directory = ''] }) => directory,
     async run({ positionals: [directory = ''] }, tools) {
       const view = await tools.ask('project.openDemo', { directory });
       for (const claim of view.claims) {
@@ -137,7 +138,10 @@ export const projectCommands: Command[] = [
 async function signDemo(tools: CommandTools, claimId: number): Promise<void> {
   const { reviewer } = await tools.ask('session.get', {});
   const passphrase = 'worked example, invented';
-  if (!reviewer?.publicKey) await tools.ask('identity.create', { passphrase });
+  if (!reviewer?.publicKey) {
+    await tools.ask('reviewer.set', { name: reviewer?.name ?? '', role: reviewer?.role ?? '' });
+    await tools.ask('identity.create', { passphrase });
+  }
   await tools.ask('finding.sign', {
     claimId,
     passphrase,

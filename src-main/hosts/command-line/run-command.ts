@@ -31,9 +31,14 @@ export interface Streams {
 }
 
 /** Runs one command of the command line and gives its exit status. */
-export async function runCommand(argv: string[], core: CommandCore, streams: Streams): Promise<ExitStatus> {
+export async function runCommand(
+  argv: string[],
+  createCore: (home: string | undefined) => CommandCore,
+  streams: Streams,
+): Promise<ExitStatus> {
   const [name = 'help', ...rest] = argv;
   const isJson = rest.includes('--json');
+  let core: CommandCore | null = null;
   try {
     if (name === 'help' || name === '--help' || name === '-h') {
       streams.out(`${rest[0] && !rest[0].startsWith('-') ? helpOf(findCommand(rest[0])) : helpOverview(commands)}\n`);
@@ -45,6 +50,7 @@ export async function runCommand(argv: string[], core: CommandCore, streams: Str
       return 0;
     }
     const args = readArguments(command, rest);
+    core = createCore(command.home?.(args));
     const tools = commandTools(core, streams);
     if (args.has('reviewer')) {
       await tools.ask('reviewer.set', { name: args.option('reviewer') ?? '', role: args.option('role') ?? '' });
@@ -60,7 +66,7 @@ export async function runCommand(argv: string[], core: CommandCore, streams: Str
     streams.error(`${errorSentence(error)}\n`);
     return error.kind === 'ProjectError' ? 3 : 2;
   } finally {
-    await core.close();
+    await core?.close();
   }
 }
 

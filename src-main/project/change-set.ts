@@ -31,6 +31,7 @@ export class ChangeSet implements Change {
   readonly #frozen: FrozenRecords;
   readonly #touched = new Map<string, Touched>();
   readonly #newContent: string[] = [];
+  readonly #firstNewIds = new Map<RecordKind, number>();
   #isOpen = true;
 
   constructor(records: RecordTables, contents: ContentTable, frozen: FrozenRecords) {
@@ -40,7 +41,9 @@ export class ChangeSet implements Change {
   }
 
   add<Kind extends RecordKind>(kind: Kind, record: NewRecord<Kind>): RecordOf<Kind> {
-    const added = parseRecord(kind, { ...record, id: this.#records.nextId(kind) });
+    const id = this.#records.nextId(kind);
+    if (!this.#firstNewIds.has(kind)) this.#firstNewIds.set(kind, id);
+    const added = parseRecord(kind, { ...record, id });
     this.write(kind, added.id, canonicalJson(added));
     return added;
   }
@@ -79,10 +82,23 @@ export class ChangeSet implements Change {
   /** Ends the set: the changes in order of first touch, leaving out what came back to where it was. */
   close(): { changes: RecordChange[]; content: string[] } {
     this.#isOpen = false;
-    const changes = [...this.#touched.values()]
-      .filter(({ before, after }) => before !== after)
-      .map(({ kind, id, before, after }) => ({ kind, id, before: parseBody(before), after: parseBody(after) }));
+    const changed = [...this.#touched.values()].filter(({ before, after }) => before !== after);
+    this.#takeBackUnusedNumbers(changed);
+    const changes = changed.map(({ kind, id, before, after }) => ({
+      kind,
+      id,
+      before: parseBody(before),
+      after: parseBody(after),
+    }));
     return { changes, content: this.#newContent };
+  }
+
+  /** Numbers of records that were added and removed again never left this command, so they are free. */
+  #takeBackUnusedNumbers(changed: readonly Touched[]): void {
+    for (const [kind, firstNewId] of this.#firstNewIds) {
+      const usedIds = changed.filter((change) => change.kind === kind).map(({ id }) => id);
+      this.#records.setNextId(kind, Math.max(firstNewId, ...usedIds.map((id) => id + 1)));
+    }
   }
 
   #requireExisting(kind: RecordKind, id: number): void {

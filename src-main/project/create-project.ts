@@ -44,7 +44,7 @@ function writeDraft(path: string, { title, isInvented, ...doing }: Omit<NewProje
   db.pragma('synchronous = FULL');
   db.pragma(`application_id = ${applicationId}`);
   db.pragma(`user_version = ${schemaVersion}`);
-  db.exec(schemaSql);
+  db.exec(`BEGIN; ${schemaSql} COMMIT;`);
   const project = new Project(path, db, { isReadOnly: false, close: () => db.close() });
   try {
     project.command({ ...doing, action: 'create project', subject: title }, (change) =>

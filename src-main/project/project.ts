@@ -176,8 +176,9 @@ export class Project {
       const outcome = make(changeSet);
       const changed = changeSet.close();
       if (isPromise(outcome)) throw misuse('promise-in-command', 'a command that ends at once', 'a promise');
-      if (changed.changes.length + changed.content.length > 0) this.#trail.append({ ...describe(outcome), ...changed });
-      this.#db.exec('COMMIT');
+      const isEmpty = changed.changes.length + changed.content.length === 0;
+      if (!isEmpty) this.#trail.append({ ...describe(outcome), ...changed });
+      this.#db.exec(isEmpty ? 'ROLLBACK' : 'COMMIT');
       return outcome;
     } catch (error) {
       const reason = brokenReference(error, this.#db) ?? asProjectError(error, this.path);

@@ -13,6 +13,7 @@ interface TableStatements {
 export class RecordTables {
   readonly #statements: Map<RecordKind, TableStatements>;
   readonly #lastId: Statement<[string], number>;
+  readonly #setLastId: Statement<[number, string]>;
 
   constructor(db: Database) {
     this.#statements = new Map(
@@ -28,6 +29,7 @@ export class RecordTables {
       ]),
     );
     this.#lastId = db.prepare<[string], number>('SELECT seq FROM sqlite_sequence WHERE name = ?').pluck();
+    this.#setLastId = db.prepare<[number, string]>('UPDATE sqlite_sequence SET seq = ? WHERE name = ?');
   }
 
   read(kind: RecordKind, id: number): string | undefined {
@@ -41,6 +43,10 @@ export class RecordTables {
   /** One more than the largest id ever given out: the number of a removed record is not used again. */
   nextId(kind: RecordKind): number {
     return (this.#lastId.get(kind) ?? 0) + 1;
+  }
+
+  setNextId(kind: RecordKind, id: number): void {
+    this.#setLastId.run(id - 1, kind);
   }
 
   /** Makes the record what `body` says; null removes it. */

@@ -52,12 +52,8 @@ export function parseExpression(tokens: readonly Token[]): ParsedSide {
         return withMarks({ kind: 'number', text: token.text });
       case 'name':
         return withMarks({ kind: 'name', name: token.text, column: token.column });
-      case 'open': {
-        const inner = parse(0);
-        if (peek().kind !== 'close') throw unexpected(peek(), 'an operator or “)”');
-        advance();
-        return withMarks(inner);
-      }
+      case 'open':
+        return withMarks(restOfBracket());
       case 'function':
         return withMarks(parseCall(token.text as FunctionName, token.column));
       case 'operator':
@@ -71,15 +67,15 @@ export function parseExpression(tokens: readonly Token[]): ParsedSide {
   function parseCall(functionName: FunctionName, column: number): Expression {
     if (functionName === 'log') remarks.push('“log” is read as the logarithm to base 10.');
     const hasBrackets = peek().kind === 'open';
-    const argument = hasBrackets ? bracketed() : parse(signPower);
+    if (hasBrackets) advance();
+    const argument = hasBrackets ? restOfBracket() : parse(signPower);
     if (!hasBrackets && peek().kind === 'operator' && peek().text === '/') {
       remarks.push(`“${functionName}” without brackets is read as taking only what stands before the “/”.`);
     }
     return { kind: 'call', functionName, argument, column };
   }
 
-  function bracketed(): Expression {
-    advance();
+  function restOfBracket(): Expression {
     const inner = parse(0);
     if (peek().kind !== 'close') throw unexpected(peek(), 'an operator or “)”');
     advance();

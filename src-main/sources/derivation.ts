@@ -135,7 +135,8 @@ function printedAlone(expression: Expression): StatedSide | null {
 /** The last side when it is a number alone, else the first; -1 when neither is. */
 function statedSidePlace(sides: readonly ParsedSide[]): number {
   if (sides.length < 2) return -1;
-  return [sides.length - 1, 0].find((place) => printedAlone(sides[place]!.expression) !== null) ?? -1;
+  const isAlone = sides.map(({ expression }) => printedAlone(expression) !== null);
+  return isAlone.at(-1) ? sides.length - 1 : isAlone[0] ? 0 : -1;
 }
 
 function contextOf(names: NamedValues): EvaluationContext {

@@ -26,7 +26,8 @@ export interface Table {
   lines: TableLine[];
 }
 
-interface JoinedLine {
+/** A line, with those that a quoted cell goes on in. */
+export interface JoinedLine {
   text: string;
   cells: string[] | null;
   nLines: number;
@@ -69,7 +70,12 @@ export function headerCells(text: string, { commentMarks, delimiter }: Omit<Tabl
 }
 
 /** A cell in quotation marks may hold line ends: the row then goes on in the next line, if that makes it whole. */
-function joinQuoted(lines: readonly string[], start: number, delimiter: Delimiter, nCells: number | null): JoinedLine {
+export function joinQuoted(
+  lines: readonly string[],
+  start: number,
+  delimiter: Delimiter,
+  nCells: number | null,
+): JoinedLine {
   const first = lines[start] ?? '';
   const alone = { text: first, cells: splitLine(first, delimiter), nLines: 1 };
   if (delimiter === 'blanks' || alone.cells !== null) return alone;

@@ -32,7 +32,7 @@ const monthForms: readonly PlaceOf[] = [
 
 /** Ways of writing a day in one cell, with the order of its parts. */
 const dayForms: readonly { pattern: RegExp; order: readonly ('year' | 'month' | 'day')[] }[] = [
-  { pattern: /^(\d{4})[-/.](\d{1,2})[-/.](\d{1,2})(?:[T ].*)?$/, order: ['year', 'month', 'day'] },
+  { pattern: /^(\d{4})[-/.](\d{1,2})[-/.](\d{1,2})(?:[T ]\d{1,2}:.*)?$/, order: ['year', 'month', 'day'] },
   { pattern: /^(\d{4})(\d{2})(\d{2})$/, order: ['year', 'month', 'day'] },
   { pattern: /^(\d{1,2})\.(\d{1,2})\.(\d{4})$/, order: ['day', 'month', 'year'] },
   { pattern: /^(\d{1,2})[-/](\d{1,2})[-/](\d{4})$/, order: ['day', 'month', 'year'] },

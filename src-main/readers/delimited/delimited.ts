@@ -7,6 +7,7 @@ import { partialYears } from '../partial-years.ts';
 import { type RowsRead, readRows } from '../read-rows.ts';
 import type { ReadSeries, Reader, Reading, Recognition } from '../reader.ts';
 import { monthsAcross, seriesValues } from '../series-values.ts';
+import { splitLine } from '../split-line.ts';
 import { isComment, splitTable, type Table } from '../split-table.ts';
 import { recogniseHeader } from './recognise-header.ts';
 import { recogniseMeaning } from './recognise-meaning.ts';
@@ -75,15 +76,20 @@ export const delimited: Reader = {
   },
 };
 
-/** @throws InputError `no-table`, and what the recognition of header, time and columns throws */
+/** @throws InputError `no-such-line`, `no-table`, and what the recognition of header, time and columns throws */
 function layoutOf(file: TextFile, options: DelimitedOptions): Layout {
+  const stated = options.headerLine ?? 0;
+  if (stated > file.lines.length) throw noSuchLine(file, stated);
   const split = recogniseSplit(file, options);
   if (split === null) throw noTable(file, 'lines that hold a year or date and at least one number');
   const { headerLine, names } = recogniseHeader(file, split, options);
-  if (headerLine === 0 && split.nRows < minRowsWithoutHeader)
+  if (options.headerLine === undefined && headerLine === 0 && split.nRows < minRowsWithoutHeader)
     throw noTable(file, 'a header, or more than a line or two of numbers');
-  // Without a header, text above the first row is a title, not a row.
-  const lines = file.lines.map((line, place) => (headerLine === 0 && place < split.firstRow ? '' : line));
+  // Above the first row: titles and rules of dashes are no rows; lines with as many cells as the rows are, if damaged ones.
+  const lines = file.lines.map((line, place) => {
+    if (place >= split.firstRow || place < headerLine) return line;
+    return /[\p{L}\p{N}]/u.test(line) && splitLine(line, split.delimiter)?.length === split.nCells ? line : '';
+  });
   const commentMarks = split.commentMark === null ? [] : [split.commentMark];
   const table = splitTable({ ...file, lines }, { delimiter: split.delimiter, commentMarks, headerLine });
   const time = recogniseTimeColumns(table, names, split, options);
@@ -114,7 +120,7 @@ function seriesOf(file: TextFile, layout: Layout, read: RowsRead): { series: Rea
     if (meaning.unitFrom === 'unknown') withoutUnit.push(name);
     if (isCelsiusDifference) celsius.push(name);
     const plain = nameOf(name) || 'column';
-    const key = series.some((other) => other.key === plain) ? `${plain}-${position}` : plain;
+    const key = series.some((other) => other.key === plain) ? nameOf(`${plain} ${position}`) : plain;
     series.push({
       key,
       suggestedName: nameOf(`${stem} ${key}`) || key,
@@ -200,5 +206,15 @@ function noTable(file: TextFile, expected: string): InputError {
     expected,
     received: `“${(file.lines[place] ?? '').trim().slice(0, 80)}” and ${file.lines.length - 1} more lines that hold none`,
     hint: 'If the file is a table, say in the preview how its columns are separated and which one states the time.',
+  });
+}
+
+function noSuchLine(file: TextFile, headerLine: number): InputError {
+  return new InputError({
+    code: 'no-such-line',
+    where: `${file.fileName}, line ${headerLine}`,
+    expected: `a header in one of the ${file.lines.length} lines`,
+    received: `line ${headerLine}`,
+    hint: 'Choose the line that names the columns; 0 when there is none.',
   });
 }

@@ -1,7 +1,7 @@
 import { type DecimalMark, parseNumber } from '../parse-number.ts';
 
 const dateLike =
-  /^(\d{4}[-/.]\d{1,2}([-/.]\d.*)?|\d{1,2}[-/.](\d{1,2}[-/.])?\d{4}|\d{4}[-/ ]?[a-z]{3,9}|[a-z]{3,9}[-/ ]?\d{4})$/i;
+  /^(\d{4}[-/.]\d{1,2}([-/.]\d{1,2}([T ]\d{1,2}:.*)?)?|\d{1,2}[-/.](\d{1,2}[-/.])?\d{4}|\d{4}[-/ ]?[a-z]{3,9}|[a-z]{3,9}[-/ ]?\d{4})$/i;
 
 /** Whether a cell holds a number or a date, as cells of rows do and cells of headers do not. */
 export function isDataCell(cell: string, decimalMark: DecimalMark): boolean {

@@ -1,5 +1,6 @@
 import type { DelimitedOptions } from '../../contract/series.ts';
 import type { TextFile } from '../decode-text.ts';
+import { isMissingText } from '../missing-marks.ts';
 import type { DecimalMark } from '../parse-number.ts';
 import { type Delimiter, splitLine } from '../split-line.ts';
 import { isComment } from '../split-table.ts';
@@ -68,8 +69,10 @@ function rate(
       place,
       nCells: cells.length,
       nData: cells.filter((cell) => isDataCell(cell, decimalMark)).length,
+      nMissing: cells.filter(isMissingText).length,
     }))
-    .filter(({ nData }) => nData >= 2);
+    // A number or date, and either another or nothing but marks for "no value" beside it.
+    .filter(({ nCells, nData, nMissing }) => nData >= 2 || (nData === 1 && nCells > 1 && nMissing === nCells - 1));
   const counts = new Map<number, number>();
   for (const { nCells, nData } of rows) counts.set(nCells, (counts.get(nCells) ?? 0) + nData);
   const [winner] = [...counts].toSorted((a, b) => b[1] - a[1]);

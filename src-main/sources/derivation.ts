@@ -76,7 +76,7 @@ function evaluateSides(
   const [principal] = computedSides;
   if (!first || !principal) throw new TypeError('a derivation line has at least one computed side');
   const remarks = sides.flatMap((side) => side.remarks);
-  const sidesMeet = values.every((value) => value.low <= first.high && value.high >= first.low);
+  const sidesMeet = values.every((value) => isSameWithinRounding(value, first));
   const computed = { value: first.value, computedInterval: { low: first.low, high: first.high } };
   if (!stated || !statedSide) {
     if (!sidesMeet) remarks.push('The sides of this line do not have the same value.');
@@ -88,7 +88,8 @@ function evaluateSides(
     };
     return { answer, assigned: first };
   }
-  const agrees = values.every((value) => meetsStated(value, stated));
+  const failing = computedSides.find((_, place) => !meetsStated(values[place] ?? first, stated));
+  const agrees = failing === undefined;
   const { low, high } = statedInterval(stated.digits);
   if (agrees && significantDigitsPrinted(stated.digits) === 1) {
     const ends = formatInterval({ low, high }, stated.divisor === 100 ? '%' : '', decimalsPrinted(stated.digits) + 1);
@@ -100,10 +101,16 @@ function evaluateSides(
     stated: stated.divisor === 1 ? stated.digits : `${stated.digits} %`,
     statedInterval: { low: low / stated.divisor, high: high / stated.divisor },
     agrees,
-    likelySlip: agrees ? null : likelySlip(principal.expression, context, stated),
+    likelySlip: failing ? likelySlip(failing.expression, context, stated) : null,
     remark: remarks.join(' ') || null,
   };
   return { answer, assigned: sideValue(statedSide.expression, context) };
+}
+
+/** Whether two intervals meet; sides that are the same by algebra differ in their last binary digits. */
+function isSameWithinRounding(a: RoundedValue, b: RoundedValue): boolean {
+  const slack = 1e-12 * Math.max(Math.abs(a.value), Math.abs(b.value));
+  return a.low <= b.high + slack && a.high >= b.low - slack;
 }
 
 /** A side's value; a number alone on its side is rounded even when it is whole. */

@@ -4,7 +4,7 @@ import { formatNumber } from '../quantities/notation.ts';
 import { axisTicks } from './axis.ts';
 import type { Palette } from './palette.ts';
 import { stemDescription } from './stem-description.ts';
-import { stemFontSize, stemLayout, type StemLayout, type StemRow } from './stem-layout.ts';
+import { stemFontSize, stemLayout, unitLabel, type StemLayout, type StemRow } from './stem-layout.ts';
 import { figureFont, shape, text, type SvgNode } from './svg-node.ts';
 
 /**
@@ -27,7 +27,7 @@ export function stemDrawing(figure: StemFigure, palette: Palette, width: number)
     },
     children: [
       ...bandNodes(layout, palette),
-      ...axisNodes(layout, figure.unit, palette),
+      ...axisNodes(layout, unitLabel(figure), palette),
       ...statedLine(layout, figure, palette),
       ...connectors(layout, palette),
       ...layout.rows.flatMap((row) => rowNodes(row, layout, figure, palette)),
@@ -95,7 +95,7 @@ function axisNodes({ plot, domain, x, columns, rangeHeading }: StemLayout, unit:
         'text-anchor': 'middle',
       }),
     ]),
-    text(unit === '1' ? 'a ratio, no unit' : unit, 0, round(baseline), { fill: palette.ink2 }),
+    text(unit, 0, round(baseline), { fill: palette.ink2 }),
     ...(rangeHeading === '' ? [] : [text(rangeHeading, round(columns.range), heading, { fill: palette.ink2 })]),
   ];
 }

@@ -79,14 +79,21 @@ export function shortQuantity(quantity: QuantityId): string {
   return quantity === 'apparent-sensitivity' ? 'apparent' : quantityNames[quantity].symbol;
 }
 
+/** What stands at the axis. */
+export function unitLabel({ unit }: StemFigure): string {
+  return unit === '1' ? 'a ratio, no unit' : unit;
+}
+
 /** Puts every row, label and column of a stem in its place, in units of the drawing. */
 export function stemLayout(figure: StemFigure, width: number): StemLayout {
   const domain = stemDomain(figure);
   const decimals = axisDecimals(domain);
-  const labelWidth = Math.min(232, Math.max(150, width * 0.28));
   const drafts = draftRows(figure, decimals);
   const widest = (texts: readonly string[]) =>
     Math.ceil(Math.max(0, ...texts.map((each) => textWidth(each, stemFontSize))) * 1.03);
+  // Two of the labels are bold.
+  const wanted = widest([unitLabel(figure), ...drafts.map((row) => row.label)]) * 1.05;
+  const labelWidth = Math.min(wanted, 232, Math.max(150, width * 0.28));
   const level = commonLevel(figure);
   const rangeHeading = level === null ? '' : formatLevel(level);
   const valueWidth = widest(drafts.map((row) => row.valueText)) * 1.06;

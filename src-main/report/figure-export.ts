@@ -30,7 +30,7 @@ export async function exportFigure(figure: Figure, format: FigureFormat): Promis
 }
 
 async function svgFile(figure: Figure): Promise<Buffer> {
-  // Loaded when first needed: the fonts are half a megabyte.
+  // Loaded when first needed: the fonts are a third of a megabyte.
   const { figureFontFaces } = await import('./font-faces.ts');
   const drawing = captionedDrawing(figure, printPalette, widthPx);
   const fonts = figureFontFaces(JSON.stringify(figure));

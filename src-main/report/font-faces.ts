@@ -23,7 +23,6 @@ const sansFaces: readonly FontFace[] = [
 const greekFaces: readonly FontFace[] = [{ ...serif, file: fontFiles.greek, ...greekOnly }];
 const textFaces: readonly FontFace[] = [
   { ...serif, file: fontFiles.serif, ...always },
-  { ...serif, file: fontFiles.serifItalic, style: 'italic', ...always },
   { ...serif, file: fontFiles.serifExtended, ...extended },
   { family: 'Atkinson Hyperlegible Mono', file: fontFiles.mono, style: 'normal', weights: '200 800', ...always },
 ];

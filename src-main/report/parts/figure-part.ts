@@ -1,0 +1,24 @@
+import type { Figure } from '../../contract/figure.ts';
+import { figureDrawing } from '../../figures/figure-drawing.ts';
+import { printPalette } from '../../figures/palette.ts';
+import { svgText } from '../../figures/svg-text.ts';
+import { shortDigest } from '../../quantities/notation.ts';
+import { Html, html, joined } from '../html.ts';
+
+const widthPx = 700;
+
+/** Figures of the window sweep stand with its quantiles; all others with the recomputation. */
+export function isWindowsFigure({ name }: Figure): boolean {
+  return name.endsWith('-windows');
+}
+
+/** A figure with what it shows and the digests of its data. */
+export function figurePart(figure: Figure): Html {
+  const drawing = new Html(svgText(figureDrawing(figure, printPalette, widthPx)));
+  const digests = figure.digests.map((digest) => html`<code title="${digest}">${shortDigest(digest)}</code>`);
+  const data = digests.length === 0 ? null : html` <span class="digests">From data ${joined(digests, ', ')}.</span>`;
+  return html`<figure>
+    ${drawing}
+    <figcaption>${figure.caption}${data}</figcaption>
+  </figure>`;
+}

@@ -1,5 +1,6 @@
 import { fitLogRegression } from '../climate/procedures/fit-log-regression.ts';
 import type { LogRegressionProcedure } from '../contract/claim.ts';
+import type { Caveat } from '../contract/primitives.ts';
 import type { DrawnNumber, JointDraws } from '../robustness/ladder.ts';
 import { logClaimLine } from './claim-line.ts';
 import { forcingLine } from './forcing-line.ts';
@@ -17,7 +18,8 @@ export interface Footing {
   countsHeatUptake: boolean;
 }
 
-export type RungOffer = { label: string; change(footing: Footing): Footing } | { reason: string };
+/** A change that an assumption can make to a footing, with the doubts that it brings; or why it cannot make one. */
+export type RungOffer = { label: string; change(footing: Footing): Footing; caveats: Caveat[] } | { reason: string };
 
 export function footingOf({ intercept }: LogRegressionProcedure): Footing {
   return { hasFreeIntercept: intercept, predictor: 'co2', countsHeatUptake: false };

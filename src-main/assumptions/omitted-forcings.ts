@@ -103,14 +103,18 @@ export const omittedForcings: Assumption = {
           ...both.rows,
         ],
       },
-      caveats: [...yearCaveats(line), ...both.caveats, ...fitCaveats(line.regression)],
+      caveats: [...forcingCaveats(line), ...both.caveats, ...fitCaveats(line.regression)],
     });
   },
 
-  rung({ computation }) {
-    const missing = forcingMissing(computation);
+  rung(context) {
+    const missing = forcingMissing(context.computation);
     if (missing) return { reason: `${missing.reason} ${missing.wouldNeed}` };
-    return { label: 'All forcings, not CO2 alone', change: (footing) => ({ ...footing, predictor: 'total-forcing' }) };
+    return {
+      label: 'All forcings, not CO2 alone',
+      change: (footing) => ({ ...footing, predictor: 'total-forcing' }),
+      caveats: forcingCaveats(forcingLine(context, logClaimLine(context).intercept)),
+    };
   },
 };
 
@@ -179,12 +183,24 @@ function twoPredictors(
   }
 }
 
-function yearCaveats({ yearsWithout }: ForcingLine): Caveat[] {
-  if (yearsWithout.length === 0) return [];
-  return [
-    {
+/** W/m² from one year to the next: no slow forcing moves that fast, an eruption does. Common practice, no source. */
+const largestSlowStepWm2 = 0.3;
+
+function forcingCaveats({ yearsWithout, forcingWm2 }: ForcingLine): Caveat[] {
+  const caveats: Caveat[] = [];
+  if (yearsWithout.length > 0) {
+    caveats.push({
       code: 'forcing-years-missing',
       detail: `No total forcing in ${formatYearList(yearsWithout)}: the line on forcing does without these years of the record. The table gives the number on CO2 alone in the same years.`,
-    },
-  ];
+    });
+  }
+  const steps = forcingWm2.slice(1).map((value, row) => Math.abs(value - (forcingWm2[row] ?? NaN)));
+  const largest = steps.reduce((most, step) => Math.max(most, step), 0);
+  if (largest > largestSlowStepWm2) {
+    caveats.push({
+      code: 'forcing-with-eruptions',
+      detail: `Total forcing steps by up to ${formatNumber(largest, { decimals: 1 })} W/m² from one year to the next, as after an eruption. Temperature answers over years, not within one, so the slope on forcing as it is comes out too low; the number ÷ ratio in the table does not depend on single years.`,
+    });
+  }
+  return caveats;
 }

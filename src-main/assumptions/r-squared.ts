@@ -59,7 +59,7 @@ export const rSquared: Assumption = {
                 '1 − RSS/Σ(y − ȳ)², of the procedure’s own line; below 0 when the mean predicts better than the line',
             },
       test: figures,
-      reading: `${figures}.${stated ? ` Stated: ${stated.text}.` : ''} ${reason}${rivalText ? ` With an intercept, R² is ${rivalText}: it does not tell these predictors apart.` : ''}`,
+      reading: `${figures}.${stated ? ` Stated: ${stated.text}.` : ''} ${reason}${rivalText ? ` With an intercept, R² is ${rivalText}. A rising record gives every rising predictor a high R²: it does not tell them apart.` : ''}`,
       proposal: { mark, reason },
       sentence: `${stated ? `An R² of ${stated.text} is stated. ` : ''}The line of the procedure has an R² of ${shown(centred)} in the usual sense (against the mean) and of ${shown(uncentred)} against zero. ${reason}${rivalText ? ` A high R² does not show a cause: with an intercept it is ${rivalText}.` : ''}`,
       table: {

@@ -92,7 +92,17 @@ export const transientAsEquilibrium: Assumption = {
   rung({ computation, recomputation }) {
     if (!computation.evidence.energyBudget) return { reason: `${missing.reason} ${missing.wouldNeed}` };
     perDoublingFactor(recomputation.unit);
-    return { label: 'Heat still going into the oceans', change: (footing) => ({ ...footing, countsHeatUptake: true }) };
+    return {
+      label: 'Heat still going into the oceans',
+      change: (footing) => ({ ...footing, countsHeatUptake: true }),
+      caveats: [
+        {
+          code: 'budget-periods',
+          detail:
+            'The step for heat uptake takes the forcing and heat uptake of the energy budget for those of the record’s own years.',
+        },
+      ],
+    };
   },
 };
 

@@ -74,7 +74,11 @@ export const zeroIntercept: Assumption = {
   rung: ({ computation }) =>
     computation.procedure.kind === 'log-regression' && computation.procedure.intercept
       ? { reason: 'The procedure has a free intercept already.' }
-      : { label: 'Line with a free intercept', change: (footing) => ({ ...footing, hasFreeIntercept: true }) },
+      : {
+          label: 'Line with a free intercept',
+          change: (footing) => ({ ...footing, hasFreeIntercept: true }),
+          caveats: [],
+        },
 };
 
 /** The classical comparison of the two fits, in words. */

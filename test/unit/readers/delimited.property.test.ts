@@ -123,25 +123,25 @@ describe('delimited', () => {
           expect(values.values).toEqual(way.rows.map((row) => row[column] ?? null));
         });
       }),
-      { numRuns: 500 },
+      { numRuns: 250 },
     );
   });
 
   it('reads shuffled rows as the sorted ones', () => {
     fc.assert(
-      fc.property(written, fc.infiniteStream(fc.nat(1000)), (way, keys) => {
+      fc.property(written, fc.array(fc.nat(1000), { minLength: 40, maxLength: 40 }), (way, keys) => {
         const lines = writeTable({ ...way, head: 'header', lineEnd: '\n', hasMark: false })
           .trimEnd()
           .split('\n');
         const [header = '', ...rows] = lines;
-        const order = rows.map((row) => ({ row, key: keys.next().value })).toSorted((a, b) => a.key - b.key);
+        const order = rows.map((row, place) => ({ row, key: keys[place] ?? 0 })).toSorted((a, b) => a.key - b.key);
         const shuffled = [header, ...order.map(({ row }) => row)].join('\n');
         const key = preview(lines.join('\n')).series[0]?.key ?? '';
         expect(read(shuffled, [{ key }]).series[0]?.values).toEqual(
           read(lines.join('\n'), [{ key }]).series[0]?.values,
         );
       }),
-      { numRuns: 100 },
+      { numRuns: 50 },
     );
   });
 
@@ -163,7 +163,7 @@ describe('delimited', () => {
         expect(nRows + badRows.length + nBlank).toBe(30 + noise.length);
         for (const { line: place, text: shown } of badRows) expect(shown).toBe(text.split('\n')[place - 1]);
       }),
-      { numRuns: 300 },
+      { numRuns: 150 },
     );
   });
 });

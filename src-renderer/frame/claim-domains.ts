@@ -8,8 +8,8 @@ const minShare = 0.25;
 export function claimDomains(claims: readonly ClaimLine[]): Map<string, Domain> {
   const marks = new Map<string, number[]>();
   for (const { unit, statedValue, recomputed } of claims) {
-    const found = [statedValue, recomputed?.value, recomputed?.low, recomputed?.high].filter((mark) => mark != null);
-    marks.set(unit, [...(marks.get(unit) ?? []), ...found]);
+    const found = recomputed ? [recomputed.value, recomputed.low, recomputed.high] : [];
+    marks.set(unit, [...(marks.get(unit) ?? []), statedValue, ...found.filter((mark) => mark !== null)]);
   }
   return new Map([...marks].map(([unit, values]) => [unit, readableDomain(values)]));
 }

@@ -20,7 +20,10 @@ export function fileProblem(file: File): ErrorAnswer | null {
 export function fileBytes(file: File): Promise<string> {
   return new Promise((resolve, reject) => {
     const reader = new FileReader();
-    reader.addEventListener('load', () => resolve(String(reader.result).replace(/^[^,]*,/, '')));
+    reader.addEventListener('load', () => {
+      const dataUrl = typeof reader.result === 'string' ? reader.result : '';
+      resolve(dataUrl.slice(dataUrl.indexOf(',') + 1));
+    });
     reader.addEventListener('error', () => reject(reader.error ?? new Error(`${file.name} cannot be read`)));
     reader.readAsDataURL(file);
   });

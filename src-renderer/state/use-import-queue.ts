@@ -12,9 +12,9 @@ let received = 0;
 
 export interface ImportQueue {
   waiting: Readonly<ShallowRef<readonly WaitingFile[]>>;
-  add(files: readonly File[]): void;
+  add: (files: readonly File[]) => void;
   /** Takes the first file off. */
-  next(): void;
+  next: () => void;
 }
 
 export function useImportQueue(): ImportQueue {

@@ -21,13 +21,13 @@ export interface SessionStore {
   work: Readonly<ShallowRef<readonly ProgressEvent[]>>;
   notice: ShallowRef<Notice | null>;
   /** Sends a request. Whatever it changes in the project is in `project` when the answer arrives. */
-  ask<Name extends RequestName>(name: Name, input: RequestInput<Name>): Promise<Answer<Name>>;
-  load(): Promise<ErrorAnswer | null>;
-  undo(): Promise<void>;
-  redo(): Promise<void>;
-  cancel(jobId: string): Promise<void>;
+  ask: <Name extends RequestName>(name: Name, input: RequestInput<Name>) => Promise<Answer<Name>>;
+  load: () => Promise<ErrorAnswer | null>;
+  undo: () => Promise<void>;
+  redo: () => Promise<void>;
+  cancel: (jobId: string) => Promise<void>;
   /** Stops listening to the host. */
-  close(): void;
+  close: () => void;
 }
 
 export const sessionKey: InjectionKey<SessionStore> = Symbol('session');

@@ -5,7 +5,7 @@ import Database from 'better-sqlite3';
 
 export interface Connection {
   db: Database.Database;
-  close(): void;
+  close: () => void;
 }
 
 /** Opens SQLite on a project file to read and write it. What a killed process left half done is taken back. */

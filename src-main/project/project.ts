@@ -20,11 +20,11 @@ export interface Doing {
   engineVersion: string;
 }
 
-export interface CommandInfo<Outcome> extends Doing {
+export interface CommandInfo extends Doing {
   /** A verb phrase: "import dataset". */
   action: string;
   /** What it is done to, in words: "claim 2 · zero-intercept". */
-  subject: string | ((outcome: Outcome) => string);
+  subject: string;
 }
 
 /** An open project file. */
@@ -108,13 +108,9 @@ export class Project {
    * @throws InputError frozen, no-such-record, record-shape, still-referenced, nested-command, promise-in-command
    * @throws ProjectError read-only, trail-broken, busy, disk
    */
-  command<Outcome>(info: CommandInfo<Outcome>, make: (change: Change) => Outcome): Outcome {
-    const { subject, ...rest } = info;
-    return this.#write(make, (outcome) => ({
-      ...rest,
-      subject: typeof subject === 'function' ? subject(outcome) : subject,
-      undoes: null,
-    }));
+  command<Outcome>(info: CommandInfo, make: (change: Change) => Outcome): Outcome {
+    const { reviewer, at, engineVersion, action, subject } = info;
+    return this.#write({ reviewer, at, engineVersion, action, subject, undoes: null }, make);
   }
 
   /** What Undo and Redo would do next, in words; null when there is nothing, or nothing that may be. */
@@ -142,12 +138,10 @@ export class Project {
   #takeBack(step: UndoStep | null, action: 'undo' | 'redo', doing: Doing): void {
     if (!step || step.refusal !== null) throw cannotTakeBack(step, action);
     const { changes } = this.trailEntry(step.sequence).entry;
-    this.#write(
-      (changeSet) => {
-        for (const change of changes.toReversed()) this.#turnRound(changeSet, change);
-      },
-      () => ({ ...doing, action, subject: `entry ${step.sequence}: ${step.words}`, undoes: step.sequence }),
-    );
+    const subject = `entry ${step.sequence}: ${step.words}`;
+    this.#write({ ...doing, action, subject, undoes: step.sequence }, (changeSet) => {
+      for (const change of changes.toReversed()) this.#turnRound(changeSet, change);
+    });
   }
 
   #turnRound(changeSet: ChangeSet, { kind, id, before, after }: RecordChange): void {
@@ -165,8 +159,8 @@ export class Project {
   }
 
   #write<Outcome>(
+    entry: Omit<TrailEntry, 'sequence' | 'changes' | 'content'>,
     make: (changeSet: ChangeSet) => Outcome,
-    describe: (outcome: Outcome) => Omit<TrailEntry, 'sequence' | 'changes' | 'content'>,
   ): Outcome {
     if (this.isReadOnly) throw readOnly(this.path);
     if (this.#db.inTransaction) throw misuse('nested-command', 'one command at a time', 'a command inside another');
@@ -177,7 +171,7 @@ export class Project {
       const changed = changeSet.close();
       if (isPromise(outcome)) throw misuse('promise-in-command', 'a command that ends at once', 'a promise');
       const isEmpty = changed.changes.length + changed.content.length === 0;
-      if (!isEmpty) this.#trail.append({ ...describe(outcome), ...changed });
+      if (!isEmpty) this.#trail.append({ ...entry, ...changed });
       this.#db.exec(isEmpty ? 'ROLLBACK' : 'COMMIT');
       return outcome;
     } catch (error) {

@@ -20,7 +20,7 @@ export interface RawTables {
   numbering: ReadonlyMap<string, number> | null;
   /** The digest under which content is kept, with that of its bytes. */
   contentDigests: ReadonlyMap<string, string> | null;
-  contentBytes(contentDigest: string): Uint8Array | undefined;
+  contentBytes: (contentDigest: string) => Uint8Array | undefined;
 }
 
 /** Reads whatever can be read of a project file that may have been altered or damaged. */

@@ -121,7 +121,7 @@ export function importSample(project: Project, fileName = 'invented.csv', bytes:
 }
 
 export function addClaim(project: Project, changes: Partial<NewRecord<'claim'>> = {}): Claim {
-  const subject = (claim: Claim) => `claim ${claim.id}`;
+  const subject = `claim ${project.list('claim').length + 1}`;
   return project.command({ ...doing, action: 'add claim', subject }, (change) =>
     change.add('claim', { ...sampleClaim, ...changes }),
   );

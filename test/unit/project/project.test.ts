@@ -119,14 +119,14 @@ describe('command', () => {
   it('stores changes and entry together, with the state before and after', () => {
     const project = emptyProject();
     addClaim(project);
-    const note = project.command({ ...info, subject: (added) => `note ${added.id}` }, (change) => {
+    const note = project.command(info, (change) => {
       const added = change.add('note', noteOn(1));
       change.put('claim', { ...project.get('claim', 1), seed: 2 });
       return added;
     });
     expect(note).toEqual({ id: 1, ...noteOn(1) });
     const { entry } = project.trailEntry(3);
-    expect(entry).toMatchObject({ sequence: 3, ...doing, action: 'add note', subject: 'note 1', undoes: null });
+    expect(entry).toMatchObject({ sequence: 3, ...info, undoes: null });
     expect(entry.changes.map(({ kind, id, before, after }) => [kind, id, before?.['seed'], after?.['seed']])).toEqual([
       ['note', 1, undefined, undefined],
       ['claim', 1, 1, 2],

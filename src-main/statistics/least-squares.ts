@@ -52,7 +52,9 @@ const EPSILON = 2 ** -52;
 const SMALLEST_PIVOT_RATIO = 1e-12;
 /** More refinements than this are needed only where the answer cannot be trusted. */
 const MOST_REFINEMENTS = 6;
-/** Residuals below this share of y's length are what doubled precision leaves of an exact zero. */
+/** Refinement has settled when a step moves less than this share of the coefficients or of y: ten digits stand. */
+const STANDSTILL = 1e-10;
+/** Below this share of y's length a residual, or a column's part in y, is what doubled precision leaves of a zero. */
 const RESOLUTION = 2 ** -80;
 
 /**
@@ -166,7 +168,7 @@ function refinedSolution(caller: string, design: readonly Float64Array[], y: Flo
   const remainder = new Float64Array(y.length);
   const left = new Float64Array(nColumns + 2);
   const right = new Float64Array(nColumns + 2);
-  let lastStep = Infinity;
+  let [step, size] = [Infinity, 0];
 
   for (let round = 0; round <= MOST_REFINEMENTS; round++) {
     // What the present solution leaves of both equations, in doubled precision: f = y − r − Xb, g = −X′r.
@@ -195,8 +197,8 @@ function refinedSolution(caller: string, design: readonly Float64Array[], y: Flo
     f.set(h);
     multiplyByQ(qr, f);
 
-    let step = 0;
-    let size = 0;
+    const lastStep = step;
+    [step, size] = [0, 0];
     for (let j = 0; j < nColumns; j++) {
       const place = qr.pivot[j]!;
       solution[place] = solution[place]! + correction[j]!;
@@ -204,11 +206,11 @@ function refinedSolution(caller: string, design: readonly Float64Array[], y: Flo
       size = Math.max(size, Math.abs(solution[place]!));
     }
     for (let i = 0; i < y.length; i++) remainder[i] = remainder[i]! + f[i]!;
-    if (round > 0 && step <= 2 * EPSILON * size) {
-      return { solution, remainder: remainder.map((value) => (Math.abs(value) < RESOLUTION ? 0 : value)) };
-    }
-    if (round > 0 && step > lastStep / 2) break;
-    lastStep = step;
+    if (round > 0 && (step <= 2 * EPSILON * size || step > lastStep / 2)) break;
+  }
+  // A coefficient that is zero but for rounding never stands still in proportion to itself: y's length, about 1, counts.
+  if (step <= STANDSTILL * Math.max(size, 1)) {
+    return { solution: solution.map(zeroBelowResolution), remainder: remainder.map(zeroBelowResolution) };
   }
   throw new NumericError({
     code: 'ill-conditioned',
@@ -217,6 +219,10 @@ function refinedSolution(caller: string, design: readonly Float64Array[], y: Flo
     received: `columns so nearly dependent (pivot ratio ${qr.pivotRatio.toExponential(1)}) that it does not`,
     hint: 'Leave a column out, or centre and scale the predictors if they are powers of one variable.',
   });
+}
+
+function zeroBelowResolution(value: number): number {
+  return Math.abs(value) < RESOLUTION ? 0 : value;
 }
 
 /** (X′WX)⁻¹ = S P R⁻¹ R⁻ᵀ P′ S with the column scales S. */

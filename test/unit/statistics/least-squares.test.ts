@@ -62,6 +62,26 @@ describe('leastSquares', () => {
     expect(fit.residualSumOfSquares).toBe(0);
   });
 
+  it('finds a coefficient of zero', () => {
+    const alternating = Array.from({ length: 40 }, (_, t) => (-1) ** t);
+    expect([...leastSquares({ columns: [alternating.map(() => 1)], y: alternating }).coefficients]).toEqual([0]);
+    const slope = leastSquares({
+      columns: [alternating.map(() => 1), [...alternating.keys()].map((t) => (t % 4) - 1.5)],
+      y: alternating.map((value) => 0.1 * value),
+    });
+    expectClose(slope.coefficients, [0, -0.04], rounding);
+  });
+
+  it('finds nothing more to explain in its own residuals', () => {
+    const x = Array.from({ length: 50 }, (_, i) => Math.sin(i * i) + i / 7);
+    const columns = [x.map(() => 1), x, x.map((value) => value ** 2)];
+    for (let i = 0; i < 20; i++) {
+      const first = leastSquares({ columns, y: x.map((_, t) => Math.cos(t * (i + 1)) + t) });
+      const second = leastSquares({ columns, y: first.residuals });
+      expectClose(second.coefficients, [0, 0, 0], { rel: 0, abs: 1e-13, why: 'the residuals are rounded to doubles' });
+    }
+  });
+
   it('fits zeros, and as many rows as columns', () => {
     expect([...leastSquares({ columns: [[1, 2, 3]], y: [0, 0, 0] }).coefficients]).toEqual([0]);
     expect([

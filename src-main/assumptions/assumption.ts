@@ -6,11 +6,11 @@ import type { TestContext } from './test-context.ts';
 /** Something the number needs in order to mean what is said, with the test of it. One file each. */
 export interface Assumption extends CatalogueEntry {
   /** Whether a claim's number can stand on this at all. */
-  applies(computation: ClaimComputation): boolean;
+  applies: (computation: ClaimComputation) => boolean;
   /** @throws InputError, NumericError: what stands in the way of the test, for the outcome to say */
-  test(context: TestContext): AssumptionOutcome;
+  test: (context: TestContext) => AssumptionOutcome;
   /** The change that this assumption makes on the ladder, or why it cannot make one; absent when it never does. */
-  rung?(context: TestContext): RungOffer;
+  rung?: (context: TestContext) => RungOffer;
 }
 
 /** An outcome with what most tests leave empty filled in. */

@@ -19,7 +19,8 @@ export interface Footing {
 }
 
 /** A change that an assumption can make to a footing, with the doubts that it brings; or why it cannot make one. */
-export type RungOffer = { label: string; change(footing: Footing): Footing; caveats: Caveat[] } | { reason: string };
+export type RungOffer =
+  { label: string; change: (footing: Footing) => Footing; caveats: Caveat[] } | { reason: string };
 
 export function footingOf({ intercept }: LogRegressionProcedure): Footing {
   return { hasFreeIntercept: intercept, predictor: 'co2', countsHeatUptake: false };

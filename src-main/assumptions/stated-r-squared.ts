@@ -6,7 +6,7 @@ export interface StatedRSquared {
   text: string;
   value: number;
   /** Whether a computed measure rounds to the printed digits. */
-  agreesWith(measure: number | null): boolean;
+  agreesWith: (measure: number | null) => boolean;
 }
 
 const printed =

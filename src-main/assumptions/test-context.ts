@@ -13,14 +13,14 @@ export interface TestContext {
   /** Behind the ladder and every interval that is drawn: the same draws for all. */
   draws: JointDraws;
   /** Weight of the number becoming this one. */
-  weigh(alternative: number): Weight;
+  weigh: (alternative: number) => Weight;
   /** Weight of a shift of this size, whatever its sign. */
-  weighShift(shift: number): Weight;
+  weighShift: (shift: number) => Weight;
   /** A number in the claim's unit, to one digit more than is stated. */
-  show(value: number): string;
-  showWithUnit(value: number): string;
+  show: (value: number) => string;
+  showWithUnit: (value: number) => string;
   /** With its sign always. */
-  showShift(shift: number): string;
+  showShift: (shift: number) => string;
 }
 
 /** Ends of the central 90 % are then known to about 1.5 % of a standard deviation. */

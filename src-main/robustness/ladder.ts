@@ -13,7 +13,7 @@ export type DrawnName = (typeof drawnNames)[number];
 export interface JointDraws {
   seed: number;
   nDraws: number;
-  standardNormal(name: DrawnName): Float64Array;
+  standardNormal: (name: DrawnName) => Float64Array;
 }
 
 /** The number on one footing: its central value, and one value per draw (+Infinity where it is unbounded above). */
@@ -27,14 +27,14 @@ export interface DrawnNumber {
 export interface Rung<Footing> {
   assumptionId: AssumptionId;
   label: string;
-  change(footing: Footing): Footing;
+  change: (footing: Footing) => Footing;
 }
 
 export interface LadderPlan<Footing> {
   start: Footing;
   /** In order of application. */
   rungs: readonly Rung<Footing>[];
-  numberOn(footing: Footing, draws: JointDraws): DrawnNumber;
+  numberOn: (footing: Footing, draws: JointDraws) => DrawnNumber;
   notApplied: Ladder['notApplied'];
   unit: ClaimUnit;
   draws: JointDraws;
@@ -105,8 +105,8 @@ export function jointDraws(seed: number, nDraws: number): JointDraws {
     standardNormal(name) {
       const known = kept.get(name);
       if (known) return known;
-      const { normal } = randomStream(seed, drawnNames.indexOf(name));
-      const drawn = Float64Array.from({ length: nDraws }, normal);
+      const stream = randomStream(seed, drawnNames.indexOf(name));
+      const drawn = Float64Array.from({ length: nDraws }, () => stream.normal());
       kept.set(name, drawn);
       return drawn;
     },

@@ -6,8 +6,8 @@ import { signFinding } from '../project/sign-finding.ts';
 import { publishedValues } from '../quantities/published-values.ts';
 import { refuseFrozen } from './claims.ts';
 import { claimView } from './claim-view.ts';
-import type { Handlers } from './context.ts';
-import { fillIn } from './fill-in.ts';
+import type { HandlerContext, Handlers } from './context.ts';
+import { notReady, refuseUnready } from './ready-to-sign.ts';
 import { latestAnswer } from './stored-results.ts';
 
 export const findingHandlers: Handlers<'finding.save' | 'finding.sign' | 'finding.revise'> = {
@@ -35,8 +35,11 @@ export const findingHandlers: Handlers<'finding.save' | 'finding.sign' | 'findin
     const { workspace } = context;
     const project = workspace.open();
     const finding = latestFinding(project, claimId);
-    if (!finding) throw unfinished(claimId, 'a finding', 'none yet');
-    if (meaning === 'sign-off') refuseUnfinished(project, finding);
+    if (!finding) throw notReady(claimId, 'a finding', 'none yet');
+    if (!finding.isSigned) {
+      refuseUnready(claimView(project, claimId), finding);
+      citeNewestResults(context, finding);
+    }
     signFinding(project, {
       ...workspace.signed(),
       findingId: finding.id,
@@ -51,7 +54,7 @@ export const findingHandlers: Handlers<'finding.save' | 'finding.sign' | 'findin
     const project = workspace.open();
     const finding = latestFinding(project, claimId);
     if (!finding?.isSigned)
-      throw unfinished(claimId, 'a signed finding to revise', finding ? 'an unsigned one' : 'none yet');
+      throw notReady(claimId, 'a signed finding to revise', finding ? 'an unsigned one' : 'none yet');
     const { id: _id, ...signed } = finding;
     workspace.change('revise finding', `claim ${claimId} · revision ${finding.revision + 1}`, (change) =>
       change.add('finding', { ...signed, revision: finding.revision + 1, reason, isSigned: false }),
@@ -72,48 +75,13 @@ function currentResults(project: Project, claimId: number): number[] {
   return resultMethod.options.flatMap((method) => latestAnswer(project, claimId, method)?.result.id ?? []);
 }
 
-/** A finding is signed when it concludes something, in words whose figures are there, on results that are current. */
-function refuseUnfinished(project: Project, finding: Finding): void {
-  const view = claimView(project, finding.claimId);
-  if (!finding.conclusion) throw unfinished(finding.claimId, 'a conclusion', 'none chosen');
-  if (finding.text.trim() === '') throw unfinished(finding.claimId, 'the finding in words', 'an empty text');
-  if (finding.conclusion === 'supported on stated conditions' && finding.conditions.trim() === '') {
-    throw unfinished(finding.claimId, 'the conditions on which the number is supported', 'none stated');
-  }
-  const { unknown } = fillIn(finding.text, view.fillIns);
-  if (unknown.length > 0) {
-    throw unfinished(
-      finding.claimId,
-      `figures that exist (${Object.keys(view.fillIns).join(', ')})`,
-      `{${unknown.join('}, {')}}`,
-    );
-  }
-  const stale = [view.derivation, view.recomputation, view.assumptions, view.sweep].filter((stored) => stored?.isStale);
-  if (stale.length > 0) {
-    throw unfinished(
-      finding.claimId,
-      'results that belong to the claim as it is now',
-      `${stale.length} from before a change`,
-    );
-  }
-  const current = currentResults(project, finding.claimId);
-  if (current.join() !== finding.resultIds.join()) {
-    throw unfinished(
-      finding.claimId,
-      'a finding written on the newest results',
-      'results that came after it; save it again',
-    );
-  }
-  const unmarked = (view.assumptions?.answer.outcomes ?? []).filter(
-    (outcome) => outcome.weight === 'decisive' && !view.marks.some((mark) => mark.assumptionId === outcome.id),
+/** What a signature covers is what the sheet shows: the newest result of each method. */
+function citeNewestResults({ workspace }: HandlerContext, finding: Finding): void {
+  const resultIds = currentResults(workspace.open(), finding.claimId);
+  if (resultIds.join() === finding.resultIds.join()) return;
+  workspace.change('cite newest results', `claim ${finding.claimId} · revision ${finding.revision}`, (change) =>
+    change.put('finding', { ...finding, resultIds }),
   );
-  if (unmarked.length > 0) {
-    throw unfinished(
-      finding.claimId,
-      'your mark on every decisive assumption',
-      `none on ${unmarked.map((outcome) => outcome.id).join(', ')}`,
-    );
-  }
 }
 
 function refuseUnknownValues(ids: readonly string[]): void {
@@ -127,8 +95,4 @@ function refuseUnknownValues(ids: readonly string[]): void {
     received: unknown,
     hint: `Known: ${[...known].join(', ')}.`,
   });
-}
-
-function unfinished(claimId: number, expected: string, received: string): InputError {
-  return new InputError({ code: 'not-ready-to-sign', where: `Finding on claim ${claimId}`, expected, received });
 }

@@ -71,7 +71,8 @@ export function createCore({
     now,
   };
   if (reviewerIfUnknown) context.workspace.assumeReviewer(reviewerIfUnknown);
-  // Requests that write take turns, so that what one read is still true when it writes.
+  // A change is one synchronous step, so most requests need no order. Those that put one project in another's place do:
+  // each waits for the one before, a worked example being filled included.
   let turn: Promise<unknown> = Promise.resolve();
 
   async function answer(name: string, input: unknown): Promise<Answer<RequestName>> {
@@ -82,7 +83,7 @@ export function createCore({
     const handler = handlers[name] as Handler<RequestName>;
     const run = () => handler(parsed.data as never, context);
     try {
-      if (outOfTurn.has(name)) return { ok: true, value: await run() };
+      if (!inTurn.has(name)) return { ok: true, value: await run() };
       const mine = turn.then(run);
       turn = mine.catch(() => undefined);
       return { ok: true, value: await mine };
@@ -102,8 +103,7 @@ export function createCore({
   };
 }
 
-/** Cancelling must not wait for the work that it cancels. */
-const outOfTurn = new Set<RequestName>(['job.cancel', 'session.get', 'figure.export']);
+const inTurn = new Set<RequestName>(['project.create', 'project.open', 'project.openDemo', 'project.close']);
 
 function isRequestName(name: string): name is RequestName {
   return (requestNames as readonly string[]).includes(name);

@@ -1,4 +1,5 @@
 import type { ResultMethod } from '../contract/result.ts';
+import { ProjectError } from '../errors.ts';
 import { engineVersion } from '../engine-version.ts';
 import { canonicalJson } from '../project/canonical-json.ts';
 import type { HandlerContext } from './context.ts';
@@ -28,6 +29,7 @@ export async function runClaimMethod(
   const request = requestFor(project, claim, method, minYears);
   const { method: name, input } = resolveRequest(project, request);
   const answer = await jobs.run(name, input, { jobId, label: `${labels[method].running}: claim ${claimId}` });
+  if (workspace.project !== project) throw projectGone(claimId);
   const digest = requestDigest(request);
   const answerBytes = Buffer.from(canonicalJson(answer), 'utf8');
   workspace.change(labels[method].done, `claim ${claimId}`, (change) => {
@@ -45,5 +47,16 @@ export async function runClaimMethod(
       engineVersion,
       computedAt: now(),
     });
+  });
+}
+
+/** Another project was opened while this one was being computed on: the answer must not end up in that. */
+function projectGone(claimId: number): ProjectError {
+  return new ProjectError({
+    code: 'project-closed',
+    where: `Claim ${claimId}`,
+    expected: 'the project that the computation was started in',
+    received: 'another one, or none',
+    hint: 'Nothing was stored. Open the project again and repeat the computation.',
   });
 }

@@ -47,7 +47,13 @@ export function caseOfRecomputing(): BenchCase {
     seed: 1,
     evidence: { energyBudget: null, comparedWith: null, doublingWm2: null },
     series: {
-      temperatureSeriesId: { name: 't', quantity: 'temperature-anomaly', unit: 'K', values: values(warming), ...common },
+      temperatureSeriesId: {
+        name: 't',
+        quantity: 'temperature-anomaly',
+        unit: 'K',
+        values: values(warming),
+        ...common,
+      },
       co2SeriesId: { name: 'c', quantity: 'co2', unit: 'ppm', values: values(co2), ...common },
     },
   });

@@ -66,9 +66,14 @@ describe('the worked example', () => {
       remark: '',
     });
     expect(signed.isFrozen).toBe(true);
-    expect(signed.signatureChecks).toMatchObject([{ isValid: true, signer: 'Ilse Varrow-Oyelaran, reviewer (invented)' }]);
+    expect(signed.signatureChecks).toMatchObject([
+      { isValid: true, signer: 'Ilse Varrow-Oyelaran, reviewer (invented)' },
+    ]);
 
-    const { files } = await test.ask('report.write', { directory: join(test.folder, 'report'), formats: ['html', 'json'] });
+    const { files } = await test.ask('report.write', {
+      directory: join(test.folder, 'report'),
+      formats: ['html', 'json'],
+    });
     expect(files.every((file) => existsSync(file))).toBe(true);
     const html = readFileSync(files[0] ?? '', 'utf8');
     for (const caution of cautions) expect(html).toContain(caution.slice(0, 40));
@@ -83,7 +88,10 @@ describe('the worked example', () => {
     expect(refused).toMatchObject({ ok: false, error: { code: 'signed' } });
     const revised = await test.ask('finding.revise', { claimId: 1, reason: 'The provider corrected 1998 (invented).' });
     expect(revised.isFrozen).toBe(false);
-    expect(revised.findings).toMatchObject([{ revision: 1, isSigned: true }, { revision: 2, isSigned: false }]);
+    expect(revised.findings).toMatchObject([
+      { revision: 1, isSigned: true },
+      { revision: 2, isSigned: false },
+    ]);
     expect(revised.signatureChecks).toMatchObject([{ isValid: true, revision: 1 }]);
   });
 

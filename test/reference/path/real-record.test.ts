@@ -35,46 +35,49 @@ describe('Mauna Loa CO2 and global temperature, file to number', () => {
     { first: 1959, last: 2016, lag: 3, intercept: false },
     { first: 1965, last: 2010, lag: 5, intercept: true },
   ];
-  it.each(cases)('agrees with R: $first–$last, lag $lag, intercept $intercept', async ({ first, last, lag, intercept }) => {
-    const { series } = await test.ask('project.view', {});
-    const { claim } = await test.ask('claim.create', {
-      title: `${first}–${last}`,
-      statement: { words: 'for the test', quantity: 'apparent-sensitivity', value: '1.9', unit: 'K per doubling' },
-      procedure: {
-        kind: 'log-regression',
-        temperatureSeriesId: series.find(({ quantity }) => quantity === 'temperature-anomaly')?.id ?? 0,
-        co2SeriesId: series.find(({ quantity }) => quantity === 'co2')?.id ?? 0,
-        window: { start: first, end: last },
-        intercept,
-        covariance: { kind: 'newey-west', lag, smallSample: false },
-      },
-    });
-    const { recomputation } = await test.ask('claim.recompute', { claimId: claim.id });
-    const fit = recomputation?.answer.fit;
-    const slopeErrors = (name: RegExp) => fit?.slopes.find(({ convention }) => name.test(convention))?.standardError;
+  it.each(cases)(
+    'agrees with R: $first–$last, lag $lag, intercept $intercept',
+    async ({ first, last, lag, intercept }) => {
+      const { series } = await test.ask('project.view', {});
+      const { claim } = await test.ask('claim.create', {
+        title: `${first}–${last}`,
+        statement: { words: 'for the test', quantity: 'apparent-sensitivity', value: '1.9', unit: 'K per doubling' },
+        procedure: {
+          kind: 'log-regression',
+          temperatureSeriesId: series.find(({ quantity }) => quantity === 'temperature-anomaly')?.id ?? 0,
+          co2SeriesId: series.find(({ quantity }) => quantity === 'co2')?.id ?? 0,
+          window: { start: first, end: last },
+          intercept,
+          covariance: { kind: 'newey-west', lag, smallSample: false },
+        },
+      });
+      const { recomputation } = await test.ask('claim.recompute', { claimId: claim.id });
+      const fit = recomputation?.answer.fit;
+      const slopeErrors = (name: RegExp) => fit?.slopes.find(({ convention }) => name.test(convention))?.standardError;
 
-    const expected = await r.numbers('path_in_r(co2_csv, temperature_csv, first, last, lag, intercept)', {
-      co2_csv: readFileSync(file('co2-concentration.csv'), 'utf8'),
-      temperature_csv: readFileSync(file('global-temp.csv'), 'utf8'),
-      first,
-      last,
-      lag,
-      intercept,
-    });
-    expect(fit?.years).toEqual(expected['years']);
-    expectClose(
-      {
-        value: [recomputation?.answer.value],
-        classical: [slopeErrors(/^classical/i)],
-        hac: [slopeErrors(/^Newey/)],
-        centred: [fit?.diagnostics.rSquaredCentred],
-        uncentred: [fit?.diagnostics.rSquaredUncentred],
-        dw: [fit?.diagnostics.durbinWatson],
-      },
-      Object.fromEntries(Object.entries(expected).filter(([name]) => name !== 'years')),
-      tolerance,
-    );
-  });
+      const expected = await r.numbers('path_in_r(co2_csv, temperature_csv, first, last, lag, intercept)', {
+        co2_csv: readFileSync(file('co2-concentration.csv'), 'utf8'),
+        temperature_csv: readFileSync(file('global-temp.csv'), 'utf8'),
+        first,
+        last,
+        lag,
+        intercept,
+      });
+      expect(fit?.years).toEqual(expected['years']);
+      expectClose(
+        {
+          value: [recomputation?.answer.value],
+          classical: [slopeErrors(/^classical/i)],
+          hac: [slopeErrors(/^Newey/)],
+          centred: [fit?.diagnostics.rSquaredCentred],
+          uncentred: [fit?.diagnostics.rSquaredUncentred],
+          dw: [fit?.diagnostics.durbinWatson],
+        },
+        Object.fromEntries(Object.entries(expected).filter(([name]) => name !== 'years')),
+        tolerance,
+      );
+    },
+  );
 
   it('has a result that can be computed again to the last digit', async () => {
     const report = await test.ask('project.recheck', {});

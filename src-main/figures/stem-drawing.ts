@@ -120,7 +120,7 @@ function statedLine({ plot, x }: StemLayout, { stated }: StemFigure, palette: Pa
 function connectors({ rows, x }: StemLayout, palette: Palette): SvgNode[] {
   return rows.flatMap((row, index) => {
     const above = rows[index - 1];
-    if (!row.isCumulative || row.value === null || above?.value == null) return [];
+    if (!row.isCumulative || row.value === null || !above || above.value === null) return [];
     const [x1, y1, x2, y2] = [round(x(above.value)), round(above.y + 5), round(x(row.value)), round(row.y - 5)];
     const middle = round((y1 + y2) / 2);
     const d = `M${x1} ${y1}C${x1} ${middle} ${x2} ${middle} ${x2} ${y2}`;

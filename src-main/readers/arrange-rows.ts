@@ -2,9 +2,6 @@ import type { BadRow } from '../contract/series.ts';
 import { InputError } from '../errors.ts';
 import type { Place, Row, RowsRead, ValueColumn } from './read-rows.ts';
 
-/** Fewer conflicts than this are slips, however short the file. */
-const minConflicts = 3;
-
 /**
  * Puts rows in order of time and settles repeated ones: a row that repeats an earlier one word for word is left out;
  * of two rows that give different values for the same time the earlier is kept, and both are named.
@@ -30,8 +27,7 @@ export function arrangeRows(fileName: string, rows: readonly Row[], columns: rea
     badRows.push({ line: row.line, text: row.text, reason });
   }
   const [conflict] = conflicts;
-  if (conflict && conflicts.length >= minConflicts && conflicts.length * 2 >= kept.size)
-    throw repeatedTimes(fileName, conflict, conflicts.length);
+  if (conflict && areTooMany(conflicts.length, kept.size)) throw repeatedTimes(fileName, conflict, conflicts.length);
   const notes = conflicts.map(
     ({ first, later }) =>
       `Conflict: lines ${first.line} and ${later.line} give different values for ${placeName(first)}; line ${later.line} is left out.`,
@@ -39,6 +35,11 @@ export function arrangeRows(fileName: string, rows: readonly Row[], columns: rea
   const inFileOrder = [...kept.values()];
   const inOrder = inFileOrder.toSorted((a, b) => orderOf(a) - orderOf(b));
   return { rows: inOrder, badRows, notes: [...notes, ...noteOrder(inFileOrder, inOrder)] };
+}
+
+/** One or two conflicts in a short file are slips; as many as there are times, or half as many in a longer one, are not. */
+function areTooMany(nConflicts: number, nKept: number): boolean {
+  return nConflicts >= nKept || (nConflicts >= 3 && nConflicts * 2 >= nKept);
 }
 
 export function placeName({ year, month }: Place): string {

@@ -115,7 +115,8 @@ function repeatsHeader(cells: readonly string[], header: readonly string[]): boo
 function noteMarks(marks: ReadonlyMap<string, number>): string[] {
   if (marks.size === 0) return [];
   const listed = [...marks].map(
-    ([mark, n]) => `${mark === '' ? 'empty cells' : `“${mark}”`} ${n === 1 ? 'once' : `${n} times`}`,
+    ([mark, n]) =>
+      `${mark === '' ? 'empty cells' : `“${mark}”`} ${n === 1 ? 'once' : n === 2 ? 'twice' : `${n} times`}`,
   );
   return [`Read as missing: ${listed.join(', ')}.`];
 }

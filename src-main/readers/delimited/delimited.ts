@@ -22,6 +22,8 @@ interface Layout {
   table: Table;
   time: TimeColumns;
   values: ValueColumns;
+  /** Titles and comments. */
+  preamble: string;
 }
 
 /** Prose holds a line with two numbers now and then; fewer lines than this without a header are no table. */
@@ -94,12 +96,13 @@ function layoutOf(file: TextFile, options: DelimitedOptions): Layout {
   const table = splitTable({ ...file, lines }, { delimiter: split.delimiter, commentMarks, headerLine });
   const time = recogniseTimeColumns(table, names, split, options);
   if (time === null) throw noTable(file, 'a column of years, months or dates');
-  const values = recogniseValueColumns(table, names, split, time, options);
-  return { split, names, table, time, values };
+  const preamble = textAbove(file, split, headerLine);
+  const values = recogniseValueColumns(table, { names, split, time, preamble }, options);
+  return { split, names, table, time, values, preamble };
 }
 
 function seriesOf(file: TextFile, layout: Layout, read: RowsRead): { series: ReadSeries[]; notes: string[] } {
-  const preamble = textAbove(file, layout);
+  const { preamble } = layout;
   const across = monthColumns(layout);
   const stem = stemOf(file.fileName);
   const series: ReadSeries[] = [];
@@ -169,10 +172,10 @@ function monthColumns({ time, values: { columns } }: Layout): number[] | null {
 }
 
 /** Titles and comments, without the line that names the columns. */
-function textAbove(file: TextFile, { split, table }: Layout): string {
+function textAbove(file: TextFile, split: Split, headerLine: number): string {
   return file.lines
     .filter((line, place) => {
-      if (place === table.headerLine - 1) return false;
+      if (place === headerLine - 1) return false;
       return place < split.firstRow || (split.commentMark !== null && isComment(line, [split.commentMark]));
     })
     .join('\n');
@@ -180,15 +183,25 @@ function textAbove(file: TextFile, { split, table }: Layout): string {
 
 function notesOn({ split, time, values, table }: Layout): string[] {
   const notes: string[] = [];
-  if (split.decimalMark === ',') {
-    const cell = table.lines.flatMap(({ cells }) => cells ?? []).find((text) => /^-?\d*,\d+$/.test(text));
-    notes.push(`Numbers have a decimal comma${cell ? `: “${cell}” is ${Number(cell.replace(',', '.'))}` : ''}.`);
-  }
+  if (split.decimalMark === ',') notes.push(...noteDecimalComma(table));
   if (table.headerLine === 0) notes.push('No line names the columns.');
   if (time.note !== null) notes.push(time.note);
   if (values.wordColumns.length > 0)
     notes.push(`Not offered, because they hold words: ${values.wordColumns.join(', ')}.`);
   return notes;
+}
+
+function noteDecimalComma({ lines }: Table): string[] {
+  const decimals = lines.flatMap(({ cells }) => cells ?? []).filter((cell) => /^-?\d*,\d+$/.test(cell));
+  const [first] = decimals;
+  if (first === undefined) return [];
+  const mayBeThousands = decimals.every((cell) => /^-?\d{1,3},\d{3}$/.test(cell));
+  return [
+    `Numbers have a decimal comma: “${first}” is ${Number(first.replace(',', '.'))}.`,
+    ...(mayBeThousands
+      ? ['All have three digits after the comma. If it parts thousands, the values are wrong: take it out of the file.']
+      : []),
+  ];
 }
 
 function described({ split, names, table, time }: Layout): string {

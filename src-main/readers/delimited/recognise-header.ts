@@ -82,7 +82,7 @@ function cellsOf({ lines }: TextFile, line: number, { delimiter, commentMark, nC
 }
 
 function clean(cell: string): string {
-  return cell.replace(/[,;:]+$/, '').trim();
+  return /^-+$/.test(cell) ? '' : cell.replace(/[,;:]+$/, '').trim();
 }
 
 function isUnit(cell: string): boolean {

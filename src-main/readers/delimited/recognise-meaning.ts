@@ -15,7 +15,10 @@ interface Words {
   fileName: string;
 }
 
+/** As old tables print anomalies; computations know the unit. */
+const hundredths = '0.01 °C';
 const temperatureUnits: readonly [RegExp, string][] = [
+  [/\b0[.,]01 ?(?:[°º]|[Dd]eg(?:ree)?s?\.?)? ?(?:C\b|[Cc]elsius|K\b)/, hundredths],
   [/[°º]\s?C\b|\b[Dd]eg(?:ree)?s?\.?[ -]?C\b|[Cc]elsius|[([]C[)\]]|(?<=\s)C$/, '°C'],
   [/[°º]\s?F\b|\b[Dd]eg(?:ree)?s?\.?[ -]?F\b|[Ff]ahrenheit|[([]F[)\]]|(?<=\s)F$/, '°F'],
   [/\b[Kk]elvin\b|[([]K\b[^)\]]*[)\]]|(?<=\s)K$|\bin K\b/, 'K'],
@@ -90,7 +93,8 @@ function quantityOf({ column, preamble, fileName }: Words, unit: string | null, 
   const isCo2 = co2Words.test(about) && median >= co2RangePpm.low && median <= co2RangePpm.high;
   if (isCo2 && (unit === 'ppm' || unit === null)) return 'co2';
   if (!isTemperatureUnit && (unit !== null || !temperatureWords.test(about))) return 'other';
-  const [lowest, highest] = [present[0] ?? 0, present.at(-1) ?? 0];
+  const scale = unit === hundredths ? 0.01 : 1;
+  const [lowest, highest] = [(present[0] ?? 0) * scale, (present.at(-1) ?? 0) * scale];
   const isSaid = /\banom/i.test(`${column} ${preamble}`);
   const isSmall = Math.max(-lowest, highest) <= largestAnomaly;
   return isSmall && (isSaid || lowest < 0 || highest <= largestSureAnomaly) ? 'temperature-anomaly' : 'temperature';

@@ -27,6 +27,8 @@ const delimiters: readonly Delimiter[] = ['\t', ';', ',', 'blanks'];
 const decimalMarks: readonly DecimalMark[] = ['.', ','];
 const commentMarks: readonly string[] = ['#', '%', '//', '!'];
 const maxSampleLines = 2000;
+/** Of two ways that give as many numbers, the one that leaves fewer cells of something else is right. */
+const wordPenalty = 0.001;
 
 /**
  * Recognises comment mark, delimiter and decimal mark of a delimited text: those under which most cells become numbers
@@ -74,7 +76,10 @@ function rate(
     // A number or date, and either another or nothing but marks for "no value" beside it.
     .filter(({ nCells, nData, nMissing }) => nData >= 2 || (nData === 1 && nCells > 1 && nMissing === nCells - 1));
   const counts = new Map<number, number>();
-  for (const { nCells, nData } of rows) counts.set(nCells, (counts.get(nCells) ?? 0) + nData);
+  for (const { nCells, nData, nMissing } of rows) {
+    const nWords = nCells - nData - nMissing;
+    counts.set(nCells, (counts.get(nCells) ?? 0) + nData - nWords * wordPenalty);
+  }
   const [winner] = [...counts].toSorted((a, b) => b[1] - a[1]);
   const firstRow = rows.find(({ nCells }) => nCells === winner?.[0]);
   if (winner === undefined || firstRow === undefined) return null;

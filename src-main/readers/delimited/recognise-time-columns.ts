@@ -90,15 +90,18 @@ function readTime(
   return { timeColumn, monthColumn, step: 'month', note: null, placeOf };
 }
 
-/** A column named for months, or, right of a column of repeating years, one that holds whole numbers from 1 to 12. */
+/** A column named for months, or, beside a column of repeating years, one without a name that holds 1 to 12. */
 function findMonths(timeColumn: number, names: readonly string[], rows: Rows): number | null {
   const named = names.findIndex((name, column) => column !== timeColumn && monthName.test(name));
-  const column = named === -1 ? timeColumn + 1 : named;
+  if (named !== -1) return holdsMonths(named, rows) ? named : null;
   const years = new Set(rows.map((row) => row[timeColumn]));
-  if (named === -1 && (names[column] ?? '') !== '') return null;
-  if (named === -1 && years.size * 2 > rows.length) return null;
-  const nMonths = rows.filter((row) => isMonth(row[column] ?? '')).length;
-  return nMonths * 2 > rows.length ? column : null;
+  if (years.size * 2 > rows.length) return null;
+  const beside = [timeColumn + 1, timeColumn - 1].filter((column) => names[column] === '');
+  return beside.find((column) => holdsMonths(column, rows)) ?? null;
+}
+
+function holdsMonths(column: number, rows: Rows): boolean {
+  return rows.filter((row) => isMonth(row[column] ?? '')).length * 2 > rows.length;
 }
 
 function isMonth(cell: string): boolean {

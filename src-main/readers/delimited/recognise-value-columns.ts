@@ -16,8 +16,15 @@ export interface ValueColumns {
   wordColumns: string[];
 }
 
+/** What stands for "no value" in all columns. */
+interface Marks {
+  isText: (cell: string) => boolean;
+  isNumberIn: (column: readonly (number | null)[]) => (value: number) => boolean;
+}
+
 const uncertaintyName =
   /^(unc|uncertainty|std|sd|sdev|s\.?d\.?|st\.?dev.*|std.*|se|s\.e\.|sigma|error|err|n ?days|#days|count|n|n_?obs|.*[ _](unc|uncertainty|sd|sdev|std|se|sigma|error|err))\.?$/i;
+const statedMark = /\bmissing(?: (?:values?|data|marks?))?\s*[:=]\s*["']?([^\s,;"']+)/gi;
 
 /** Columns that describe another one (uncertainties, counts) and are never negative. */
 export function isUncertaintyName(name: string): boolean {
@@ -25,60 +32,81 @@ export function isUncertaintyName(name: string): boolean {
 }
 
 /**
- * The columns that hold numbers, and what stands for "no value" in them. With missing marks in the options, exactly
- * these and empty cells count as missing.
+ * The columns that hold numbers, and what stands for "no value" in them: the customary marks and those that the text
+ * above the table states; with missing marks in the options, exactly these and empty cells. In columns of uncertainties
+ * and counts, by their names, every negative number does.
  *
  * @throws InputError `no-such-column`, or `no-numbers` when no column beside the time holds numbers
  */
 export function recogniseValueColumns(
   table: Table,
-  names: readonly string[],
-  split: Split,
-  time: TimeColumns,
+  { names, split, time, preamble }: { names: readonly string[]; split: Split; time: TimeColumns; preamble: string },
   options: DelimitedOptions,
 ): ValueColumns {
-  const rows = table.lines.flatMap(({ cells }) => (cells?.length === split.nCells ? [cells] : []));
-  const marks = options.missingMarks;
-  const isMissing = marks === undefined ? isMissingText : (cell: string) => cell === '' || marks.includes(cell);
   const stated = options.valueColumns?.find((column) => column >= split.nCells);
-  if (stated !== undefined)
+  if (stated !== undefined) {
     throw noColumn(table, 'no-such-column', `one of ${split.nCells} columns`, `column ${stated + 1}`);
+  }
+  const marks = marksOf(options, preamble, split);
   const taken = [time.timeColumn, time.monthColumn, ...time.repeated];
   const candidates =
     options.valueColumns ?? names.map((_, column) => column).filter((column) => !taken.includes(column));
-  const found = new Set<string>();
-  const columns: ValueColumn[] = [];
-  const wordColumns: string[] = [];
+  const found: ValueColumns = { columns: [], isMissingText: marks.isText, missingMarks: [], wordColumns: [] };
   for (const index of candidates) {
-    const cells = rows.map((row) => row[index] ?? '');
-    const filled = cells.filter((cell) => !isMissing(cell));
-    const numbers = cells.map((cell) => (isMissing(cell) ? null : parseNumber(cell, split.decimalMark)));
+    const cells = table.lines.flatMap(({ cells: all }) => (all?.length === split.nCells ? [all[index] ?? ''] : []));
+    const numbers = cells.map((cell) => (marks.isText(cell) ? null : parseNumber(cell, split.decimalMark)));
     const nNumbers = numbers.filter((number) => number !== null).length;
+    const nFilled = cells.filter((cell) => !marks.isText(cell)).length;
     const name = columnName(names, index);
-    if (nNumbers === 0 || nNumbers * 2 <= filled.length) {
-      if (filled.length > 0) wordColumns.push(name);
+    if (nNumbers === 0 || nNumbers * 2 <= nFilled) {
+      if (nFilled > 0) found.wordColumns.push(name);
       continue;
     }
-    const isMark =
-      marks === undefined
-        ? numericMarksOf(numbers)
-        : (value: number) => marks.some((mark) => parseNumber(mark, split.decimalMark) === value);
-    const isNever = marks === undefined && isUncertaintyName(name) ? isNegative : () => false;
-    columns.push({ index, name, isMissing: (value) => isMark(value) || isNever(value) });
-    cells.forEach((cell, place) => {
-      const number = numbers[place] ?? null;
-      if (cell !== '' && (isMissing(cell) || (number !== null && isMark(number)))) found.add(cell);
-    });
+    const isUnnamed = names[index] === '' && names.some((other) => other !== '');
+    if (options.valueColumns === undefined && isUnnamed && isRowNumbers(numbers)) continue;
+    const isMark = marks.isNumberIn(numbers);
+    const isImpossible = isUncertaintyName(name) ? isNegative : (): boolean => false;
+    found.columns.push({ index, name, isMissing: (value) => isMark(value) || isImpossible(value) });
+    found.missingMarks.push(
+      ...cells.filter((cell, place) => cell !== '' && (marks.isText(cell) || isMark(numbers[place] ?? Number.NaN))),
+    );
   }
-  if (columns.length === 0) {
-    const received = wordColumns.length === 0 ? 'no other column' : `words in ${wordColumns.slice(0, 5).join(', ')}`;
-    throw noColumn(table, 'no-numbers', 'a column of numbers beside the time', received);
+  if (found.columns.length === 0) {
+    const words = found.wordColumns.slice(0, 5).join(', ');
+    throw noColumn(
+      table,
+      'no-numbers',
+      'a column of numbers beside the time',
+      words ? `words in ${words}` : 'no other column',
+    );
   }
-  return { columns, isMissingText: isMissing, missingMarks: marks ?? [...found], wordColumns };
+  return { ...found, missingMarks: options.missingMarks ?? [...new Set(found.missingMarks)] };
 }
 
 export function columnName(names: readonly string[], column: number): string {
   return names[column] || `column ${column + 1}`;
+}
+
+function marksOf({ missingMarks }: DelimitedOptions, preamble: string, { decimalMark }: Split): Marks {
+  const stated = missingMarks ?? [...preamble.matchAll(statedMark)].map(([, mark]) => mark ?? '');
+  const numbers = stated.map((mark) => parseNumber(mark, decimalMark));
+  const isStated = (cell: string): boolean => cell === '' || stated.includes(cell);
+  if (missingMarks !== undefined) return { isText: isStated, isNumberIn: () => (value) => numbers.includes(value) };
+  return {
+    isText: (cell) => isMissingText(cell) || isStated(cell),
+    isNumberIn(column) {
+      const isCustomary = numericMarksOf(column.filter((value) => !numbers.includes(value)));
+      return (value) => numbers.includes(value) || isCustomary(value);
+    },
+  };
+}
+
+/** Some programs write row numbers, from 0 or 1 on, into a column without a name. */
+function isRowNumbers(numbers: readonly (number | null)[]): boolean {
+  const first = numbers[0] ?? Number.NaN;
+  return (
+    numbers.length > 1 && (first === 0 || first === 1) && numbers.every((number, place) => number === first + place)
+  );
 }
 
 function noColumn(table: Table, code: string, expected: string, received: string): InputError {

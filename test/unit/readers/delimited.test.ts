@@ -70,6 +70,20 @@ describe('delimited: how the text is built', () => {
     expect(preview('year;level\n1990;1,500\n1991;1,7\n').notes.join('\n')).toContain('“1,500” is 1.5');
   });
 
+  it('warns where the comma may part thousands', () => {
+    expect(preview('year\tlevel\n1990\t1,234\n1991\t1,240\n').notes.join('\n')).toContain('If it parts thousands');
+    expect(preview('year\tlevel\n1990\t1,234\n1991\t1,24\n').notes.join('\n')).not.toContain('thousands');
+  });
+
+  it('finds the header above damaged first rows, and lists these', () => {
+    const text = 'site,year,level\nA,1990,abc\nA,1991,1.7\nA,1992,1.6\nA,1993,1.5\n';
+    const found = preview(text);
+    expect(found.head.columns).toEqual(['site', 'year', 'level']);
+    expect(found.badRows.map(({ line }) => line)).toEqual([2]);
+    const headless = preview('1990,abc\n1991,1.7\n1992,1.6\n1993,1.5\n');
+    expect(headless.badRows.map(({ line }) => line)).toEqual([1]);
+  });
+
   it('joins a header of several lines above each other, and quoted line ends in one', () => {
     const stacked =
       'Yr, Mn, CO2, seasonally,\n , , , adjusted,\n , , [ppm], [ppm],\n1990,1,401.5,401.1\n1990,2,402.5,401.2\n1990,3,403.5,401.3\n';
@@ -84,6 +98,14 @@ describe('delimited: how the text is built', () => {
   it('gives row numbers without a name a column', () => {
     const text = '"year" "level"\n"1" 1990 1.5\n"2" 1991 1.7\n"3" 1992 1.6\n';
     expect(steps(valuesOf(text, 'level'))).toEqual(['1990: 1.5', '1991: 1.7', '1992: 1.6']);
+    const comma = ',year,level\n0,1990,1.5\n1,1991,1.7\n2,1992,1.6\n';
+    expect(preview(comma).series.map(({ key }) => key)).toEqual(['level']);
+  });
+
+  it('takes a line of units below the header into the names', () => {
+    const found = preview('year,co2\n-,ppm\n1990,400.1\n1991,401.5\n');
+    expect(found.head.columns).toEqual(['year', 'co2 ppm']);
+    expect(found.series[0]).toMatchObject({ quantity: 'co2', unit: 'ppm', unitFrom: 'file' });
   });
 
   it('reads Latin-1 and UTF-16 headers', () => {
@@ -283,6 +305,12 @@ describe('delimited: missing values', () => {
     expect(valuesOf(text, 'level', withOptions({ missingMarks: ['7'] })).values).toEqual([null, 8, -999, null]);
   });
 
+  it('takes the mark that the text above the table states', () => {
+    const text = 'An invented level\nMissing: -99\nyear,level,other\n1990,-99,1\n1991,1.5,-99\n1992,-98,3\n';
+    expect(valuesOf(text, 'level').values).toEqual([null, 1.5, -98]);
+    expect(preview(text).head.options?.missingMarks).toEqual(['-99']);
+  });
+
   it('does not offer a column without any value', () => {
     const found = preview('year,level,empty\n1990,1.5,-999\n1991,1.7,-999\n');
     expect(found.series.map(({ key }) => key)).toEqual(['level']);
@@ -341,6 +369,8 @@ describe('delimited: options override what was recognised', () => {
       table,
       wide,
       'Year Month x\n1990 1 -99.99\n1990 2 3.5\n',
+      'year level unc\n1990 -0.99 0.1\n1991 *** -0.99\n1992 0.3 0.1\n',
+
       '# c\n1990.5 1\n1991.5 2\n1992.5 3\n',
     ]) {
       const first = preview(text);

@@ -22,6 +22,7 @@ describe('unit and quantity from the words of the file', () => {
     ['Anomaly (deg C)', levels.anomaly, 'temperature-anomaly', 'K'],
     ['Temperature anomaly [K]', levels.anomaly, 'temperature-anomaly', 'K'],
     ['anomaly_degF', levels.anomaly, 'temperature-anomaly', '°F'],
+    ['anomaly, 0.01 deg C', ['-20', '30', '41'], 'temperature-anomaly', '0.01 °C'],
     ['temp_C', levels.celsius, 'temperature', '°C'],
     ['Mean temperature (°F)', ['48.2', '57', '58.1'], 'temperature', '°F'],
     ['tas (K)', ['286.5', '287.1', '287.9'], 'temperature', 'K'],

@@ -113,7 +113,9 @@ function datasets(mark: XyMark, style: MarkStyle | undefined, palette: Palette):
         showLine: true,
         borderWidth: style.lineWidth,
         borderDash: [...style.dash],
-        pointRadius: 0,
+        // A value with gaps on both sides would leave no trace on a line.
+        pointRadius: mark.y.map((_, at) => (isAlone(mark.y, at) ? style.lineWidth : 0)),
+        pointStyle: style.point,
         pointHitRadius: 6,
         order: mark.role === 'stated' ? 0 : 1,
       },
@@ -132,6 +134,10 @@ function datasets(mark: XyMark, style: MarkStyle | undefined, palette: Palette):
       order: 2,
     },
   ];
+}
+
+function isAlone(values: readonly (number | null)[], at: number): boolean {
+  return (values[at - 1] ?? null) === null && (values[at + 1] ?? null) === null;
 }
 
 /** The data's own span with a little room; years are not rounded outwards to decades. */

@@ -1,4 +1,4 @@
-import { ref, watchEffect, type Ref } from 'vue';
+import { effectScope, ref, watchEffect, type Ref } from 'vue';
 
 export type ThemeChoice = 'light' | 'dark' | 'as the system';
 
@@ -9,7 +9,8 @@ const choice = ref<ThemeChoice>('as the system');
 let isFollowing = false;
 
 export function useTheme(): { choice: Ref<ThemeChoice> } {
-  if (!isFollowing) follow();
+  // Detached: the theme outlives the part of the screen that happened to ask first.
+  if (!isFollowing) effectScope(true).run(follow);
   return { choice };
 }
 

@@ -142,9 +142,9 @@ async function answerRequest(
   if (request.headers['content-type'] !== 'application/json') return sendPage(response, 415, 'Requests are JSON.');
 
   const body = await readBody(request, payloadLimitBytes(name));
-  if (body === 'too large') return sendJson(response, 413, refused(tooLarge(name)));
-  if (body === 'not UTF-8') return sendJson(response, 400, refused(notJson(name, 'bytes that are not UTF-8')));
-  sendJson(response, 200, await carryRequest(session.core, name, body));
+  if (body.isWhole) return sendJson(response, 200, await carryRequest(session.core, name, body.text));
+  if (body.problem === 'too large') return sendJson(response, 413, refused(tooLarge(name)));
+  sendJson(response, 400, refused(notJson(name, 'bytes that are not UTF-8')));
 }
 
 function isRequestName(name: string): name is RequestName {

@@ -1,13 +1,12 @@
 import type { IncomingMessage } from 'node:http';
 
+export type Body = { isWhole: true; text: string } | { isWhole: false; problem: 'too large' | 'not UTF-8' };
+
 /**
  * The body of a request as text. What goes past the limit is thrown away as it comes, not kept, so that the sender
  * can still read the answer.
  */
-export async function readBody(
-  request: IncomingMessage,
-  limitBytes: number,
-): Promise<string | 'too large' | 'not UTF-8'> {
+export async function readBody(request: IncomingMessage, limitBytes: number): Promise<Body> {
   const chunks: Buffer[] = [];
   let length = 0;
   for await (const chunk of request as AsyncIterable<Buffer>) {
@@ -15,10 +14,10 @@ export async function readBody(
     if (length <= limitBytes) chunks.push(chunk);
     else chunks.length = 0;
   }
-  if (length > limitBytes) return 'too large';
+  if (length > limitBytes) return { isWhole: false, problem: 'too large' };
   try {
-    return new TextDecoder('utf-8', { fatal: true }).decode(Buffer.concat(chunks));
+    return { isWhole: true, text: new TextDecoder('utf-8', { fatal: true }).decode(Buffer.concat(chunks)) };
   } catch {
-    return 'not UTF-8';
+    return { isWhole: false, problem: 'not UTF-8' };
   }
 }

@@ -19,6 +19,7 @@ export const requestNames = [
   'dataset.remove',
   'series.get',
   'series.update',
+  'series.rebase',
   'claim.create',
   'claim.update',
   'claim.remove',

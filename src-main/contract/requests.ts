@@ -91,6 +91,12 @@ export const requests = {
     answer: projectView,
   },
 
+  /** A further series: the same record, counted from another baseline period. The one it comes from stays as it is. */
+  'series.rebase': {
+    input: z.object({ seriesId: recordId, baseline: yearSpan, minMonths: z.int().min(1).max(12) }),
+    answer: z.object({ project: projectView, seriesId: recordId, offset: z.number() }),
+  },
+
   'claim.create': { input: claimDraft, answer: claimView },
   'claim.update': {
     input: onClaim.extend({

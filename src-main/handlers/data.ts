@@ -1,9 +1,12 @@
 import { createHash } from 'node:crypto';
 import type { RequestInput } from '../contract/requests.ts';
-import type { Series } from '../contract/series.ts';
+import type { Series, SeriesValues } from '../contract/series.ts';
 import { InputError } from '../errors.ts';
 import { canonicalJson } from '../project/canonical-json.ts';
 import type { Project } from '../project/project.ts';
+import { annualMeans } from '../quantities/annual-means.ts';
+import { formatYears } from '../quantities/notation.ts';
+import { rebase } from '../quantities/rebase.ts';
 import { previewDataset, readDataset } from '../readers/read-dataset.ts';
 import { readValues } from './claim-request.ts';
 import { refuseFrozen } from './claims.ts';
@@ -11,7 +14,7 @@ import type { Handlers } from './context.ts';
 import { projectView } from './project-view.ts';
 import { seriesFigure } from './series-figure.ts';
 
-type Names = 'data.preview' | 'data.import' | 'dataset.remove' | 'series.get' | 'series.update';
+type Names = 'data.preview' | 'data.import' | 'dataset.remove' | 'series.get' | 'series.update' | 'series.rebase';
 
 export const dataHandlers: Handlers<Names> = {
   'data.preview'({ fileName, bytes, options }, { workspace }) {
@@ -94,6 +97,27 @@ export const dataHandlers: Handlers<Names> = {
     workspace.change('change series', changed.name, (change) => change.put('series', changed));
     return projectView(project);
   },
+
+  'series.rebase'({ seriesId, baseline, minMonths }, { workspace }) {
+    const project = workspace.open();
+    const { id: _id, ...series } = project.get('series', seriesId);
+    const values = readValues(project, series.valuesDigest);
+    const { offset } = rebase(annualMeans({ ...series, values }, minMonths), baseline);
+    const shifted = shiftValues(values, -offset);
+    const taken = new Set(project.list('series').map((row) => row.name));
+    const name = freeName(`${series.name}-vs-${baseline.start}-${baseline.end}`, taken);
+    const label = `${series.label}, re-based to ${formatYears(baseline)}`;
+    const added = workspace.change('re-base series', name, (change) =>
+      change.add('series', {
+        ...series,
+        name,
+        label,
+        baseline,
+        valuesDigest: change.addContent(Buffer.from(canonicalJson(shifted), 'utf8')),
+      }),
+    );
+    return { project: projectView(project), seriesId: added.id, offset };
+  },
 };
 
 function refuseUndecided({ fileName, leaveOutBadRows }: RequestInput<'data.import'>, nBadRows: number): void {
@@ -129,6 +153,12 @@ function claimsUsing(project: Project, seriesId: number): number[] {
       return used.includes(seriesId);
     })
     .map((claim) => claim.id);
+}
+
+function shiftValues(values: SeriesValues, shift: number): SeriesValues {
+  const shifted = (row: (number | null)[]) => row.map((value) => (value === null ? null : value + shift));
+  const bounds = (row: (number | null)[] | null) => row && shifted(row);
+  return { ...values, values: shifted(values.values), lower: bounds(values.lower), upper: bounds(values.upper) };
 }
 
 /** Two versions of one file keep their own names: "gistemp-annual", "gistemp-annual-2". */

@@ -6,7 +6,8 @@ import { claimHandlers } from './claims.ts';
 import type { HandlerContext } from './context.ts';
 import { dataHandlers } from './data.ts';
 import { findingHandlers } from './findings.ts';
-import { freePath, holder } from './projects.ts';
+import { freePath } from './free-path.ts';
+import { holder } from './holder.ts';
 import { runClaimMethod } from './run-claim-method.ts';
 import { sourceHandlers } from './sources.ts';
 

@@ -1,12 +1,13 @@
-import { existsSync, mkdirSync, readdirSync, statSync } from 'node:fs';
+import { mkdirSync, readdirSync, statSync } from 'node:fs';
 import { dirname, join, resolve } from 'node:path';
 import { InputError } from '../errors.ts';
 import { createProject } from '../project/create-project.ts';
 import { openProject } from '../project/open-project.ts';
 import { readProjectTitle } from '../project/read-project-title.ts';
 import { verifyProject } from '../project/verify-project.ts';
-import { engineVersion } from '../engine-version.ts';
-import type { HandlerContext, Handlers } from './context.ts';
+import type { Handlers } from './context.ts';
+import { freePath } from './free-path.ts';
+import { holder } from './holder.ts';
 import { openDemo } from './open-demo.ts';
 import { projectView } from './project-view.ts';
 import { recheck } from './recheck.ts';
@@ -91,11 +92,6 @@ export const projectHandlers: Handlers<Names> = {
   'project.recheck': ({ jobId }, context) => recheck(context, jobId),
 };
 
-/** Who a second writer is told about. */
-export function holder({ workspace, host }: HandlerContext) {
-  return { reviewer: workspace.knownReviewer()?.name ?? 'someone', host, engineVersion };
-}
-
 function readFolder(folder: string) {
   try {
     return readdirSync(folder, { withFileTypes: true });
@@ -108,18 +104,4 @@ function readFolder(folder: string) {
       hint: 'Choose another folder.',
     });
   }
-}
-
-/** A file name after the title that is not taken yet. */
-export function freePath(directory: string, title: string): string {
-  const stem =
-    title
-      .normalize('NFKD')
-      .toLowerCase()
-      .replace(/[^a-z0-9]+/g, '-')
-      .replace(/^-+|-+$/g, '')
-      .slice(0, 60) || 'review';
-  let path = join(resolve(directory), `${stem}.footing`);
-  for (let copy = 2; existsSync(path); copy += 1) path = join(resolve(directory), `${stem}-${copy}.footing`);
-  return path;
 }

@@ -70,3 +70,38 @@ describe('importing a file', () => {
     expect(refused).toMatchObject({ ok: false, error: { code: 'series-in-use' } });
   });
 });
+
+describe('re-basing a series', () => {
+  it('adds a further series that averages to zero over the period, and leaves the first as it is', async () => {
+    const test = await testCore();
+    await test.ask('project.create', { title: 'Re-base' });
+    const table = ['year,temp', '1990,0.1', '1991,0.3', '1992,', '1993,0.8', '1994,0.4'].join('\n');
+    const { seriesIds } = await test.ask('data.import', {
+      fileName: 'short.csv',
+      bytes: base64(table),
+      options: {},
+      choices: [{ key: 'temp', name: 'short', unit: 'K' }],
+      leaveOutBadRows: true,
+    });
+    const before = await test.ask('series.get', { seriesId: seriesIds[0] ?? 0 });
+    const rebased = await test.ask('series.rebase', {
+      seriesId: seriesIds[0] ?? 0,
+      baseline: { start: 1993, end: 1994 },
+      minMonths: 12,
+    });
+    expect(rebased.offset).toBeCloseTo(0.6, 15);
+    const after = await test.ask('series.get', { seriesId: rebased.seriesId });
+    expect(after.series).toMatchObject({ name: 'short-vs-1993-1994', baseline: { start: 1993, end: 1994 } });
+    expect(after.values.values.map((value) => value && Number(value.toFixed(12)))).toEqual([-0.5, -0.3, null, 0.2, -0.2]);
+    expect((await test.ask('series.get', { seriesId: seriesIds[0] ?? 0 })).series).toEqual(before.series);
+
+    const refused = await test.core.handle('series.rebase', {
+      seriesId: seriesIds[0],
+      baseline: { start: 1991, end: 1993 },
+      minMonths: 12,
+    });
+    expect(refused).toMatchObject({ ok: false, error: { code: 'baseline-not-covered' } });
+    expect(refused.ok ? '' : refused.error.received).toContain('1992');
+    await test.end();
+  });
+});

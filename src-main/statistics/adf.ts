@@ -1,8 +1,9 @@
-import { NumericError } from '../errors.ts';
+import { refuseExactFit } from './exact-fit.ts';
 import { finiteNumber, finiteValues } from './finite-values.ts';
 import { leastSquares } from './least-squares.ts';
 import type { Deterministic } from './mackinnon-tables.ts';
 import { mackinnonCritical, mackinnonP, type CriticalValues } from './mackinnon.ts';
+import { sumOfProducts } from './summation.ts';
 
 export interface AdfRequest {
   y: ArrayLike<number>;
@@ -52,17 +53,9 @@ export function adf({ y, lags, deterministic }: AdfRequest): AdfTest {
   const terms = [response.map(() => 1), response.map((_, t) => t + 1)].slice(0, nDeterministic);
   const fit = leastSquares({ columns: [level, ...lagged, ...terms], y: response, caller: 'adf' });
 
+  refuseExactFit('adf', fit.residualSumOfSquares, sumOfProducts(response, response));
   const variance = fit.residualSumOfSquares / (nObs - fit.nCoefficients);
   const standardError = Math.sqrt(variance * fit.unscaledCovariance[0]!);
   const statistic = fit.coefficients[0]! / standardError;
-  if (!Number.isFinite(statistic)) {
-    throw new NumericError({
-      code: 'exact-fit',
-      where: 'adf',
-      expected: 'a series with some disturbance',
-      received: 'one that its own past gives exactly',
-      hint: 'Check that the series is not interpolated or smoothed.',
-    });
-  }
   return { statistic, p: mackinnonP(statistic, deterministic), nObs, critical: mackinnonCritical(deterministic, nObs) };
 }

@@ -1,7 +1,7 @@
+import { refuseExactFit } from './exact-fit.ts';
 import { finiteNumber, finiteValues } from './finite-values.ts';
 import { leastSquares } from './least-squares.ts';
 import { upperTailChiSquared } from './upper-tail-chi-squared.ts';
-import { NumericError } from '../errors.ts';
 import { sumOfProducts } from './summation.ts';
 
 export interface LagTest {
@@ -22,7 +22,7 @@ export interface LagTest {
  *
  * @param fit   columns and residuals of an unweighted least-squares fit
  * @param lags  L, 1 … n − k − 1
- * @throws   InputError out-of-range; NumericError all-zero, rank-deficient
+ * @throws   InputError out-of-range; NumericError exact-fit when all residuals are zero, rank-deficient
  *
  * Differs  lmtest::bgtest: same, with its defaults (type "Chisq", fill = 0)
  * Source   Breusch 1978, Aust. Econ. Pap. 17, 334–355; Godfrey 1978, Econometrica 46, 1293–1302
@@ -36,15 +36,7 @@ export function breuschGodfrey(
   const nObs = residuals.length;
   finiteNumber('breuschGodfrey', 'lags', lags, { isWhole: true, atLeast: 1, atMost: nObs - fit.columns.length - 1 });
   const squares = sumOfProducts(residuals, residuals);
-  if (squares === 0) {
-    throw new NumericError({
-      code: 'all-zero',
-      where: 'breuschGodfrey, residuals',
-      expected: 'residuals that are not all zero',
-      received: 'an exact fit',
-      hint: 'An exact fit has no errors whose correlation could be judged.',
-    });
-  }
+  refuseExactFit('breuschGodfrey', squares);
   const lagged = Array.from({ length: lags }, (_, j) => residuals.map((_, t) => residuals[t - j - 1] ?? 0));
   const auxiliary = leastSquares({ columns: [...fit.columns, ...lagged], y: residuals, caller: 'breuschGodfrey' });
   const statistic = (nObs * sumOfProducts(auxiliary.fitted, auxiliary.fitted)) / squares;

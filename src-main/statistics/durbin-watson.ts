@@ -1,4 +1,4 @@
-import { NumericError } from '../errors.ts';
+import { refuseExactFit } from './exact-fit.ts';
 import { finiteValues } from './finite-values.ts';
 import { sumOfProducts } from './summation.ts';
 
@@ -10,7 +10,7 @@ import { sumOfProducts } from './summation.ts';
  * Assumes  rows in order of time, equally spaced. The published bounds hold for designs with an intercept only
  *
  * @param residuals  [nObs ≥ 2] finite, not all zero
- * @throws   InputError too-few-values, not-finite; NumericError all-zero
+ * @throws   InputError too-few-values, not-finite; NumericError exact-fit when all are zero
  *
  * Source   Durbin & Watson 1950, Biometrika 37, 409–428
  * Checked  test/reference/statistics/nist-regression.test.ts (C: computed in exact rational arithmetic), lm-live.test.ts (B)
@@ -18,15 +18,7 @@ import { sumOfProducts } from './summation.ts';
 export function durbinWatson(residuals: ArrayLike<number>): number {
   const e = finiteValues('durbinWatson', 'residuals', residuals, { atLeast: 2 });
   const squares = sumOfProducts(e, e);
-  if (squares === 0) {
-    throw new NumericError({
-      code: 'all-zero',
-      where: 'durbinWatson, residuals',
-      expected: 'residuals that are not all zero',
-      received: 'an exact fit',
-      hint: 'An exact fit has no errors whose correlation could be judged.',
-    });
-  }
+  refuseExactFit('durbinWatson', squares);
   const steps = e.subarray(1).map((value, t) => value - e[t]!);
   return sumOfProducts(steps, steps) / squares;
 }

@@ -2,9 +2,10 @@ import type { Caveat } from '../contract/primitives.ts';
 import { InputError, NumericError } from '../errors.ts';
 import { ar1Rows } from './ar1-rows.ts';
 import { designColumns } from './design-columns.ts';
+import { refuseExactFit } from './exact-fit.ts';
 import { finiteValues } from './finite-values.ts';
 import { leastSquares, type LeastSquaresFit } from './least-squares.ts';
-import { sum } from './summation.ts';
+import { sum, sumOfProducts } from './summation.ts';
 
 export interface GlsAr1Request {
   x: ArrayLike<number> | readonly ArrayLike<number>[];
@@ -104,16 +105,7 @@ function tryRho(columns: readonly Float64Array[], y: Float64Array, rho: number, 
   const fit = leastSquares({ columns: columns.map((c) => ar1Rows(c, rho)), y: ar1Rows(y, rho), caller: 'glsAr1' });
   const { nObs: n, nCoefficients: k, coefficients } = fit;
   const variance = fit.residualSumOfSquares / (estimator === 'ml' ? n : n - k);
-  const spread = sum(fit.y.map((value) => value ** 2));
-  if (variance * n <= (8 * 2 ** -52) ** 2 * spread) {
-    throw new NumericError({
-      code: 'exact-fit',
-      where: 'glsAr1',
-      expected: 'residuals that are not all zero',
-      received: 'an exact fit',
-      hint: 'An exact fit has no errors whose correlation could be judged.',
-    });
-  }
+  refuseExactFit('glsAr1', fit.residualSumOfSquares, sumOfProducts(fit.y, fit.y));
   const errors = y.map((value, t) => value - columns.reduce((fitted, c, j) => fitted + coefficients[j]! * c[t]!, 0));
   // ½ d RSS*/dρ at fixed b: by the envelope theorem b's own change does not count at the optimum.
   const halfRssSlope = halfSlope(errors, fit.residuals, errors, fit.residuals, rho);

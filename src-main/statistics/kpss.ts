@@ -1,5 +1,5 @@
 import type { Caveat } from '../contract/primitives.ts';
-import { NumericError } from '../errors.ts';
+import { refuseExactFit } from './exact-fit.ts';
 import { finiteNumber, finiteValues } from './finite-values.ts';
 import { leastSquares } from './least-squares.ts';
 import { sum, sumOfProducts } from './summation.ts';
@@ -49,15 +49,7 @@ export function kpss({ y, lags, deterministic }: KpssRequest): KpssTest {
   finiteNumber('kpss', 'lags', lags, { isWhole: true, atLeast: 0, atMost: n - 1 });
   const columns = [series.map(() => 1), ...(deterministic === 'trend' ? [series.map((_, t) => t + 1)] : [])];
   const { residuals: e, residualSumOfSquares } = leastSquares({ columns, y: series, caller: 'kpss' });
-  if (residualSumOfSquares <= (8 * 2 ** -52) ** 2 * sumOfProducts(series, series)) {
-    throw new NumericError({
-      code: 'exact-fit',
-      where: 'kpss, y',
-      expected: 'a series that is not exactly a level or a trend',
-      received: deterministic === 'trend' ? 'an exact line' : 'a constant',
-      hint: 'Such a series needs no test.',
-    });
-  }
+  refuseExactFit('kpss', residualSumOfSquares, sumOfProducts(series, series));
   let longRun = residualSumOfSquares;
   for (let j = 1; j <= lags; j++) {
     longRun += 2 * (1 - j / (lags + 1)) * sumOfProducts(e.subarray(j), e.subarray(0, -j));

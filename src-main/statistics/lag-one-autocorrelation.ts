@@ -1,6 +1,5 @@
-import { NumericError } from '../errors.ts';
-import { finiteValues } from './finite-values.ts';
-import { mean, sumOfProducts } from './summation.ts';
+import { deviations } from './deviations.ts';
+import { sumOfProducts } from './summation.ts';
 
 /**
  * Lag-one autocorrelation, demeaned: how much a value resembles the one before it.
@@ -17,18 +16,6 @@ import { mean, sumOfProducts } from './summation.ts';
  * Checked  test/reference/statistics/serial-correlation.test.ts (B: R's acf)
  */
 export function lagOneAutocorrelation(values: ArrayLike<number>): number {
-  const e = finiteValues('lagOneAutocorrelation', 'values', values, { atLeast: 3 });
-  const average = mean(e);
-  const deviations = e.map((value) => value - average);
-  const squares = sumOfProducts(deviations, deviations);
-  if (squares === 0 || e.every((value) => value === e[0])) {
-    throw new NumericError({
-      code: 'constant',
-      where: 'lagOneAutocorrelation, values',
-      expected: 'values that are not all equal',
-      received: `${e.length} times ${e[0]}`,
-      hint: 'A constant has no autocorrelation.',
-    });
-  }
-  return sumOfProducts(deviations.subarray(1), deviations.subarray(0, -1)) / squares;
+  const e = deviations('lagOneAutocorrelation', 'values', values, { atLeast: 3 });
+  return sumOfProducts(e.subarray(1), e.subarray(0, -1)) / sumOfProducts(e, e);
 }

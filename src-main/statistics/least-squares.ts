@@ -1,13 +1,7 @@
 import { InputError, NumericError } from '../errors.ts';
 import { finiteValues } from './finite-values.ts';
-import {
-  multiplyByQ,
-  multiplyByQTransposed,
-  pivotedQr,
-  solveUpper,
-  solveUpperTransposed,
-  type PivotedQr,
-} from './pivoted-qr.ts';
+import { multiplyByQ, pivotedQr, solveUpper, solveUpperTransposed, type PivotedQr } from './pivoted-qr.ts';
+import { refinedSolution } from './refined-solution.ts';
 import { sumOfProducts } from './summation.ts';
 
 export interface LeastSquaresInput {
@@ -47,15 +41,8 @@ export interface LeastSquaresFit {
 /** From here on a row's leverage is 1 but for rounding: the fit goes through it whatever its value. */
 export const LEVERAGE_OF_ONE = 1 - 1e-10;
 
-const EPSILON = 2 ** -52;
 /** Data are doubles, rounded at 1e-16 of their size: below this ratio fewer than four digits of a coefficient are theirs. */
 const SMALLEST_PIVOT_RATIO = 1e-12;
-/** More refinements than this are needed only where the answer cannot be trusted. */
-const MOST_REFINEMENTS = 6;
-/** Refinement has settled when a step moves less than this share of the coefficients or of y: ten digits stand. */
-const STANDSTILL = 1e-10;
-/** Below this share of y's length a residual, or a column's part in y, is what doubled precision leaves of a zero. */
-const RESOLUTION = 2 ** -80;
 
 /**
  * Weighted linear least squares: the coefficients that make Σ w·(y − Xb)² smallest.
@@ -159,70 +146,6 @@ function refuseDependentColumns(caller: string, { pivotRatio, pivot }: PivotedQr
     received: `column ${pivot.at(-1)! + 1} of ${pivot.length}, which the others give to working precision`,
     hint: 'Leave a column out, or centre and scale the predictors if they are powers of one variable.',
   });
-}
-
-/** Solves for the coefficients b and the residuals r of the scaled problem together: r + Xb = y, X′r = 0. */
-function refinedSolution(caller: string, design: readonly Float64Array[], y: Float64Array, qr: PivotedQr) {
-  const nColumns = design.length;
-  const solution = new Float64Array(nColumns);
-  const remainder = new Float64Array(y.length);
-  const left = new Float64Array(nColumns + 2);
-  const right = new Float64Array(nColumns + 2);
-  let [step, size] = [Infinity, 0];
-
-  for (let round = 0; round <= MOST_REFINEMENTS; round++) {
-    // What the present solution leaves of both equations, in doubled precision: f = y − r − Xb, g = −X′r.
-    const f = y.slice();
-    const g = new Float64Array(nColumns);
-    if (round > 0) {
-      for (let i = 0; i < y.length; i++) {
-        for (let j = 0; j < nColumns; j++) {
-          left[j] = design[j]![i]!;
-          right[j] = -solution[j]!;
-        }
-        left[nColumns] = y[i]!;
-        right[nColumns] = 1;
-        left[nColumns + 1] = remainder[i]!;
-        right[nColumns + 1] = -1;
-        f[i] = sumOfProducts(left, right);
-      }
-      for (let j = 0; j < nColumns; j++) g[j] = -sumOfProducts(design[qr.pivot[j]!]!, remainder);
-    }
-    multiplyByQTransposed(qr, f);
-    const h = solveUpperTransposed(qr, g);
-    const correction = solveUpper(
-      qr,
-      f.map((value, i) => (i < nColumns ? value - h[i]! : 0)),
-    );
-    f.set(h);
-    multiplyByQ(qr, f);
-
-    const lastStep = step;
-    [step, size] = [0, 0];
-    for (let j = 0; j < nColumns; j++) {
-      const place = qr.pivot[j]!;
-      solution[place] = solution[place]! + correction[j]!;
-      step = Math.max(step, Math.abs(correction[j]!));
-      size = Math.max(size, Math.abs(solution[place]!));
-    }
-    for (let i = 0; i < y.length; i++) remainder[i] = remainder[i]! + f[i]!;
-    if (round > 0 && (step <= 2 * EPSILON * size || step > lastStep / 2)) break;
-  }
-  // A coefficient that is zero but for rounding never stands still in proportion to itself: y's length, about 1, counts.
-  if (step <= STANDSTILL * Math.max(size, 1)) {
-    return { solution: solution.map(zeroBelowResolution), remainder: remainder.map(zeroBelowResolution) };
-  }
-  throw new NumericError({
-    code: 'ill-conditioned',
-    where: caller,
-    expected: 'a solution that stands still under refinement',
-    received: `columns so nearly dependent (pivot ratio ${qr.pivotRatio.toExponential(1)}) that it does not`,
-    hint: 'Leave a column out, or centre and scale the predictors if they are powers of one variable.',
-  });
-}
-
-function zeroBelowResolution(value: number): number {
-  return Math.abs(value) < RESOLUTION ? 0 : value;
 }
 
 /** (X′WX)⁻¹ = S P R⁻¹ R⁻ᵀ P′ S with the column scales S. */

@@ -1,7 +1,7 @@
-import { NumericError } from '../errors.ts';
 import type { LagTest } from './breusch-godfrey.ts';
-import { finiteNumber, finiteValues } from './finite-values.ts';
-import { mean, sumOfProducts } from './summation.ts';
+import { deviations } from './deviations.ts';
+import { finiteNumber } from './finite-values.ts';
+import { sumOfProducts } from './summation.ts';
 import { upperTailChiSquared } from './upper-tail-chi-squared.ts';
 
 /**
@@ -21,25 +21,14 @@ import { upperTailChiSquared } from './upper-tail-chi-squared.ts';
  * Checked  test/reference/statistics/serial-correlation.test.ts (B: R's Box.test)
  */
 export function ljungBox(values: ArrayLike<number>, lags: number, fitdf = 0): LagTest {
-  const series = finiteValues('ljungBox', 'values', values, { atLeast: 3 });
-  const nObs = series.length;
+  const e = deviations('ljungBox', 'values', values, { atLeast: 3 });
+  const nObs = e.length;
   finiteNumber('ljungBox', 'lags', lags, { isWhole: true, atLeast: 1, atMost: nObs - 1 });
   finiteNumber('ljungBox', 'fitdf', fitdf, { isWhole: true, atLeast: 0, atMost: lags - 1 });
-  const average = mean(series);
-  const deviations = series.map((value) => value - average);
-  const squares = sumOfProducts(deviations, deviations);
-  if (squares === 0 || series.every((value) => value === series[0])) {
-    throw new NumericError({
-      code: 'constant',
-      where: 'ljungBox, values',
-      expected: 'values that are not all equal',
-      received: `${nObs} times ${series[0]}`,
-      hint: 'A constant has no autocorrelation.',
-    });
-  }
+  const squares = sumOfProducts(e, e);
   let total = 0;
   for (let j = 1; j <= lags; j++) {
-    const r = sumOfProducts(deviations.subarray(j), deviations.subarray(0, -j)) / squares;
+    const r = sumOfProducts(e.subarray(j), e.subarray(0, -j)) / squares;
     total += r ** 2 / (nObs - j);
   }
   const statistic = nObs * (nObs + 2) * total;

@@ -3,11 +3,7 @@ import { InputError } from '../errors.ts';
 import { finiteNumber } from './finite-values.ts';
 import { criticalSurfaces, pValueSurfaces, type Deterministic } from './mackinnon-tables.ts';
 
-export interface CriticalValues {
-  '1%': number;
-  '5%': number;
-  '10%': number;
-}
+export type CriticalValues = Record<'1%' | '5%' | '10%', number>;
 
 /**
  * Approximate asymptotic p-value of a unit-root (one series) or cointegration (several) t statistic τ: the probability of

@@ -36,7 +36,7 @@ export function neweyWest(fit: LeastSquaresFit, { lag, smallSample }: NeweyWestO
     for (let row = 0; row < k; row++) {
       for (let column = 0; column < k; column++) {
         const both = product[row * k + column]! + product[column * k + row]!;
-        covariance[row * k + column] = covariance[row * k + column]! + weight * both;
+        covariance[row * k + column]! += weight * both;
       }
     }
   }

@@ -66,8 +66,8 @@ export function multiplyByQ({ columns, reflectorScale }: PivotedQr, vector: Floa
 export function solveUpper({ columns, diagonal }: PivotedQr, rightSide: Float64Array): Float64Array {
   const solution = rightSide.slice(0, columns.length);
   for (let j = columns.length - 1; j >= 0; j--) {
-    solution[j] = solution[j]! / diagonal[j]!;
-    for (let i = 0; i < j; i++) solution[i] = solution[i]! - columns[j]![i]! * solution[j]!;
+    solution[j]! /= diagonal[j]!;
+    for (let i = 0; i < j; i++) solution[i]! -= columns[j]![i]! * solution[j]!;
   }
   return solution;
 }
@@ -76,15 +76,15 @@ export function solveUpper({ columns, diagonal }: PivotedQr, rightSide: Float64A
 export function solveUpperTransposed({ columns, diagonal }: PivotedQr, rightSide: Float64Array): Float64Array {
   const solution = rightSide.slice(0, columns.length);
   for (let j = 0; j < columns.length; j++) {
-    for (let i = 0; i < j; i++) solution[j] = solution[j]! - columns[j]![i]! * solution[i]!;
-    solution[j] = solution[j]! / diagonal[j]!;
+    for (let i = 0; i < j; i++) solution[j]! -= columns[j]![i]! * solution[i]!;
+    solution[j]! /= diagonal[j]!;
   }
   return solution;
 }
 
 function reflect(reflector: Float64Array, scale: number, vector: Float64Array, from: number): void {
   const factor = scale * partialProduct(reflector, vector, from);
-  for (let i = from; i < vector.length; i++) vector[i] = vector[i]! - factor * reflector[i]!;
+  for (let i = from; i < vector.length; i++) vector[i]! -= factor * reflector[i]!;
 }
 
 function partialProduct(a: Float64Array, b: Float64Array, from: number): number {

@@ -1,6 +1,7 @@
 import { NumericError } from '../errors.ts';
 import { ar1Rows } from './ar1-rows.ts';
 import { designColumns } from './design-columns.ts';
+import { refuseExactFit } from './exact-fit.ts';
 import { leastSquares } from './least-squares.ts';
 import { sumOfProducts } from './summation.ts';
 
@@ -87,14 +88,6 @@ function lagOneShare(y: Float64Array, columns: readonly Float64Array[], coeffici
   const residuals = y.map((value, t) => value - coefficients.reduce((fitted, b, j) => fitted + b * columns[j]![t]!, 0));
   const before = residuals.subarray(0, -1);
   const squares = sumOfProducts(before, before);
-  if (squares <= (8 * 2 ** -52) ** 2 * sumOfProducts(y, y)) {
-    throw new NumericError({
-      code: 'exact-fit',
-      where: 'praisWinsten',
-      expected: 'residuals that are not all zero',
-      received: 'an exact fit',
-      hint: 'An exact fit has no errors whose correlation could be judged.',
-    });
-  }
+  refuseExactFit('praisWinsten', squares, sumOfProducts(y, y));
   return sumOfProducts(residuals.subarray(1), before) / squares;
 }

@@ -4,6 +4,7 @@ import type { RegressionAnswer } from '../contract/result.ts';
 import { InputError } from '../errors.ts';
 import { designColumns } from './design-columns.ts';
 import { durbinWatson } from './durbin-watson.ts';
+import { isExactFit } from './exact-fit.ts';
 import { heteroskedasticCovariance } from './heteroskedastic-covariance.ts';
 import { LEVERAGE_OF_ONE, leastSquares, type LeastSquaresFit } from './least-squares.ts';
 import { neweyWest } from './newey-west.ts';
@@ -11,9 +12,6 @@ import { regressionCaveats } from './regression-caveats.ts';
 import { sum, sumOfProducts } from './summation.ts';
 import { twoSidedP } from './two-sided-p.ts';
 import { upperTailF } from './upper-tail-f.ts';
-
-/** Residuals below this share of y's size are rounding: nothing may be inferred from them. */
-const EXACT_FIT_SHARE = 8 * 2 ** -52;
 
 /**
  * Linear regression: the line (or plane) closest to y in squared distance, with its uncertainty and diagnostics.
@@ -63,8 +61,8 @@ export function regression({ x, y, intercept, weights, covariance }: RegressionR
   }
 
   const squares = sumsOfSquares(fit);
-  const isExact = residualSumOfSquares <= EXACT_FIT_SHARE ** 2 * squares.aboutZero;
-  const isConstant = squares.aboutMean <= EXACT_FIT_SHARE ** 2 * squares.aboutZero;
+  const isExact = isExactFit(residualSumOfSquares, squares.aboutZero);
+  const isConstant = isExactFit(squares.aboutMean, squares.aboutZero);
   const covarianceMatrix = coefficientCovariance(fit, covariance, residualSumOfSquares / degreesOfFreedom);
   const coefficients = [...fit.coefficients];
   const standardErrors = coefficients.map((_, j) => Math.sqrt(covarianceMatrix[j]![j]!));

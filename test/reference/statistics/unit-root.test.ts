@@ -118,8 +118,16 @@ describe('kpss', () => {
   });
 
   it.each([
-    ['a constant', { y: [0.1, 0.1, 0.1, 0.1, 0.1], lags: 0, deterministic: 'constant' }, 'kpss, y'],
-    ['an exact line', { y: [1, 2, 3, 4, 5], lags: 0, deterministic: 'trend' }, 'an exact line'],
+    [
+      'a constant',
+      { y: [0.1, 0.1, 0.1, 0.1, 0.1], lags: 0, deterministic: 'constant' },
+      'kpss: expected residuals that are more',
+    ],
+    [
+      'an exact line',
+      { y: [1, 2, 3, 4, 5], lags: 0, deterministic: 'trend' },
+      'kpss: expected residuals that are more',
+    ],
     ['as many lags as values', { y: [1, 3, 2, 5], lags: 4, deterministic: 'constant' }, 'kpss, lags'],
     ['a missing value', { y: [1, 3, NaN, 5], lags: 0, deterministic: 'constant' }, 'kpss, y[2]'],
   ] as const)('refuses %s', (_, request, sentence) => expect(() => kpss(request)).toThrow(sentence));
@@ -129,7 +137,8 @@ describe('MacKinnon’s surfaces', () => {
   // Level A: asymptotic values of MacKinnon 2010; at T = 100 and 50 computed independently from the same table; Stata's
   // egranger prints the last row for 200 observations.
   it('critical values', () => {
-    const at = (...parameters: Parameters<typeof mackinnonCritical>) => Object.values(mackinnonCritical(...parameters));
+    const at = (...parameters: Parameters<typeof mackinnonCritical>): number[] =>
+      Object.values(mackinnonCritical(...parameters));
     expectClose(at('none', 1e9), [-2.56574, -1.941, -1.61682], printed(5));
     expectClose(at('constant', 1e9), [-3.43035, -2.86154, -2.56677], printed(5));
     expectClose(at('trend', 1e9), [-3.95877, -3.41049, -3.12705], printed(5));

@@ -9,7 +9,7 @@ import {
   recomputation,
   result,
 } from './result.ts';
-import { claim, statementQuestion } from './claim.ts';
+import { claim, energyBudgetInputs, statementQuestion } from './claim.ts';
 import { conclusion, finding, mark, note, publishedValue, reviewer, signature, signatureCheck } from './finding.ts';
 import { figure, stemFigure } from './figure.ts';
 import { longText, recordId, sha256, shortText, timestamp } from './primitives.ts';
@@ -103,6 +103,8 @@ export const claimView = z.object({
   catalogue: z.array(catalogueEntry),
   /** Published ranges of quantities that this claim may be held against. */
   published: z.array(publishedValue),
+  /** A published energy budget that the evidence can start from. */
+  publishedBudget: energyBudgetInputs,
   /** Figures that a finding's text can name in braces, filled in. */
   fillIns: z.record(z.string(), z.string()),
   trail: z.array(trailLine),

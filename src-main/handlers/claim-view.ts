@@ -10,6 +10,7 @@ import { fitFigure, residualsFigure, sweepFigure } from './claim-figures.ts';
 import { obstacles, requestDigest, requestFor } from './claim-request.ts';
 import { fillIns } from './fill-ins.ts';
 import { defaultMinYears } from './run-claim-method.ts';
+import { publishedBudget } from '../quantities/published-budget.ts';
 import { publishedForClaim } from './published-for-claim.ts';
 import { sectionStates } from './section-states.ts';
 import { stemOf } from './stem-of.ts';
@@ -54,6 +55,7 @@ export function claimView(project: Project, claimId: number): ClaimView {
     },
     catalogue: [...catalogueEntries],
     published,
+    publishedBudget,
     fillIns: fillIns(claim, recomputation, results.assumptions?.answer ?? null, sweep),
     trail: project.trailLines({ claimId, limit: 40 }),
     isFrozen: findings.at(-1)?.isSigned ?? false,

@@ -228,13 +228,3 @@ export const publishedValues: readonly PublishedValue[] = [
 export function publishedFor(quantity: QuantityId): PublishedValue[] {
   return publishedValues.filter((value) => value.quantity === quantity);
 }
-
-/** Effective radiative forcing of a CO2 doubling (5–95 % half-width) as published, for the energy budget. */
-export const doublingForcing = {
-  meanWm2: 3.93,
-  halfWidth90Wm2: 0.47,
-  source: `${ar6}, chapter 7, §7.3.2.1`,
-  provenance: 'seen',
-  remark:
-    'AR6 reads ±0.47 W/m² in two ways: ±12 %, the 5–95 % range, where it is derived (§7.3.2.1); “one standard deviation” where it is used (§7.5.1.1). The first is taken here. With the second the half-width would be 0.77 W/m².',
-} as const;

@@ -36,31 +36,34 @@ export function provideClaimSheet(claimId: number): ClaimSheetStore {
   const view = shallowRef<ClaimView | null>(null);
   const error = shallowRef<ErrorAnswer | null>(null);
   let newest = 0;
+  let nUnderWay = 0;
 
   const ask: ClaimSheetStore['ask'] = async (name, input) => {
     const number = (newest += 1);
+    nUnderWay += 1;
     const answer = await session.ask(name, { ...input, claimId } as RequestInput<typeof name>);
-    if (answer.ok && number === newest) view.value = answer.value as ClaimView;
+    nUnderWay -= 1;
+    if (answer.ok && number === newest) view.value = answer.value;
     if (name === 'claim.view') error.value = answer.ok ? null : answer.error;
+    else if (view.value?.trail[0]?.hash !== session.project.value?.head.hash) catchUp();
     return answer.ok ? null : answer.error;
+  };
+  /** Requests of the sheet bring the new sheet themselves. */
+  const catchUp = () => {
+    if (nUnderWay === 0) void ask('claim.view', {});
   };
   const store: ClaimSheetStore = { view, error, ask, change: (patch) => ask('claim.update', { change: patch }) };
 
-  watch(
-    () => session.project.value?.head.hash,
-    (hash, before) => {
-      const known = view.value?.trail[0]?.hash;
-      if (before === undefined || hash !== known) void ask('claim.view', {});
-    },
-    { immediate: true },
-  );
+  watch(() => session.project.value?.head.hash, catchUp, { immediate: true });
   provide(sheetKey, store);
   return store;
 }
 
-/** Runs something on every change of a source, starting now: a form's own copy of what is stored. */
-export function useOwnCopy<Source, Copy>(source: () => Source, copy: (value: Source) => Copy): Ref<Copy> {
-  const own = shallowRef(copy(source())) as ShallowRef<Copy>;
-  watch(source, (value) => (own.value = copy(value)));
+/** A form's own copy of a stored text. It follows what is stored, but never over words that are still being written. */
+export function useOwnCopy<Text extends string | null>(stored: () => Text): Ref<Text> {
+  const own = shallowRef(stored()) as ShallowRef<Text>;
+  watch(stored, (now, before) => {
+    if (own.value === before) own.value = now;
+  });
   return own;
 }

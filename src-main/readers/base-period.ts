@@ -2,7 +2,7 @@ import type { YearSpan } from '../contract/primitives.ts';
 import type { SeriesValues } from '../contract/series.ts';
 
 const statedPeriod =
-  /(?:base(?:line)?(?:[ _-]?period)?|reference(?:[ _-]?period)?|climatology(?: from)?|relative to|rel\.? to|w\.?r\.?t\.?|with respect to|versus|vs\.?)[^\d\n]{0,40}?((?:1[5-9]|20)\d\d)\s*(?:-|–|—|−|to|through|until)\s*(?:[a-z]{3,9}\.?\s+)?((?:1[5-9]|20)\d\d)/gi;
+  /(?:base(?:line)?(?:[ _-]?period)?|reference(?:[ _-]?period| for annual cycle)?|climatology(?: from)?|relative to|rel\.? to|w\.?r\.?t\.?|with respect to|versus|vs\.?)[^\d\n]{0,40}?((?:1[5-9]|20)\d\d)\s*(?:-|–|—|−|to|through|until)\s*(?:[a-z]{3,9}\.?\s+)?((?:1[5-9]|20)\d\d)/gi;
 
 const customaryPeriods: readonly YearSpan[] = [
   { start: 1850, end: 1900 },

@@ -33,7 +33,7 @@ const otherUnits: readonly [RegExp, string][] = [
 ];
 const genericColumn = /^(values?|mean|avg|average|data|anomal(y|ies)|monthly|annual|column \d+|y)\b/i;
 const temperatureWords = /temp|\banom|\bgmst\b|\bgsat\b|\btas\b|\bt2m\b|\bsst\b|\blsat\b|\btlt\b/i;
-const co2Words = /\bx?co2\b|carbon dioxide/i;
+const co2Words = /\bx?co2|carbon dioxide/i;
 const forcingWords = /\b(erf|sarf|rf|forcings?)\b/i;
 /** Mole fractions of CO2 in air, in ppm, from ice ages to the highest scenarios. */
 const co2RangePpm = { low: 150, high: 5000 };

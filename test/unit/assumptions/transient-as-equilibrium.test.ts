@@ -82,6 +82,15 @@ describe('transient-as-equilibrium', () => {
     expect(reading).toMatch(/no finite value .*unbounded/);
   });
 
+  it('draws from the seed of the claim', () => {
+    const intervalOf = (seed: number) =>
+      transientAsEquilibrium.test(
+        testContext(logRegressionClaim({ ...record, seed, evidence: { energyBudget: ar6EnergyBudget } })),
+      ).alternative?.interval;
+    expect(intervalOf(7)).toEqual(intervalOf(7));
+    expect(intervalOf(7)).not.toEqual(intervalOf(8));
+  });
+
   it('says what is missing', () => {
     const outcome = outcomeFor(null);
     expect(outcome).toMatchObject({ isTestable: false, missing: { reason: 'No energy budget is given.' } });

@@ -17,6 +17,9 @@ describe('weighShift', () => {
     // Half the last digit of "0.2" is 0.05, more than 10 % of it and as much as 25 %.
     ['0.2', 0.049, 'negligible'],
     ['0.2', 0.05, 'decisive'],
+    // Half the last digit of "1" is 0.5, more than 25 % of it.
+    ['1', 0.3, 'negligible'],
+    ['1', 0.5, 'decisive'],
     // Half the last digit of "3" is 0.5, more than 10 % of it; 25 % of it is 0.75.
     ['3', 0.45, 'negligible'],
     ['3', 0.5, 'notable'],

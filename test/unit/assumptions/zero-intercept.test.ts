@@ -23,13 +23,15 @@ describe('zero-intercept', () => {
       const b = 2.5;
       const context = testContext(logRegressionClaim(offsetRecord(a, b)));
       expectClose(context.recomputation.value, (b + a * bias) * Math.LN2, exact);
-      const { alternative, effect, test } = zeroIntercept.test(context);
+      const { alternative, effect, test, reading } = zeroIntercept.test(context);
       // The first row is off the line, so the free intercept is not quite a; the identity holds for the one that it is.
       const fitted = Number(/intercept ([−\d.]+) K/.exec(test)?.[1]?.replace('−', '-'));
       expect(Math.abs(fitted - a)).toBeLessThan(0.15 * Math.abs(a));
       expect(Math.abs((effect ?? NaN) + fitted * bias * Math.LN2)).toBeLessThan(0.0005 * bias);
       expectClose(effect, (alternative?.value ?? NaN) - context.recomputation.value, exact);
       expect(Math.sign(effect ?? 0)).toBe(-Math.sign(a));
+      const hidden = Number(/−a·Σx\/Σx² = ([+−][\d.]+) K/.exec(reading)?.[1]?.replace('−', '-'));
+      expect(Math.abs(hidden * Math.LN2 - (effect ?? NaN))).toBeLessThan(0.0005);
     },
   );
 

@@ -107,6 +107,7 @@ describe('ladder', () => {
     const reversed = jointDraws(3, 5);
     const uptakeFirst = [reversed.standardNormal('uptake'), reversed.standardNormal('slope')].reverse();
     expect(slopeFirst).toEqual(uptakeFirst);
+    expect(slopeFirst[0]).not.toEqual(slopeFirst[1]);
     expect(inOrder.standardNormal('slope')).toBe(slopeFirst[0]);
   });
 });

@@ -1,8 +1,8 @@
 import { ref, watch, type Ref } from 'vue';
 
 const storageKey = 'footing.margin';
-/** Below this width the margin would lie over the sheet: it stays shut until asked for. */
-const wideEnough = '(min-width: 1100px)';
+/** Below this width the sheet needs the room: the margin lies over it, and stays shut until asked for (see App.vue). */
+const wideEnough = '(min-width: 1280px)';
 
 /** Whether the margin beside the sheet is open. What the reviewer chooses on a wide window is kept per machine. */
 export function useMargin(): { isMarginOpen: Ref<boolean> } {

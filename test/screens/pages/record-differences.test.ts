@@ -21,6 +21,23 @@ describe('recordDifferences', () => {
     expect(recordDifferences({ text: 'gone' }, undefined)).toEqual([{ path: 'text', before: 'gone', after: null }]);
   });
 
+  it('goes into lists of records, but leaves lists of numbers whole', () => {
+    const before = { leftOut: [{ line: 3, reason: 'x' }], yearsUsed: [1, 2] };
+    const after = {
+      leftOut: [
+        { line: 3, reason: 'y' },
+        { line: 9, reason: 'z' },
+      ],
+      yearsUsed: [1, 2, 3],
+    };
+    expect(recordDifferences(before, after)).toEqual([
+      { path: 'left out › 1 › reason', before: 'x', after: 'y' },
+      { path: 'left out › 2 › line', before: null, after: '9' },
+      { path: 'left out › 2 › reason', before: null, after: 'z' },
+      { path: 'years used', before: '[1,2]', after: '[1,2,3]' },
+    ]);
+  });
+
   it('sees a value take the place of an object', () => {
     expect(recordDifferences({ a: 'x' }, { a: { b: 1 } })).toEqual([{ path: 'a', before: 'x', after: '{"b":1}' }]);
   });

@@ -1,14 +1,11 @@
 import { InputError } from '../errors.ts';
 import { formatNumber, formatShare, formatYears } from '../quantities/notation.ts';
-import { claimSweep } from '../robustness/claim-sweep.ts';
+import { claimSweep, defaultMinYears } from '../robustness/claim-sweep.ts';
 import { quantile } from '../statistics/quantile.ts';
 import { outcome, untestable, type Assumption } from './assumption.ts';
 import { claimLine } from './claim-line.ts';
 import type { TestContext } from './test-context.ts';
 import { heavier, weightWords } from './weigh.ts';
-
-/** Shorter windows say more about single years than about the record. */
-const fewestYears = 20;
 
 /** The start and end years do not matter: the same procedure over every window of the record. */
 export const window: Assumption = {
@@ -19,9 +16,9 @@ export const window: Assumption = {
   explanation:
     'A number that holds for the record should not hinge on where the record is made to start and stop. If it does, the choice of years is part of the claim.',
   method:
-    'Runs the procedure over every window of at least 20 years that the series allow, with the anchor taken anew in each, and finds where the stated window stands among them.',
-  formula: 'number(start, end) for all end − start + 1 ≥ 20 years with data',
-  needs: 'Series that share more than 20 years.',
+    `Runs the procedure over every window of at least ${defaultMinYears} years that the series allow, with the anchor taken anew in each, and finds where the stated window stands among them.`,
+  formula: `number(start, end) for all end − start + 1 ≥ ${defaultMinYears} years with data`,
+  needs: `Series that share more than ${defaultMinYears} years.`,
   source: 'Rahmstorf, Foster & Cahill 2017, Environ. Res. Lett. 12, 054001, on trends over all start and end years',
 
   applies: ({ procedure }) => procedure.kind !== 'ratio',
@@ -89,13 +86,13 @@ export const window: Assumption = {
   },
 };
 
-/** At least 20 years, and long enough for the procedure's own anchor and lag. */
+/** At least the usual fewest years, and long enough for the procedure's own anchor and lag. */
 function shortestWindow(context: TestContext): number {
   const { procedure } = claimLine(context);
   const anchorYears =
     procedure.kind === 'log-regression' && procedure.anchor.kind === 'mean-of-first' ? procedure.anchor.years : 1;
   const lag = procedure.covariance.kind === 'newey-west' ? procedure.covariance.lag : 0;
-  return Math.max(fewestYears, anchorYears + 1, lag + 1);
+  return Math.max(defaultMinYears, anchorYears + 1, lag + 1);
 }
 
 /** null when the record is one window or none. */

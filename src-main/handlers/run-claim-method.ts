@@ -2,6 +2,7 @@ import type { ResultMethod } from '../contract/result.ts';
 import { ProjectError } from '../errors.ts';
 import { engineVersion } from '../engine-version.ts';
 import { canonicalJson } from '../project/canonical-json.ts';
+import { defaultMinYears } from '../robustness/claim-sweep.ts';
 import type { HandlerContext } from './context.ts';
 import { requestDigest, requestFor, resolveRequest } from './claim-request.ts';
 import { latestAnswer } from './stored-results.ts';
@@ -12,9 +13,6 @@ const labels: Record<ResultMethod, { running: string; done: string }> = {
   assumptions: { running: 'Testing the assumptions', done: 'test assumptions' },
   'claim-sweep': { running: 'Sweeping the windows', done: 'sweep windows' },
 };
-
-/** Windows shorter than this are left out of a sweep unless the reviewer says otherwise. */
-export const defaultMinYears = 20;
 
 /** Computes one method of a claim and stores request and answer, unless the very same result is stored already. */
 export async function runClaimMethod(

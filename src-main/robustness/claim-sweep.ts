@@ -10,6 +10,9 @@ import { checkUnit } from '../quantities/check-unit.ts';
 import { statedValue } from '../quantities/stated-number.ts';
 import { spreadOf, windowSweep } from './window-sweep.ts';
 
+/** Shorter windows say more about single years than about the record; left out unless the reviewer says otherwise. */
+export const defaultMinYears = 20;
+
 /**
  * The window sweep of a claim: its own procedure over every start and end year that its series share, whatever window
  * the source chose, and where the number of that window stands among all.

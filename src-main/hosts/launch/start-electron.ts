@@ -4,7 +4,7 @@ import { spawn } from 'node:child_process';
 const highestOwnExitCode = 3;
 const startTimeMs = 15_000;
 
-export type ElectronOutcome = { hasStarted: true; exitCode: number } | { hasStarted: false; reason: string };
+export type ElectronOutcome = { hasStarted: true; exitCode: number } | { hasStarted: false; problem: string };
 
 /** Runs Electron on the application and waits for its end. */
 export function startElectron(program: string, application: string, args: string[]): Promise<ElectronOutcome> {
@@ -15,13 +15,14 @@ export function startElectron(program: string, application: string, args: string
   return new Promise((resolve) => {
     child.on('error', ({ message }) => {
       stopForwarding();
-      resolve({ hasStarted: false, reason: message });
+      resolve({ hasStarted: false, problem: message });
     });
     child.on('exit', (exitCode, signal) => {
+      const wasTold = stopForwarding();
       const isFault = exitCode === null || exitCode > highestOwnExitCode;
-      const hasStarted = !isFault || stopForwarding() || performance.now() - startedAt > startTimeMs;
+      const hasStarted = !isFault || wasTold || performance.now() - startedAt > startTimeMs;
       if (hasStarted) resolve({ hasStarted, exitCode: exitCode ?? 1 });
-      else resolve({ hasStarted, reason: `it ended at once with ${signal ?? `exit code ${exitCode}`}` });
+      else resolve({ hasStarted, problem: `it ended at once with ${signal ?? `exit code ${exitCode}`}` });
     });
   });
 }
@@ -29,14 +30,15 @@ export function startElectron(program: string, application: string, args: string
 /** Hands signals on until told to stop; tells then whether there was one. */
 function forwardSignals(forward: (signal: NodeJS.Signals) => void): () => boolean {
   const signals = ['SIGINT', 'SIGTERM', 'SIGHUP'] as const;
-  let hasForwarded = false;
+  let wasTold = false;
   const listener = (signal: NodeJS.Signals) => {
-    hasForwarded = true;
-    forward(signal);
+    wasTold = true;
+    // A terminal has sent Ctrl-C to Electron as well; a second one would cut its good order short.
+    if (signal !== 'SIGINT' || !process.stdin.isTTY) forward(signal);
   };
   for (const signal of signals) process.on(signal, listener);
   return () => {
     for (const signal of signals) process.off(signal, listener);
-    return hasForwarded;
+    return wasTold;
   };
 }

@@ -15,8 +15,7 @@ export const window: Assumption = {
   shortTitle: 'Choice of years',
   explanation:
     'A number that holds for the record should not hinge on where the record is made to start and stop. If it does, the choice of years is part of the claim.',
-  method:
-    `Runs the procedure over every window of at least ${defaultMinYears} years that the series allow, with the anchor taken anew in each, and finds where the stated window stands among them.`,
+  method: `Runs the procedure over every window of at least ${defaultMinYears} years that the series allow, with the anchor taken anew in each, and finds where the stated window stands among them.`,
   formula: `number(start, end) for all end − start + 1 ≥ ${defaultMinYears} years with data`,
   needs: `Series that share more than ${defaultMinYears} years.`,
   source: 'Rahmstorf, Foster & Cahill 2017, Environ. Res. Lett. 12, 054001, on trends over all start and end years',

@@ -61,3 +61,18 @@ describe('publishedValues', () => {
     expect(0.47 * 1.645).toBeCloseTo(0.77, 2);
   });
 });
+
+describe('quantityNames', () => {
+  it('name and define every quantity', () => {
+    expect(Object.keys(quantityNames).sort()).toEqual([...quantityId.options].sort());
+    for (const { label, definition, units } of Object.values(quantityNames)) {
+      expect(label).not.toBe('');
+      expect(definition).toMatch(/\.$/);
+      expect(units.length).toBeGreaterThan(0);
+    }
+  });
+
+  it('does not call b·ln 2 a climate sensitivity', () => {
+    expect(quantityNames['apparent-sensitivity'].definition).toMatch(/none of ECS/);
+  });
+});

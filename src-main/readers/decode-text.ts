@@ -63,6 +63,9 @@ export function decodeText(fileName: string, bytes: Uint8Array): TextFile {
       'The page was saved in place of the data file it links to. Download the file itself.',
     );
   }
+  if (/^\s*(\[\s*)?[[{]\s*["[{]/.test(text)) {
+    throw unreadable(fileName, 'not-text', 'a JSON document', 'This kind of file is not read yet. Export a table.');
+  }
   const lines = text.split(/\r\n|\n|\r/);
   if (lines.at(-1) === '') lines.pop();
   return { fileName, lines, notes };

@@ -6,8 +6,8 @@ import { parseNumber } from './parse-number.ts';
 import { type Row, type ValueColumn, readRows } from './read-rows.ts';
 import type { ReadSeries, Reader, Reading, Recognition } from './reader.ts';
 import { seriesValues } from './series-values.ts';
-import type { Delimiter } from './split-line.ts';
-import { type Table, isComment, splitTable } from './split-table.ts';
+import { type Delimiter, splitLine } from './split-line.ts';
+import { type Table, firstTextLine, isComment, splitTable } from './split-table.ts';
 import { type TimeForm, recogniseTime } from './time-form.ts';
 
 interface Layout {
@@ -91,7 +91,7 @@ export const forcingTable: Reader = {
 };
 
 function layoutOf(file: TextFile): Layout | null {
-  const first = file.lines.findIndex((line) => line.trim() !== '' && !isComment(line, ['#']));
+  const first = firstTextLine(file, ['#']);
   const text = file.lines[first] ?? '';
   const delimiter: Delimiter = text.includes(',')
     ? ','
@@ -100,6 +100,9 @@ function layoutOf(file: TextFile): Layout | null {
       : text.includes('\t')
         ? '\t'
         : 'blanks';
+  const agents = agentsOf(splitLine(text, delimiter) ?? []);
+  const has = (agent: string): boolean => agents.some((one) => one.agent === agent);
+  if (!tellingAgents.some(has) || !(has('co2') || has('total'))) return null;
   const table = splitTable(file, { delimiter, commentMarks: ['#'], headerLine: first + 1 });
   const names = table.header.map((name) => name.toLowerCase());
   const timeColumn = timeNames.map((name) => names.indexOf(name)).find((column) => column !== -1) ?? -1;
@@ -111,9 +114,6 @@ function layoutOf(file: TextFile): Layout | null {
           '.',
         );
   if (time?.step !== 'year') return null;
-  const agents = agentsOf(table.header);
-  const has = (agent: string): boolean => agents.some((one) => one.agent === agent);
-  if (!tellingAgents.some(has) || !(has('co2') || has('total'))) return null;
   const largest = Math.max(
     ...table.lines.flatMap(({ cells }) => agents.map(({ index }) => parseNumber(cells?.[index] ?? '', '.') ?? 0)),
   );

@@ -84,6 +84,7 @@ export const igccGmst: Reader = {
 };
 
 function layoutOf(file: TextFile): Layout | null {
+  if (!/\bgmst\b/i.test(file.lines[0] ?? '')) return null;
   const table = splitTable(file, { delimiter: ',', commentMarks: ['#'], headerLine: 1 });
   const names = table.header.map((name) => name.toLowerCase());
   const valueColumn = names.indexOf('gmst');

@@ -8,7 +8,8 @@ import { type PartialYear, partialYears } from './partial-years.ts';
 import { type Row, readRows } from './read-rows.ts';
 import type { ReadSeries, Reader, Reading, Recognition } from './reader.ts';
 import { seriesValues, varianceLimits } from './series-values.ts';
-import { type Table, splitTable } from './split-table.ts';
+import { splitLine } from './split-line.ts';
+import { type Table, firstTextLine, splitTable } from './split-table.ts';
 import { yearPlace } from './time-form.ts';
 
 interface Layout {
@@ -86,9 +87,9 @@ export const noaaGlobalTemp: Reader = {
 };
 
 function layoutOf(file: TextFile): Layout | null {
-  const table = splitTable(file, { delimiter: 'blanks', commentMarks: ['#'], headerLine: 0 });
-  const nCells = table.lines[0]?.cells?.length;
+  const nCells = splitLine(file.lines[firstTextLine(file)] ?? '', 'blanks')?.length;
   if (nCells !== nCellsAnnual && nCells !== nCellsMonthly) return null;
+  const table = splitTable(file, { delimiter: 'blanks', commentMarks: [], headerLine: 0 });
   const step = nCells === nCellsAnnual ? 'year' : 'month';
   const rows = numbersOf(table, nCells);
   const fits = rows.filter(([year = 0, second = 0, third = 0, fourth = 0]) => {

@@ -7,7 +7,8 @@ import { partialYears } from './partial-years.ts';
 import { type Row, type ValueColumn, readRows } from './read-rows.ts';
 import type { ReadSeries, Reader, Reading, Recognition } from './reader.ts';
 import { type Limits, seriesValues, standardLimits } from './series-values.ts';
-import { type Table, isComment, splitTable } from './split-table.ts';
+import { splitLine } from './split-line.ts';
+import { type Table, firstTextLine, isComment, splitTable } from './split-table.ts';
 import { yearPlace } from './time-form.ts';
 
 /** What a column holds. */
@@ -61,6 +62,7 @@ const namedRoles: readonly [RegExp, Role][] = [
 ];
 const marks: readonly number[] = [-99.99, -999.99, -9.99, -0.99, -1];
 const maxSample = 400;
+const maxColumns = 8;
 const maxListed = 12;
 
 /** Greenhouse-gas records of NOAA's Global Monitoring Laboratory: monthly and annual means, as text and CSV. */
@@ -81,7 +83,7 @@ export const noaaGml: Reader = {
     if (layout === null)
       throw otherFormat(
         file,
-        firstRow(file),
+        firstTextLine(file, ['#']),
         'rows of a NOAA GML file: year, month, decimal date, average, …; or year, mean, uncertainty',
       );
     const { table, roles } = layout;
@@ -109,11 +111,12 @@ export const noaaGml: Reader = {
 
 function layoutOf(file: TextFile): Layout | null {
   const comments = file.lines.filter((line) => isComment(line, ['#'])).join('\n');
-  const first = firstRow(file);
-  if (first === -1) return null;
+  const first = firstTextLine(file, ['#']);
   const text = file.lines[first] ?? '';
   const hasHeader = /^\s*"?year\b/i.test(text);
   const delimiter = text.includes(',') ? ',' : 'blanks';
+  const columns = splitLine(text, delimiter) ?? [];
+  if (hasHeader ? columns.some((name) => roleOfName(name) === 'other') : columns.length > maxColumns) return null;
   const table = splitTable(file, { delimiter, commentMarks: ['#'], headerLine: hasHeader ? first + 1 : 0 });
   const sample = table.lines
     .slice(0, maxSample)
@@ -128,10 +131,6 @@ function layoutOf(file: TextFile): Layout | null {
   const level = median(sample.map((row) => row[average] ?? null));
   const gas = gasOf(comments, level);
   return gas && { table, roles, gas, site: siteOf(comments, file.fileName), comments };
-}
-
-function firstRow({ lines }: TextFile): number {
-  return lines.findIndex((line) => line.trim() !== '' && !isComment(line, ['#']));
 }
 
 function roleOfName(name: string): Role {

@@ -4,7 +4,7 @@ import { otherFormat } from './other-format.ts';
 import { readRows } from './read-rows.ts';
 import type { ReadSeries, Reader, Reading, Recognition } from './reader.ts';
 import { seriesValues, standardLimits } from './series-values.ts';
-import { type Table, splitTable } from './split-table.ts';
+import { type Table, firstTextLine, splitTable } from './split-table.ts';
 import { type TimeForm, recogniseTime } from './time-form.ts';
 
 interface Layout {
@@ -83,9 +83,9 @@ export const oceanHeatContent: Reader = {
 };
 
 function layoutOf(file: TextFile): Layout | null {
-  const first = file.lines.findIndex((line) => line.trim() !== '');
+  const first = firstTextLine(file);
+  if ((file.lines[first] ?? '').trim().split(/\s+/).join(' ') !== header.join(' ')) return null;
   const table = splitTable(file, { delimiter: 'blanks', commentMarks: [], headerLine: first + 1 });
-  if (table.header.join(' ') !== header.join(' ')) return null;
   const time = recogniseTime(
     table.lines.map(({ cells }) => cells?.[0] ?? ''),
     '.',

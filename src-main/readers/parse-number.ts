@@ -9,8 +9,8 @@ const withComma = /^[+-]?(\d+(,\d+)?|,\d+)([eE][+-]?\d{1,3})?$/;
  * decimal commas.
  */
 export function parseNumber(cell: string, decimalMark: DecimalMark): number | null {
-  const text = cell.replace('−', '-');
+  const text = cell.startsWith('−') ? `-${cell.slice(1)}` : cell;
   if (!(decimalMark === '.' ? withPoint : withComma).test(text)) return null;
-  const value = Number(text.replace(',', '.').replace(/[dD]/, 'e'));
+  const value = Number(decimalMark === '.' ? text.replace(/d/i, 'e') : text.replace(',', '.'));
   return Number.isFinite(value) ? value : null;
 }

@@ -98,12 +98,14 @@ function chooseReader(file: TextFile, options: ReadOptions): { reader: Reader; w
   }
   if (options.delimited !== undefined)
     return { reader: delimited, why: 'The reviewer says how the text is to be split' };
-  let best: { reader: Reader; why: string; certainty: number } = { reader: delimited, why: '', certainty: 0 };
-  for (const reader of readers) {
+  let best = { reader: delimited, why: '', certainty: 0 };
+  const others = readers.filter((reader) => reader !== delimited);
+  for (const reader of others) {
     const recognition = reader.recognise(file);
     if (recognition !== null && recognition.certainty > best.certainty) best = { reader, ...recognition };
   }
-  return best;
+  if (best.certainty > 0) return best;
+  return { reader: delimited, why: delimited.recognise(file)?.why ?? '' };
 }
 
 function describeChosen(series: ReadSeries, choice: SeriesChoice): DatasetRead['series'][number] {

@@ -61,6 +61,11 @@ export function isComment(text: string, commentMarks: readonly string[]): boolea
   return commentMarks.some((mark) => mark !== '' && start.startsWith(mark));
 }
 
+/** The first line, 0-based, that is neither blank nor a comment; -1 when there is none. */
+export function firstTextLine({ lines }: TextFile, commentMarks: readonly string[] = []): number {
+  return lines.findIndex((line) => line.trim() !== '' && !isComment(line, commentMarks));
+}
+
 /** The cells of a header, which may stand in a comment. */
 export function headerCells(text: string, { commentMarks, delimiter }: Omit<TableFormat, 'headerLine'>): string[] {
   let bare = text.trimStart();
@@ -80,10 +85,18 @@ export function joinQuoted(
   const alone = { text: first, cells: splitLine(first, delimiter), nLines: 1 };
   if (delimiter === 'blanks' || alone.cells !== null) return alone;
   let text = first;
+  let isOpen = hasOddQuotes(first);
   for (let nLines = 2; nLines <= maxLinesPerRow && start + nLines <= lines.length; nLines += 1) {
-    text += `\n${lines[start + nLines - 1] ?? ''}`;
+    const next = lines[start + nLines - 1] ?? '';
+    text += `\n${next}`;
+    isOpen = isOpen !== hasOddQuotes(next);
+    if (isOpen) continue;
     const cells = splitLine(text, delimiter);
     if (cells !== null && (nCells === null || cells.length === nCells)) return { text, cells, nLines };
   }
   return alone;
+}
+
+function hasOddQuotes(text: string): boolean {
+  return text.split('"').length % 2 === 0;
 }

@@ -6,7 +6,7 @@ import { partialYears } from './partial-years.ts';
 import { readRows } from './read-rows.ts';
 import type { ReadSeries, Reader, Reading, Recognition } from './reader.ts';
 import { seriesValues } from './series-values.ts';
-import { type Table, splitTable } from './split-table.ts';
+import { type Table, firstTextLine, splitTable } from './split-table.ts';
 import { yearPlace } from './time-form.ts';
 
 /** Names over columns that belong to the region named last before them. */
@@ -85,7 +85,7 @@ export const uah: Reader = {
 };
 
 function tableOf(file: TextFile): Table | null {
-  const first = file.lines.findIndex((line) => line.trim() !== '');
+  const first = firstTextLine(file);
   if (!/^\s*Year\s+Mo\s+Globe\s+Land\s+Ocean\s+NH\b/i.test(file.lines[first] ?? '')) return null;
   return splitTable(file, { delimiter: 'blanks', commentMarks: ['#'], headerLine: first + 1 });
 }

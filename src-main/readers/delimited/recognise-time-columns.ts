@@ -22,6 +22,9 @@ const timeName = /^(dates?|time|year[ _]?month|decimal.*|month.*year|timebounds?
 const monthName = /^(months?|mon?|mn|mm|monat|mois|mes|mese)$/i;
 const onlyTimeName = /^(days?|dd|tag|dates?( .*)?|time|decimal.*|timebounds?_(lower|upper))$/i;
 
+/** The time is recognised from the first rows; later ones that state it otherwise are bad rows. */
+const maxSampleRows = 2000;
+
 /**
  * Recognises which column states the time, and whether another states the month: by name, else the leftmost column whose
  * cells are years from 1000 to 2999 or dates. Null when no column does.
@@ -35,7 +38,9 @@ export function recogniseTimeColumns(
   split: Split,
   options: DelimitedOptions,
 ): TimeColumns | null {
-  const rows = table.lines.flatMap(({ cells }) => (cells?.length === split.nCells ? [cells] : []));
+  const rows = table.lines
+    .flatMap(({ cells }) => (cells?.length === split.nCells ? [cells] : []))
+    .slice(0, maxSampleRows);
   for (const column of [options.timeColumn, options.monthColumn]) {
     if (column !== undefined && column !== null && column >= split.nCells)
       throw noSuchColumn(table, column, split.nCells);

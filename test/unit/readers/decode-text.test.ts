@@ -74,6 +74,14 @@ describe('decodeText', () => {
     expect(errorOf(text).fields.code).toBe('empty-file');
   });
 
+  it.each(['{"year": [1990]}', '[{"year": 1990}]', ' [\n  [1990, 0.5]\n]'])('refuses JSON: %j', (text) => {
+    expect(errorOf(text).fields.received).toContain('JSON');
+  });
+
+  it('reads text that begins with a bracket', () => {
+    expect(decodeText('f', bytesOf('[invented] level\n1990 1\n')).lines).toHaveLength(2);
+  });
+
   it('refuses a saved web page', () => {
     expect(errorOf('<!DOCTYPE html><html><body>Data</body></html>').fields.code).toBe('web-page');
   });

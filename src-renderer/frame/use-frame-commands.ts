@@ -5,7 +5,13 @@ import { useSession } from '../state/use-session.ts';
 import { useTheme, type ThemeChoice } from '../state/use-theme.ts';
 
 /** The commands that are there on every page: pages, claims, undo, the project, the paper. */
-export function useFrameCommands({ openReviewer }: { openReviewer: () => void }): void {
+export function useFrameCommands({
+  openReviewer,
+  openProject,
+}: {
+  openReviewer: () => void;
+  openProject: () => void;
+}): void {
   const { project, ask, undo, redo } = useSession();
   const { choice } = useTheme();
 
@@ -38,6 +44,7 @@ export function useFrameCommands({ openReviewer }: { openReviewer: () => void })
                   place('New claim', { page: 'new-claim' }, 'add take up a stated number'),
                   place('Import a data file', { page: 'series' }, 'add series dataset csv'),
                 ]),
+            { label: 'Rename the project', words: 'title file path', run: openProject },
             { label: 'Close the project', words: 'open another start', run: () => ask('project.close', {}) },
           ]
         : []),

@@ -105,6 +105,21 @@ describe('an open project', () => {
     expect(host.inputs('trail.redo')).toHaveLength(1);
   });
 
+  it('can be renamed at its title', async () => {
+    const { screen, host } = await mountScreen(App, { prepare });
+    host.reply('project.rename', ({ title }) => ({
+      ...inventedProject,
+      project: { ...inventedProject.project, title },
+    }));
+    await button(screen, 'Marrowick harbour review').trigger('click');
+    await settled();
+    expect(screen.text()).toContain(inventedProject.path);
+    await field(screen, 'Title').setValue('Marrowick, second night');
+    await settled();
+    expect(host.inputs('project.rename')).toEqual([{ title: 'Marrowick, second night' }]);
+    expect(document.title).toBe('Claims · Marrowick, second night · Footing');
+  });
+
   it('goes back to the start when it is closed', async () => {
     const { screen, host } = await mountScreen(App, { prepare });
     host.reply('project.close', () => ({}));

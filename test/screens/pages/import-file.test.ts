@@ -117,6 +117,20 @@ describe('a file on its way in', () => {
     expect(host.inputs('data.preview').at(-1)!.options).toEqual({ readerId: 'gistemp' });
   });
 
+  it('keeps the last good preview, and is not imported, when the new settings do not fit', async () => {
+    const { screen, host } = await mountImport(sound);
+    await field(screen, 'Unit').setValue('K');
+    await field(screen, 'not known').setValue(true);
+    host.reply('data.preview', () => {
+      throw new Refusal({ where: 'quay-thermometer.csv', hint: 'Choose the other decimal mark.' });
+    });
+    await field(screen, 'Read it as').findAll('option')[2]!.setValue();
+    await settled();
+    expect(screen.find('[role=alert]').text()).toContain('Choose the other decimal mark.');
+    expect(screen.text()).toContain('The file cannot be read with these settings.');
+    expect(button(screen, importButton).attributes('disabled')).toBeDefined();
+  });
+
   it('keeps what the reviewer wrote when the import is refused', async () => {
     const { screen } = await mountImport(sound, (host) =>
       host.reply('data.import', () => {

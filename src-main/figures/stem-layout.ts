@@ -66,7 +66,7 @@ export function stemDomain(figure: StemFigure): Domain {
   // The stated digits' interval takes up an eighth of the axis at most.
   const missing = Math.max(0, 8 * (stated.interval.high - stated.interval.low) - (tight.high - tight.low));
   const [low, high] = [tight.low - missing / 2, tight.high + missing / 2];
-  const reach = (high - low) * 0.35;
+  const reach = (high - low) * 0.8;
   const ends = [recomputed?.interval, ...rows.map((row) => row.interval)]
     .flatMap((interval) => [interval?.low, interval?.high])
     .filter((end) => typeof end === 'number')

@@ -9,11 +9,11 @@ const mono = "'Atkinson Hyperlegible Mono', monospace";
 /** Paper, margins and what runs along every page: what it is, which page of how many, and the trail head. */
 export function pageRules({ title, isInvented, head }: Report): string {
   const foot = `font: 400 8pt/1.3 ${sans}; color: ${colour.ink2}; vertical-align: top; padding-top: 3mm; border-top: 0.5pt solid ${colour.rule};`;
-  const top = `font: 600 8pt/1.3 ${sans}; color: ${colour.stated}; vertical-align: bottom; padding-bottom: 5mm;`;
+  const top = `font: 600 8pt/1.3 ${sans}; color: ${colour.stated}; vertical-align: bottom; padding-bottom: 4mm;`;
   return `
 @page {
   size: A4;
-  margin: 20mm 20mm 21mm;
+  margin: 18mm 20mm 19mm;
   @bottom-left { content: ${cssString(title)} " · page " counter(page) " of " counter(pages); ${foot} }
   @bottom-right { content: ${cssString(`Trail ${head.sequence} · ${shortDigest(head.hash)}`)}; text-align: right; ${foot} }
   ${isInvented ? `@top-right { content: "Invented data"; ${top} text-align: right; }` : ''}
@@ -39,14 +39,15 @@ h1 { font-size: 25px; font-weight: 500; line-height: 1.22; letter-spacing: -0.00
 h2 { font-size: 17px; font-weight: 600; line-height: 1.3; margin: 28px 0 6px }
 h3 { font-size: 14px; font-weight: 600; line-height: 1.35; margin: 18px 0 4px; overflow-wrap: anywhere }
 .page > h2:first-of-type { margin-top: 12px }
-.first h2, .first > h2:first-of-type { margin-top: 16px; margin-bottom: 4px }
+.first h2, .first > h2:first-of-type { margin-top: 14px; margin-bottom: 3px }
+.first dl { font-size: 12.5px; grid-template-columns: 80px 1fr; margin-bottom: 10px }
 .first td:last-child { white-space: nowrap }
 .first table { margin: 2px 0 10px }
 .first figure { margin: 8px 0 10px }
 .kicker, .quiet, .digests { color: ${colour.ink2} }
 .quiet { font-size: 12px; line-height: 1.42 }
 p { margin-bottom: 8px; max-width: 68ch; overflow-wrap: anywhere }
-.say { font-size: 15.5px; line-height: 1.5; max-width: none; margin-bottom: 9px }
+.say { font-size: 15px; line-height: 1.48; max-width: none; margin-bottom: 9px }
 .prose { font-size: 14px }
 .lead { font-size: 14.5px }
 .draft, .bad { color: ${colour.stated}; font-weight: 650 }
@@ -58,7 +59,7 @@ dd { min-width: 0; overflow-wrap: anywhere }
 ul { padding-left: 16px; margin-bottom: 8px }
 li { margin-bottom: 2px; overflow-wrap: anywhere }
 .caveats { list-style: "– " inside; padding-left: 0; color: ${colour.ink2}; font-size: 12px; margin: 3px 0 8px }
-.cautions { padding-left: 12px; border-left: 2px solid ${colour.rule}; color: ${colour.ink2}; font-size: 11.5px; line-height: 1.45; max-width: none }
+.cautions { padding-left: 12px; border-left: 2px solid ${colour.rule}; color: ${colour.ink2}; font-size: 11px; line-height: 1.42; max-width: none }
 .note { border-left: 2px solid ${colour.rule}; padding-left: 12px; margin: 8px 0 12px }
 figure { margin: 12px 0 14px }
 figure svg { display: block; width: 100%; height: auto }
@@ -80,9 +81,8 @@ td .quiet { white-space: normal }
 .small, .quantiles { width: auto; min-width: 55% }
 .small th, .small td, .quantiles th, .quantiles td { padding-right: 24px }
 .halves th[scope='row'] { width: 58% }
-.ledger th[scope='row'] { width: 34% }
-.ledger td:nth-child(2) { width: 26% }
-.ledger td:last-child { width: 17% }
+.ledger th[scope='row'] { width: 42% }
+.ledger td:last-child { white-space: nowrap }
 .published th[scope='row'] { width: 24% }
 .published td:nth-child(3) { width: 30% }
 .contents td:nth-child(2) { width: 46% }
@@ -97,7 +97,7 @@ sub, sup { font-size: 0.72em; line-height: 0 }
   .of-draft { page: of-draft }
   .invented { padding: 0 0 0 10px; margin-bottom: 12px }
   h1, h2, h3, caption, thead { break-after: avoid }
-  tr, figure, dl, li, .first .together { break-inside: avoid }
+  tr, figure, li, .note, .together > dl, .first .together { break-inside: avoid }
   p { orphans: 3; widows: 3 }
   thead { display: table-header-group }
   a { color: inherit; text-decoration: none }

@@ -61,7 +61,7 @@ function datasetPart(dataset: Dataset, series: readonly Series[]): Html {
       ]),
       'series',
     )}
-    ${facts([['Values, SHA-256', series.map(({ name, valuesDigest }) => html`<div>${digestPart(valuesDigest)} <span class="quiet">${name}</span></div>`)]])}
+    ${facts([['Values, SHA-256', valueDigests(series)]])}
     ${
       dataset.leftOut.length === 0
         ? nothing('No row of this file was left out.')
@@ -72,4 +72,11 @@ function datasetPart(dataset: Dataset, series: readonly Series[]): Html {
           )
     }
   </section>`;
+}
+
+function valueDigests(series: readonly Series[]): HtmlValue {
+  return series.map(({ name, valuesDigest }) => {
+    const of = series.length === 1 ? null : html`<span class="quiet">${name}</span><br />`;
+    return html`<div>${of}${digestPart(valuesDigest)}</div>`;
+  });
 }

@@ -1,9 +1,10 @@
 import type { Report, ReportClaim } from '../../contract/project.ts';
-import { formatInterval, formatNumber, withUnit } from '../../quantities/notation.ts';
+import { withUnit } from '../../quantities/notation.ts';
 import { quantityNames } from '../../quantities/quantity-names.ts';
-import { facts, html, joined, nothing, paragraphs, table, type Html, type HtmlValue } from '../html.ts';
+import { facts, html, joined, nothing, paragraphs, type Html, type HtmlValue } from '../html.ts';
 import { currentSignatures, isDraft } from '../signing.ts';
-import { capitalised, countWord, dayText } from '../words.ts';
+import { capitalised, dayText } from '../words.ts';
+import { decidingPart } from './deciding-part.ts';
 import { figurePart } from './figure-part.ts';
 
 /** What a reader needs who reads one page: the words, the conclusion, who signed it, the stem, what decides it. */
@@ -23,7 +24,7 @@ export function firstPage(claim: ReportClaim, report: Report): Html {
     ])}
     ${findingText(claim)}
     ${claim.stem ? figurePart(claim.stem) : nothing('There is no figure: nothing has been recomputed.')}
-    ${deciding(claim)}
+    ${decidingPart(claim)}
     <section class="together">
       <h2>Read this with care</h2>
       <p class="cautions">${joined(report.cautions, ' ')}</p>
@@ -69,52 +70,5 @@ function findingText({ findingText: text, agreement }: ReportClaim): HtmlValue {
   return [
     nothing('No finding has been written on this claim.'),
     agreement ? html`<p class="say">${agreement.sentence}</p>` : null,
-  ];
-}
-
-/** The assumptions that move the number by as much as the reviewer called notable, the heaviest first. */
-function deciding({ ledger }: ReportClaim): HtmlValue {
-  if (ledger.length === 0) return [html`<h2>What it rests on</h2>`, nothing('No assumption has been tested.')];
-  const decisive = ledger.filter(({ outcome }) => outcome.weight === 'decisive');
-  const notable = ledger.filter(({ outcome }) => outcome.weight === 'notable');
-  const shown = [...decisive, ...notable];
-  if (shown.length === 0) {
-    return [
-      html`<h2>What it rests on</h2>`,
-      html`<p>
-        Of the ${countWord(ledger.length)} assumptions in the ledger none moves the number by a notable amount.
-      </p>`,
-    ];
-  }
-  const kind = decisive.length > 0 ? ['decides', 'decide'] : ['moves', 'move'];
-  const count = decisive.length > 0 ? decisive.length : notable.length;
-  const heading =
-    count === 1 ? `The assumption that ${kind[0]} it` : `The ${countWord(count)} assumptions that ${kind[1]} it`;
-  const rows = shown.map(({ outcome, title, mark }) => [
-    title,
-    outcome.test,
-    outcome.alternative
-      ? html`${formatNumber(outcome.alternative.value)}${
-          outcome.alternative.interval
-            ? html` <span class="quiet range">${formatInterval(outcome.alternative.interval)}</span>`
-            : null
-        }`
-      : '–',
-    outcome.weight ?? '–',
-    mark?.mark ?? 'untested',
-  ]);
-  return [
-    html`<h2>${heading}</h2>`,
-    table(
-      null,
-      [
-        { heading: 'The number needs' },
-        { heading: 'Test' },
-        { heading: 'Moves it to', isNumber: true },
-        { heading: 'Weight' },
-        { heading: 'Marked' },
-      ],
-      rows,
-    ),
   ];
 }

@@ -43,11 +43,12 @@ export function recomputationPart(claim: ReportClaim): Html {
       ['Conversion', recomputation.conversion ?? 'none'],
       ['Full precision', html`<code>${String(recomputation.value)}</code>`],
     ])}
-    ${fit ? fitPart(fit) : nothing('This procedure has no regression, so there are no diagnostics of a fit.')}
-    ${caveatsPart(recomputation.caveats)} ${claim.figures.filter((figure) => !isWindowsFigure(figure)).map(figurePart)}`;
+    ${fit ? fitPart(fit, claim.claim.procedure?.kind === 'trend' ? 'K per year' : 'K per e-folding') : nothing('This procedure has no regression, so there are no diagnostics of a fit.')}
+    ${caveatsPart([...recomputation.caveats, ...(fit?.regression.caveats ?? [])])}
+    ${claim.figures.filter((figure) => !isWindowsFigure(figure)).map(figurePart)}`;
 }
 
-function fitPart(fit: Fit): HtmlValue {
+function fitPart(fit: Fit, slopeUnit: string): HtmlValue {
   const { diagnostics: d, anchorValues } = fit;
   const optional = (value: number | null, significantDigits = 3) =>
     value === null ? 'does not exist for this fit' : formatNumber(value, { significantDigits });
@@ -69,10 +70,10 @@ function fitPart(fit: Fit): HtmlValue {
       ],
     ]),
     table(
-      'Slope under each convention for its error; the procedure’s own first',
+      `Slope, ${slopeUnit}, under each convention for its error; the procedure’s own first`,
       [
         { heading: 'Convention' },
-        { heading: 'Slope, K', isNumber: true },
+        { heading: 'Slope', isNumber: true },
         { heading: 'Standard error', isNumber: true },
         { heading: '95 % interval', isNumber: true },
       ],
@@ -100,7 +101,6 @@ function fitPart(fit: Fit): HtmlValue {
         ['Residual standard deviation', formatNumber(d.residualStandardDeviation), 'in the unit of the vertical axis'],
       ],
     ),
-    caveatsPart(fit.regression.caveats),
     html`<p class="quiet">
       The rows used, year by year, with residuals, leverages and Cook’s distances, are in the data form of this report
       (report.json).

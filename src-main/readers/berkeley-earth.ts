@@ -46,8 +46,9 @@ export const berkeleyEarth: Reader = {
   read(file): Reading {
     const blocks = blocksOf(file);
     const [first] = blocks;
-    if (first === undefined)
+    if (first === undefined) {
       throw otherFormat(file, 0, 'comments marked % that name Berkeley Earth, and rows of twelve columns');
+    }
     const comments = commentsOf(file);
     const reads = blocks.map((block) => ({ block, read: readBlock(block) }));
     return {

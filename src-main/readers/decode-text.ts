@@ -44,8 +44,9 @@ const signatures: readonly { bytes: readonly number[]; kind: string; hint: strin
  * @throws InputError `empty-file`, `not-text` or `web-page`
  */
 export function decodeText(fileName: string, bytes: Uint8Array): TextFile {
-  if (bytes.length === 0)
+  if (bytes.length === 0) {
     throw unreadable(fileName, 'empty-file', 'an empty file', 'Look whether the download broke off.');
+  }
   const signature = signatures.find((known) => known.bytes.every((byte, place) => bytes[place] === byte));
   if (signature) throw unreadable(fileName, 'not-text', signature.kind, signature.hint);
   const { text, notes } = decode(bytes);

@@ -68,8 +68,9 @@ export const forcingTable: Reader = {
 
   read(file): Reading {
     const layout = layoutOf(file);
-    if (layout === null)
+    if (layout === null) {
       throw otherFormat(file, 0, 'a header with a year and forcing agents: year, co2, ch4, …, solar, volcanic, total');
+    }
     const { table, timeColumn, time } = layout;
     const read = readRows(table, {
       nCells: table.header.length,

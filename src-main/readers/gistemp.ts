@@ -44,8 +44,9 @@ export const gistemp: Reader = {
 
   read(file): Reading {
     const layout = layoutOf(file);
-    if (layout === null)
+    if (layout === null) {
       throw otherFormat(file, 0, 'a GISTEMP table: a header Year, Jan, …, Dec, J-D, D-N, DJF, MAM, JJA, SON');
+    }
     const { table, delimiter, columns, unitC } = layout;
     const read = readRows(table, {
       nCells: table.header.length,

@@ -1,4 +1,4 @@
-/** Words as a name for commands: lower case, letters, digits and hyphens. */
+/** Words as a name for commands: lower case, letters, digits and hyphens, short enough for the name of a series. */
 export function nameOf(words: string): string {
   return words
     .replaceAll('₂', '2')
@@ -7,7 +7,7 @@ export function nameOf(words: string): string {
     .toLowerCase()
     .replace(/[^a-z0-9]+/g, '-')
     .replace(/^-+|-+$/g, '')
-    .slice(0, 100);
+    .slice(0, 110);
 }
 
 /** The name of a file without its last extension. */

@@ -80,12 +80,10 @@ export const noaaGml: Reader = {
 
   read(file): Reading {
     const layout = layoutOf(file);
-    if (layout === null)
-      throw otherFormat(
-        file,
-        firstTextLine(file, ['#']),
-        'rows of a NOAA GML file: year, month, decimal date, average, …; or year, mean, uncertainty',
-      );
+    if (layout === null) {
+      const expected = 'rows of a NOAA GML file: year, month, decimal date, average, …; or year, mean, uncertainty';
+      throw otherFormat(file, firstTextLine(file, ['#']), expected);
+    }
     const { table, roles } = layout;
     const timeColumn = roles.indexOf('year');
     const monthColumn = roles.indexOf('month');

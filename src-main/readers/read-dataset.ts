@@ -96,8 +96,9 @@ function chooseReader(file: TextFile, options: ReadOptions): { reader: Reader; w
     if (reader === undefined) throw unknownReader(file, options.readerId);
     return { reader, why: 'Chosen by the reviewer' };
   }
-  if (options.delimited !== undefined)
+  if (options.delimited !== undefined) {
     return { reader: delimited, why: 'The reviewer says how the text is to be split' };
+  }
   let best = { reader: delimited, why: '', certainty: 0 };
   const others = readers.filter((reader) => reader !== delimited);
   for (const reader of others) {

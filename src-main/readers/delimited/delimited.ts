@@ -1,19 +1,15 @@
 import type { DelimitedOptions } from '../../contract/series.ts';
 import { InputError } from '../../errors.ts';
 import type { TextFile } from '../decode-text.ts';
-import { monthOfName } from '../month-names.ts';
-import { nameOf, stemOf } from '../name-of.ts';
-import { partialYears } from '../partial-years.ts';
-import { type RowsRead, readRows } from '../read-rows.ts';
-import type { ReadSeries, Reader, Reading, Recognition } from '../reader.ts';
-import { monthsAcross, seriesValues } from '../series-values.ts';
+import { readRows } from '../read-rows.ts';
+import type { Reader, Reading, Recognition } from '../reader.ts';
 import { splitLine } from '../split-line.ts';
 import { isComment, splitTable, type Table } from '../split-table.ts';
+import { offerColumns } from './offer-columns.ts';
 import { recogniseHeader } from './recognise-header.ts';
-import { recogniseMeaning } from './recognise-meaning.ts';
 import { recogniseSplit, type Split } from './recognise-split.ts';
 import { recogniseTimeColumns, type TimeColumns } from './recognise-time-columns.ts';
-import { columnName, isUncertaintyName, recogniseValueColumns, type ValueColumns } from './recognise-value-columns.ts';
+import { columnName, recogniseValueColumns, type ValueColumns } from './recognise-value-columns.ts';
 
 /** A delimited text as recognised, before its rows are read. */
 interface Layout {
@@ -56,7 +52,7 @@ export const delimited: Reader = {
       columns: values.columns,
       isMissingText: values.isMissingText,
     });
-    const { series, notes } = seriesOf(file, layout, read);
+    const { series, notes } = offerColumns({ ...layout, fileName: file.fileName }, read);
     return {
       series,
       nRows: read.rows.length,
@@ -85,8 +81,9 @@ function layoutOf(file: TextFile, options: DelimitedOptions): Layout {
   const split = recogniseSplit(file, options);
   if (split === null) throw noTable(file, 'lines that hold a year or date and at least one number');
   const { headerLine, names } = recogniseHeader(file, split, options);
-  if (options.headerLine === undefined && headerLine === 0 && split.nRows < minRowsWithoutHeader)
+  if (options.headerLine === undefined && headerLine === 0 && split.nRows < minRowsWithoutHeader) {
     throw noTable(file, 'a header, or more than a line or two of numbers');
+  }
   // Above the first row: titles and rules of dashes are no rows; lines with as many cells as the rows are, if damaged ones.
   const lines = file.lines.map((line, place) => {
     if (place >= split.firstRow || place < headerLine) return line;
@@ -99,76 +96,6 @@ function layoutOf(file: TextFile, options: DelimitedOptions): Layout {
   const preamble = textAbove(file, split, headerLine);
   const values = recogniseValueColumns(table, { names, split, time, preamble }, options);
   return { split, names, table, time, values, preamble };
-}
-
-function seriesOf(file: TextFile, layout: Layout, read: RowsRead): { series: ReadSeries[]; notes: string[] } {
-  const { preamble } = layout;
-  const across = monthColumns(layout);
-  const stem = stemOf(file.fileName);
-  const series: ReadSeries[] = [];
-  const notes: string[] = [];
-  const withoutUnit: string[] = [];
-  const celsius: string[] = [];
-  const add = (name: string, values: ReadSeries['values'], position: string): void => {
-    if (values.values.every((value) => value === null)) {
-      notes.push(`“${name}” holds no value and is not offered.`);
-      return;
-    }
-    const {
-      notes: remarks,
-      isCelsiusDifference,
-      ...meaning
-    } = recogniseMeaning({ column: name, preamble, fileName: file.fileName }, values);
-    notes.push(...remarks);
-    if (meaning.unitFrom === 'unknown') withoutUnit.push(name);
-    if (isCelsiusDifference) celsius.push(name);
-    const plain = nameOf(name) || 'column';
-    const key = series.some((other) => other.key === plain) ? nameOf(`${plain} ${position}`) : plain;
-    series.push({
-      key,
-      suggestedName: nameOf(`${stem} ${key}`) || key,
-      label: key === plain ? name : `${name} (${position})`,
-      ...meaning,
-      step: values.months ? 'month' : 'year',
-      partialYears: partialYears(values),
-      isMain: false,
-      values,
-    });
-  };
-  if (across !== null) add('monthly', monthsAcross(read.rows, across), 'months');
-  layout.values.columns.forEach(({ name, index }, place) => {
-    if (across?.includes(place)) return;
-    add(name, seriesValues(read.rows, place), `column ${index + 1}`);
-  });
-  if (celsius.length > 0)
-    notes.push(`In °C in the file: ${celsius.join(', ')}. Differences are the same in K, so the unit is K.`);
-  if (withoutUnit.length > 0) notes.push(`The file does not say in which unit these are: ${withoutUnit.join(', ')}.`);
-  const main = mainOf(series);
-  const [only] = series;
-  return {
-    series: series.map((one) => ({
-      ...one,
-      isMain: one === main,
-      ...(only === one && series.length === 1 ? { suggestedName: nameOf(stem) || one.key } : {}),
-    })),
-    notes,
-  };
-}
-
-/** The first series of a quantity that claims are about; else the first that does not describe another one. */
-function mainOf(series: readonly ReadSeries[]): ReadSeries | undefined {
-  const candidates = series.filter(({ label }) => !isUncertaintyName(label));
-  return candidates.find(({ quantity }) => quantity !== 'other') ?? candidates[0] ?? series[0];
-}
-
-/** Places of twelve columns named January to December, or 1 to 12, in a table with a row for each year. */
-function monthColumns({ time, values: { columns } }: Layout): number[] | null {
-  if (time.step !== 'year') return null;
-  const months = columns.map(
-    ({ name }) => monthOfName(name) ?? (/^(0?[1-9]|1[0-2])$/.test(name) ? Number(name) : null),
-  );
-  const places = Array.from({ length: 12 }, (_, month) => months.indexOf(month + 1));
-  return places.every((place) => place !== -1) ? places : null;
 }
 
 /** Titles and comments, without the line that names the columns. */
@@ -186,8 +113,9 @@ function notesOn({ split, time, values, table }: Layout): string[] {
   if (split.decimalMark === ',') notes.push(...noteDecimalComma(table));
   if (table.headerLine === 0) notes.push('No line names the columns.');
   if (time.note !== null) notes.push(time.note);
-  if (values.wordColumns.length > 0)
+  if (values.wordColumns.length > 0) {
     notes.push(`Not offered, because they hold words: ${values.wordColumns.join(', ')}.`);
+  }
   return notes;
 }
 

@@ -124,7 +124,8 @@ function hintAtBasePeriod(column: string, values: SeriesValues): string[] {
 }
 
 function agentOf(column: string): string | null {
-  if (/\btotal\b/i.test(column))
+  if (/\btotal\b/i.test(column)) {
     return /anthro/i.test(column) ? 'total-anthropogenic' : /natural/i.test(column) ? 'total-natural' : 'total';
+  }
   return co2Words.test(column) ? 'co2' : null;
 }

@@ -42,8 +42,9 @@ export function recogniseTimeColumns(
     .flatMap(({ cells }) => (cells?.length === split.nCells ? [cells] : []))
     .slice(0, maxSampleRows);
   for (const column of [options.timeColumn, options.monthColumn]) {
-    if (column !== undefined && column !== null && column >= split.nCells)
+    if (column !== undefined && column !== null && column >= split.nCells) {
       throw noSuchColumn(table, column, split.nCells);
+    }
   }
   const candidates = options.timeColumn === undefined ? candidatesOf(names, rows, split) : [options.timeColumn];
   const readings = candidates

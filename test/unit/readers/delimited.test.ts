@@ -390,6 +390,7 @@ describe('delimited: files that are no table', () => {
     ['words beside years', 'year,name\n1990,a\n1991,b\n'],
     ['numbers without years', '0.5,0.7\n0.3,0.1\n0.2,0.6\n'],
     ['a single column', '1990\n1991\n1992\n'],
+    ['a table without any value', 'year,level\n1990,-999\n1991,-999\n'],
   ])('refuses %s, naming the file and a line', (_, text) => {
     const { fields } = errorOf(text, {}, 'letter.txt');
     expect(fields.where).toMatch(/^letter\.txt, line \d+$/);

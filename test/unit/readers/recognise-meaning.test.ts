@@ -89,6 +89,13 @@ describe('unit and quantity from the words of the file', () => {
     ]);
   });
 
+  it('shortens long names and still keeps them apart', () => {
+    const long = 'invented '.repeat(80).trim();
+    const found = preview(`year,${long},${long}\n1990,1,2\n1991,3,4\n`).series;
+    expect(new Set(found.map(({ key }) => key)).size).toBe(2);
+    expect(found.every(({ label, suggestedName }) => label.length <= 500 && suggestedName.length <= 120)).toBe(true);
+  });
+
   it('takes as main series what claims are about, not an uncertainty', () => {
     const found = preview('year,unc,rain,anomaly (K)\n1990,1,2,0.3\n1991,3,4,-0.5\n').series;
     expect(found.find(({ isMain }) => isMain)?.label).toBe('anomaly (K)');

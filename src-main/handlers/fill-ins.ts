@@ -16,7 +16,7 @@ export function fillIns(
     if (interval95) figures['recomputed-interval'] = formatInterval(interval95, unit);
     if (fit) {
       const { diagnostics, window, slopes, intercept } = fit;
-      figures['window'] = `${window.start}–${window.end}`;
+      figures['years'] = `${window.start}–${window.end}`;
       figures['r-squared-centred'] = formatNumber(diagnostics.rSquaredCentred, { decimals: 2 });
       figures['r-squared-uncentred'] = formatNumber(diagnostics.rSquaredUncentred, { decimals: 2 });
       figures['durbin-watson'] = formatNumber(diagnostics.durbinWatson, { decimals: 2 });

@@ -1,13 +1,20 @@
+import { execFileSync } from 'node:child_process';
+import { mkdtempSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
 import Database from 'better-sqlite3';
 import { openProject } from '../../src-main/project/open-project.ts';
-import { testCore } from '../helpers/test-core.ts';
 import type { BenchCase } from './bench-case.ts';
 
 /** Opening, with every check of an untrusted file, beside the driver opening the same file and checking its pages. */
-export async function caseOfOpening(): Promise<BenchCase> {
-  const { ask, end } = await testCore();
-  const { path } = await ask('project.openDemo', {});
-  await ask('project.close', {});
+export function caseOfOpening(): BenchCase {
+  const folder = mkdtempSync(join(tmpdir(), 'footing-bench-'));
+  const cli = join(import.meta.dirname, '..', '..', 'out', 'main', 'cli.js');
+  const made = execFileSync(process.execPath, [cli, 'demo', folder, '--json'], {
+    encoding: 'utf8',
+    stdio: ['ignore', 'pipe', 'ignore'],
+  });
+  const { project: path } = JSON.parse(made) as { project: string };
   const holder = { reviewer: 'bench', host: 'bench', engineVersion: 'bench' };
   return {
     name: 'opening a project',
@@ -18,6 +25,6 @@ export async function caseOfOpening(): Promise<BenchCase> {
       db.pragma('quick_check');
       db.close();
     },
-    end: () => void end(),
+    end: () => rmSync(folder, { recursive: true }),
   };
 }

@@ -73,7 +73,7 @@ export function resolveRequest(project: Project, request: StoredRequest) {
         code: 'unknown-method',
         where: 'Stored result',
         expected: 'a method of this version',
-        received: String(method),
+        received: JSON.stringify(method),
         hint: 'The project may have been written by a newer version.',
       });
   }

@@ -122,7 +122,7 @@ function completeDraft(project: Project, draft: ClaimDraft): Omit<Claim, 'id'> {
       presentedAs: null,
       statedRSquared: null,
       ...withoutUndefined(draft.statement),
-    } as Claim['statement'],
+    },
     answers: draft.answers ?? {},
     derivation: draft.derivation ?? [],
     procedure: completeProcedure(draft.procedure, find),

@@ -1,8 +1,8 @@
 import type { z } from 'zod';
 import { computeMethods, type ComputeInput, type ComputeMethod } from '../contract/compute.ts';
 import { InputError } from '../errors.ts';
+import { checkInput } from './check-input.ts';
 import type { Handlers } from './context.ts';
-import { inputProblem } from './input-problem.ts';
 
 export const computeHandlers: Handlers<'compute'> = {
   /** One stateless computation: nothing is read from a project, nothing is stored. */
@@ -13,13 +13,12 @@ export const computeHandlers: Handlers<'compute'> = {
         where: 'method',
         expected: `one of ${Object.keys(computeMethods).join(', ')}`,
         received: method.slice(0, 80),
-        hint: 'footing schema compute lists each with its inputs.',
+        hint: 'footing schema lists the inputs of each as compute.<method>.',
       });
     }
     const schema: z.ZodType = computeMethods[method].input;
-    const parsed = schema.safeParse(input);
-    if (!parsed.success) throw new InputError(inputProblem(method, parsed.error));
-    const value = await jobs.run(method, parsed.data as ComputeInput<ComputeMethod>, { label: `Computing ${method}` });
+    const checked = checkInput(method, schema, input);
+    const value = await jobs.run(method, checked as ComputeInput<ComputeMethod>, { label: `Computing ${method}` });
     return JSON.parse(JSON.stringify(value)) as z.infer<z.ZodJSONSchema>;
   },
 };

@@ -7,13 +7,13 @@ import { requests, type Answer, type ErrorAnswer } from '../contract/requests.ts
 import { isFootingError } from '../errors.ts';
 import { JobCancelled, type JobRunner } from '../jobs/job.ts';
 import { identityStore } from '../project/identity.ts';
+import { checkInput } from './check-input.ts';
 import { claimHandlers } from './claims.ts';
 import { computeHandlers } from './compute.ts';
 import type { Handler, HandlerContext, Handlers } from './context.ts';
 import { dataHandlers } from './data.ts';
 import { figureHandlers } from './figures.ts';
 import { findingHandlers } from './findings.ts';
-import { inputProblem } from './input-problem.ts';
 import { projectHandlers } from './projects.ts';
 import { reportHandlers } from './reports.ts';
 import { sessionHandlers } from './session.ts';
@@ -78,11 +78,10 @@ export function createCore({
   async function answer(name: string, input: unknown): Promise<Answer<RequestName>> {
     if (!isRequestName(name)) return { ok: false, error: unknownRequest(name) };
     const schema: z.ZodType = requests[name].input;
-    const parsed = schema.safeParse(input);
-    if (!parsed.success) return { ok: false, error: inputProblem(name, parsed.error) };
     const handler = handlers[name] as Handler<RequestName>;
-    const run = () => handler(parsed.data as never, context);
     try {
+      const checked = checkInput(name, schema, input);
+      const run = () => handler(checked as never, context);
       if (!inTurn.has(name)) return { ok: true, value: await run() };
       const mine = turn.then(run);
       turn = mine.catch(() => undefined);
@@ -123,7 +122,7 @@ function unknownRequest(name: string): ErrorAnswer {
 function errorAnswer(error: unknown, name: RequestName): ErrorAnswer {
   if (isFootingError(error)) {
     const { code, where, expected, received, hint = '' } = error.fields;
-    return { kind: error.name as ErrorAnswer['kind'], code, where, expected, received, hint };
+    return { kind: error.name, code, where, expected, received, hint };
   }
   if (error instanceof JobCancelled) {
     return {

@@ -1,6 +1,6 @@
 import type { BadRow } from '../contract/series.ts';
 import { InputError } from '../errors.ts';
-import type { Place, Row, RowsRead, ValueColumn } from './read-rows.ts';
+import { type Place, type Row, type RowsRead, type ValueColumn, placeName } from './row.ts';
 
 /**
  * Puts rows in order of time and settles repeated ones: a row that repeats an earlier one word for word is left out;
@@ -40,10 +40,6 @@ export function arrangeRows(fileName: string, rows: readonly Row[], columns: rea
 /** One or two conflicts in a short file are slips; as many as there are times, or half as many in a longer one, are not. */
 function areTooMany(nConflicts: number, nKept: number): boolean {
   return nConflicts >= nKept || (nConflicts >= 3 && nConflicts * 2 >= nKept);
-}
-
-export function placeName({ year, month }: Place): string {
-  return month === null ? String(year) : `${year}-${String(month).padStart(2, '0')}`;
 }
 
 function orderOf({ year, month }: Place): number {

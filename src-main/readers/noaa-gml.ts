@@ -1,10 +1,10 @@
-import { placeName } from './arrange-rows.ts';
 import type { TextFile } from './decode-text.ts';
 import { isNegative } from './missing-marks.ts';
 import { otherFormat } from './other-format.ts';
 import { parseNumber } from './parse-number.ts';
 import { partialYears } from './partial-years.ts';
-import { type Row, type ValueColumn, readRows } from './read-rows.ts';
+import { readRows } from './read-rows.ts';
+import { type Row, type ValueColumn, placeName } from './row.ts';
 import type { ReadSeries, Reader, Reading, Recognition } from './reader.ts';
 import { type Limits, seriesValues, standardLimits } from './series-values.ts';
 import { splitLine } from './split-line.ts';

@@ -3,27 +3,8 @@ import { InputError } from '../errors.ts';
 import { arrangeRows } from './arrange-rows.ts';
 import { isMissingText } from './missing-marks.ts';
 import { type DecimalMark, parseNumber } from './parse-number.ts';
+import type { Place, Row, RowsRead, ValueColumn } from './row.ts';
 import type { Table, TableLine } from './split-table.ts';
-
-/** A place in time: a month of a year, or a whole year. */
-export interface Place {
-  year: number;
-  month: number | null;
-}
-
-/** A column of numbers, and which of them stand for "no value". */
-export interface ValueColumn {
-  index: number;
-  name: string;
-  isMissing: (value: number) => boolean;
-}
-
-/** A row that was read: its place in time and one number, or null for "no value", for each value column. */
-export interface Row extends Place {
-  line: number;
-  text: string;
-  values: (number | null)[];
-}
 
 export interface RowFormat {
   nCells: number;
@@ -35,13 +16,6 @@ export interface RowFormat {
   columns: readonly ValueColumn[];
   /** Cells that stand for "no value" in all columns; the customary words and signs when absent. */
   isMissingText?: (cell: string) => boolean;
-}
-
-export interface RowsRead {
-  /** In order of time, each place at most once. */
-  rows: Row[];
-  badRows: BadRow[];
-  notes: string[];
 }
 
 /**

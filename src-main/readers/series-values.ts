@@ -1,5 +1,5 @@
 import type { SeriesValues } from '../contract/series.ts';
-import type { Row } from './read-rows.ts';
+import type { Row } from './row.ts';
 
 /** The provider's limits around a value, and their level. */
 export interface Limits {

@@ -1,8 +1,7 @@
 import type { TimeStep } from '../contract/series.ts';
-import { placeName } from './arrange-rows.ts';
 import { monthOfName } from './month-names.ts';
 import { type DecimalMark, parseNumber } from './parse-number.ts';
-import type { Place } from './read-rows.ts';
+import { type Place, placeName } from './row.ts';
 
 /** How a column states the time. */
 export interface TimeForm {

@@ -3,7 +3,7 @@ import { InputError } from '../../errors.ts';
 import { monthOfName } from '../month-names.ts';
 import { nameOf, stemOf } from '../name-of.ts';
 import { partialYears } from '../partial-years.ts';
-import type { RowsRead, ValueColumn } from '../read-rows.ts';
+import type { RowsRead, ValueColumn } from '../row.ts';
 import type { ReadSeries } from '../reader.ts';
 import { monthsAcross, seriesValues } from '../series-values.ts';
 import { type Meaning, recogniseMeaning } from './recognise-meaning.ts';

@@ -2,7 +2,7 @@ import type { DelimitedOptions, TimeStep } from '../../contract/series.ts';
 import { InputError } from '../../errors.ts';
 import { monthOfName } from '../month-names.ts';
 import { parseNumber } from '../parse-number.ts';
-import type { Place } from '../read-rows.ts';
+import type { Place } from '../row.ts';
 import type { Table } from '../split-table.ts';
 import { recogniseTime, yearPlace } from '../time-form.ts';
 import type { Split } from './recognise-split.ts';

@@ -2,7 +2,7 @@ import type { DelimitedOptions } from '../../contract/series.ts';
 import { InputError } from '../../errors.ts';
 import { isMissingText, isNegative, numericMarksOf } from '../missing-marks.ts';
 import { parseNumber } from '../parse-number.ts';
-import type { ValueColumn } from '../read-rows.ts';
+import type { ValueColumn } from '../row.ts';
 import type { Table } from '../split-table.ts';
 import type { Split } from './recognise-split.ts';
 import type { TimeColumns } from './recognise-time-columns.ts';

@@ -1,5 +1,5 @@
-import { mkdirSync, renameSync, writeFileSync } from 'node:fs';
-import { join, resolve } from 'node:path';
+import { existsSync, mkdirSync, renameSync, writeFileSync } from 'node:fs';
+import { join, parse, resolve } from 'node:path';
 import { cautions } from '../contract/cautions.ts';
 import type { Report, ReportClaim } from '../contract/project.ts';
 import { engineVersion } from '../engine-version.ts';
@@ -29,12 +29,24 @@ export const reportHandlers: Handlers<'report.render' | 'report.write'> = {
   },
 };
 
-/** A report is either all there or not there at all. */
+/**
+ * A report is either all there or not there at all, and never replaces an earlier one: that bears witness to the trail
+ * as it was.
+ */
 function writeWhole(path: string, text: string): string {
   const unfinished = `${path}.unfinished`;
   writeFileSync(unfinished, text);
+  if (existsSync(path)) renameSync(path, freeName(path));
   renameSync(unfinished, path);
   return path;
+}
+
+/** `report-earlier-1.html` beside `report.html`, or the next number that is free. */
+function freeName(path: string): string {
+  const { dir, name, ext } = parse(path);
+  let copy = 1;
+  while (existsSync(join(dir, `${name}-earlier-${copy}${ext}`))) copy += 1;
+  return join(dir, `${name}-earlier-${copy}${ext}`);
 }
 
 export function assembleReport(project: Project, claimIds: number[] | undefined, writtenAt: string): Report {

@@ -67,6 +67,7 @@ export function createSession(): SessionStore {
     'data.import': ({ project }, number) => adopt(project, number),
     'dataset.remove': adopt,
     'series.update': adopt,
+    'series.rebase': ({ project }, number) => adopt(project, number),
     'claim.create': refresh,
     'claim.update': refresh,
     'claim.remove': adopt,

@@ -35,7 +35,7 @@ export function claimLadder(context: TestContext, assumptions: readonly Assumpti
     caveats.push({
       code: 'co2-alone',
       detail:
-        'The step for heat uptake stands on a slope that puts all warming on CO2: its number is an effective sensitivity only if the other forcings cancel out.',
+        'The step for heat uptake stands on a slope that puts all warming on CO₂: its number is an effective sensitivity only if the other forcings cancel out.',
     });
   }
   return ladder({

@@ -40,7 +40,7 @@ export function forcingMissing({ series, evidence }: ClaimComputation): { reason
   }
   if (!evidence.doublingWm2 && !evidence.energyBudget) {
     return {
-      reason: 'The forcing of a CO2 doubling is not given, so a slope on forcing cannot be turned into K per doubling.',
+      reason: 'The forcing of a CO₂ doubling is not given, so a slope on forcing cannot be turned into K per doubling.',
       wouldNeed: 'Give it (W/m², with its 5–95 % half-width) under Assumptions, or within the energy budget.',
     };
   }

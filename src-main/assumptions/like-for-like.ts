@@ -158,7 +158,7 @@ function whyNotConverted(own: QuantityId, target: QuantityId): string {
   if (own === 'trend' || target === 'trend' || own === 'ratio' || target === 'ratio')
     return 'There is no conversion between them.';
   if (isEquilibrium(own) === isEquilibrium(target)) {
-    return 'Between the two lie the forcings other than CO2; see that assumption for the number on all forcings.';
+    return 'Between the two lie the forcings other than CO₂; see that assumption for the number on all forcings.';
   }
   return 'With an energy budget the number could be converted.';
 }

@@ -23,15 +23,15 @@ import { weightWords } from './weigh.ts';
 export const omittedForcings: Assumption = {
   id: 'omitted-forcings',
   group: 'What the slope stands for',
-  title: 'CO2 is the only forcing, or all others move in step with it',
+  title: 'CO₂ is the only forcing, or all others move in step with it',
   shortTitle: 'Other forcings',
   explanation:
-    'Methane, other gases, aerosols, volcanoes and the sun have warmed and cooled in the same years. A slope on CO2 alone puts the net of all of them on CO2.',
+    'Methane, other gases, aerosols, volcanoes and the sun have warmed and cooled in the same years. A slope on CO₂ alone puts the net of all of them on CO₂.',
   method:
-    'Regresses the same temperatures on total effective forcing, by the same rule for anchor and intercept, and turns that slope into K per doubling with the forcing of a doubling. Compares the change of total forcing with that of CO2; with CO2 forcing given, tries both in one regression.',
-  formula: 'S = F2x · b_F; r = ΔF_total / ΔF_CO2; CO2 alone gives S = r · F2x · b_F',
+    'Regresses the same temperatures on total effective forcing, by the same rule for anchor and intercept, and turns that slope into K per doubling with the forcing of a doubling. Compares the change of total forcing with that of CO₂; with CO₂ forcing given, tries both in one regression.',
+  formula: 'S = F2x · b_F; r = ΔF_total / ΔF_CO₂; CO₂ alone gives S = r · F2x · b_F',
   needs:
-    'A series of total effective radiative forcing (W/m²) and the forcing of a CO2 doubling; optionally CO2 forcing.',
+    'A series of total effective radiative forcing (W/m²) and the forcing of a CO₂ doubling; optionally CO₂ forcing.',
   source: 'AR6 WG1 §7.3 for forcings; Marquardt 1970, Technometrics 12, 591–612, for variance inflation',
 
   applies: ({ procedure }) => procedure.kind === 'log-regression',
@@ -59,13 +59,13 @@ export const omittedForcings: Assumption = {
     const slope = formatNumber(line.slope, { decimals: 3 });
     return outcome('omitted-forcings', {
       statistic: {
-        label: 'ΔF total ÷ ΔF CO2',
+        label: 'ΔF total ÷ ΔF CO₂',
         value: ratio.value,
         p: null,
         interval: null,
-        convention: `mean of the last ${ratio.nYears} years minus mean of the first ${ratio.nYears}, ${formatYears(ratio.span)}; CO2 forcing ${line.co2ForcingWm2 ? 'from its series' : `as ${doubling} W/m² per doubling`}; slope errors: ${covarianceWords(serialCovariance)}`,
+        convention: `mean of the last ${ratio.nYears} years minus mean of the first ${ratio.nYears}, ${formatYears(ratio.span)}; CO₂ forcing ${line.co2ForcingWm2 ? 'from its series' : `as ${doubling} W/m² per doubling`}; slope errors: ${covarianceWords(serialCovariance)}`,
       },
-      test: `slope on total forcing ${slope} K per W/m²; ΔF total is ${r} × ΔF CO2`,
+      test: `slope on total forcing ${slope} K per W/m²; ΔF total is ${r} × ΔF CO₂`,
       alternative: {
         value,
         interval,
@@ -75,7 +75,7 @@ export const omittedForcings: Assumption = {
       },
       effect,
       weight,
-      reading: `From the start of the record to its end total forcing rose ${r} times as much as that of CO2. On total forcing the slope is ${slope} K per W/m²; times ${doubling} W/m² for a doubling the number is ${showWithUnit(value)} (${formatInterval(interval)}, 5–95 %), against ${show(recomputation.value)} with all warming put on CO2.`,
+      reading: `From the start of the record to its end total forcing rose ${r} times as much as that of CO₂. On total forcing the slope is ${slope} K per W/m²; times ${doubling} W/m² for a doubling the number is ${showWithUnit(value)} (${formatInterval(interval)}, 5–95 %), against ${show(recomputation.value)} with all warming put on CO₂.`,
       proposal:
         weight === 'negligible'
           ? {
@@ -84,18 +84,18 @@ export const omittedForcings: Assumption = {
             }
           : {
               mark: 'not met',
-              reason: `Putting the warming on all forcings instead of CO2 alone moves the number by ${showShift(effect)}.`,
+              reason: `Putting the warming on all forcings instead of CO₂ alone moves the number by ${showShift(effect)}.`,
             },
-      sentence: `The number puts all warming on CO2. Put on the total of all forcings, which rose ${r} times as much over these years, the same temperatures give ${show(value)} (${formatInterval(interval)}, 5–95 %) instead of ${showWithUnit(recomputation.value)}: a change of ${showShift(effect)}, ${weightWords[weight]}.`,
+      sentence: `The number puts all warming on CO₂. Put on the total of all forcings, which rose ${r} times as much over these years, the same temperatures give ${show(value)} (${formatInterval(interval)}, 5–95 %) instead of ${showWithUnit(recomputation.value)}: a change of ${showShift(effect)}, ${weightWords[weight]}.`,
       table: {
         columns: ['Figure', 'Value', 'Standard error'],
         rows: [
           ['slope on total forcing (K per W/m²)', line.slope, line.slopeStandardError],
           ['forcing of a doubling (W/m²)', line.doublingWm2.mean, standardDeviation(line.doublingWm2)],
           ['ΔF total (W/m²)', ratio.total, null],
-          ['ΔF CO2 (W/m²)', ratio.co2, null],
+          ['ΔF CO₂ (W/m²)', ratio.co2, null],
           [
-            `number on CO2 alone, same years (${recomputation.unit})`,
+            `number on CO₂ alone, same years (${recomputation.unit})`,
             sameRows.slope * factor,
             sameRows.slopeStandardError * factor,
           ],
@@ -111,7 +111,7 @@ export const omittedForcings: Assumption = {
     const missing = forcingMissing(context.computation);
     if (missing) return { reason: `${missing.reason} ${missing.wouldNeed}` };
     return {
-      label: 'All forcings, not CO2 alone',
+      label: 'All forcings, not CO₂ alone',
       change: (footing) => ({ ...footing, predictor: 'total-forcing' }),
       caveats: forcingCaveats(forcingLine(context, logClaimLine(context).intercept)),
     };
@@ -128,8 +128,8 @@ function forcingRatio({ rows, forcingWm2, co2ForcingWm2, doublingWm2 }: ForcingL
   if (co2 === 0) {
     throw new NumericError({
       code: 'no-spread',
-      where: 'omitted-forcings, CO2',
-      expected: 'a CO2 forcing that changes from the start of the record to its end',
+      where: 'omitted-forcings, CO₂',
+      expected: 'a CO₂ forcing that changes from the start of the record to its end',
       received: 'no change',
     });
   }
@@ -152,7 +152,7 @@ function twoPredictors(
     const place = intercept ? 1 : 0;
     return {
       rows: [
-        ...['CO2', 'all others'].flatMap((name, j) => [
+        ...['CO₂', 'all others'].flatMap((name, j) => [
           [
             `two predictors: slope on ${name} (K per W/m²)`,
             answer.coefficients[place + j] ?? null,
@@ -161,7 +161,7 @@ function twoPredictors(
           [`two predictors: variance inflation of ${name}`, inflation[j] ?? null, null],
         ]),
         [
-          'two predictors: forcing of a doubling × slope on CO2 (K per doubling)',
+          'two predictors: forcing of a doubling × slope on CO₂ (K per doubling)',
           doublingWm2.mean * (answer.coefficients[place] ?? NaN),
           null,
         ],
@@ -176,7 +176,7 @@ function twoPredictors(
         {
           code: 'inseparable',
           detail:
-            'CO2 and the other forcings move exactly in step in these years: one regression cannot tell them apart.',
+            'CO₂ and the other forcings move exactly in step in these years: one regression cannot tell them apart.',
         },
       ],
     };
@@ -191,7 +191,7 @@ function forcingCaveats({ yearsWithout, forcingWm2 }: ForcingLine): Caveat[] {
   if (yearsWithout.length > 0) {
     caveats.push({
       code: 'forcing-years-missing',
-      detail: `No total forcing in ${formatYearList(yearsWithout)}: the line on forcing does without these years of the record. The table gives the number on CO2 alone in the same years.`,
+      detail: `No total forcing in ${formatYearList(yearsWithout)}: the line on forcing does without these years of the record. The table gives the number on CO₂ alone in the same years.`,
     });
   }
   const steps = forcingWm2.slice(1).map((value, row) => Math.abs(value - (forcingWm2[row] ?? NaN)));

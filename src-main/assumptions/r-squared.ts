@@ -82,7 +82,7 @@ export const rSquared: Assumption = {
 /** R² with an intercept of predictors that might all be the cause, on the claim's temperatures. */
 function rivalMeasures(context: TestContext, fit: NonNullable<Recomputation['fit']>) {
   const rivals = [
-    { label: 'the logarithm of CO2', value: squaredCorrelation(fit.x, fit.y) },
+    { label: 'the logarithm of CO₂', value: squaredCorrelation(fit.x, fit.y) },
     { label: 'the calendar year alone', value: squaredCorrelation(fit.years, fit.y) },
   ];
   const forced = forcingOrNull(context);

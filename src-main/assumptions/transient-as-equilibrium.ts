@@ -29,7 +29,7 @@ export const transientAsEquilibrium: Assumption = {
     'Energy budget between two periods from warming, forcing and heat uptake, each with its 5–95 % range: effective sensitivity and transient response by Monte Carlo, and their quotient.',
   formula: 'EffCS = F2x ΔT / (ΔF − ΔN); TCR = F2x ΔT / ΔF; EffCS / TCR = ΔF / (ΔF − ΔN)',
   needs:
-    'Warming, forcing change and heat-uptake change between two periods, and the forcing of a CO2 doubling, with 5–95 % half-widths.',
+    'Warming, forcing change and heat-uptake change between two periods, and the forcing of a CO₂ doubling, with 5–95 % half-widths.',
   source: 'Gregory et al. 2002, J. Climate 15, 3117; Otto et al. 2013, Nat. Geosci. 6, 415; AR6 WG1 §7.5.2.1',
 
   applies: ({ procedure }) => procedure.kind === 'log-regression',
@@ -74,7 +74,7 @@ export const transientAsEquilibrium: Assumption = {
             },
       effect,
       weight,
-      reading: `With a heat uptake of ${uptake} the effective sensitivity is ${effcsText} (${formatInterval(effcs.interval)}, 5–95 %) and the transient response ${tcrText} (${formatInterval(tcr.interval)}): a factor of ${ratioText} between them.${toNumber === null ? '' : ` The effective sensitivity is ${formatNumber(toNumber, { decimals: 2 })} times the number of the claim; part of that is heat uptake, the rest comes from other data and from forcings other than CO2.`}`,
+      reading: `With a heat uptake of ${uptake} the effective sensitivity is ${effcsText} (${formatInterval(effcs.interval)}, 5–95 %) and the transient response ${tcrText} (${formatInterval(tcr.interval)}): a factor of ${ratioText} between them.${toNumber === null ? '' : ` The effective sensitivity is ${formatNumber(toNumber, { decimals: 2 })} times the number of the claim; part of that is heat uptake, the rest comes from other data and from forcings other than CO₂.`}`,
       proposal: proposal(context, weight, effect),
       sentence: `The number reads a record of a planet that is still taking up heat. The energy budget of the same changes gives an effective sensitivity of ${effcsText} (${formatInterval(effcs.interval)}, 5–95 %) and a transient response of ${tcrText} (${formatInterval(tcr.interval)}), against ${show(recomputation.value)} as recomputed${effect === null ? '' : `: a difference of ${showShift(effect)}`}, ${weightWords[weight]}.`,
       table: {

@@ -18,7 +18,7 @@ export const zeroIntercept: Assumption = {
   title: 'The line passes through zero',
   shortTitle: 'Line through zero',
   explanation:
-    'At the anchor both the warming and the change of CO2 are zero by definition, so the line is made to start there. If the anchor lies off the general run of the record, the slope tilts to make up for it.',
+    'At the anchor both the warming and the change of CO₂ are zero by definition, so the line is made to start there. If the anchor lies off the general run of the record, the slope tilts to make up for it.',
   method:
     'Fits the same rows with a free intercept. t of the intercept with Newey–West errors, partial F, the number with an intercept, and the mean residual of both lines by decade.',
   formula: 'y = a + b x against y = b x; slope through zero − slope with intercept = a · Σx / Σx²',

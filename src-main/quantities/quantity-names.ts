@@ -19,28 +19,28 @@ export const quantityNames: Readonly<Record<QuantityId, QuantityName>> = {
     label: 'apparent sensitivity',
     symbol: 'b·ln 2',
     definition:
-      'Slope of observed warming on the logarithm of CO2, times ln 2. It is none of ECS, effective sensitivity or TCR until it is shown what it may stand for.',
+      'Slope of observed warming on the logarithm of CO₂, times ln 2. It is none of ECS, effective sensitivity or TCR until it is shown what it may stand for.',
     units: [...perDoubling, 'K per e-folding'],
   },
   'effective-climate-sensitivity': {
     label: 'effective climate sensitivity',
     symbol: 'EffCS',
     definition:
-      'Equilibrium warming for doubled CO2 if the climate feedback found over a given period or experiment stayed as it is.',
+      'Equilibrium warming for doubled CO₂ if the climate feedback found over a given period or experiment stayed as it is.',
     units: perDoubling,
   },
   'equilibrium-climate-sensitivity': {
     label: 'equilibrium climate sensitivity',
     symbol: 'ECS',
     definition:
-      'Change of global mean surface air temperature once the climate has settled after CO2 was doubled and held, slow ice-sheet and Earth-system feedbacks left out.',
+      'Change of global mean surface air temperature once the climate has settled after CO₂ was doubled and held, slow ice-sheet and Earth-system feedbacks left out.',
     units: perDoubling,
   },
   'transient-climate-response': {
     label: 'transient climate response',
     symbol: 'TCR',
     definition:
-      'Warming at the time CO2 has doubled while it rises by 1 % a year, as a 20-year mean around year 70; the oceans are still taking up heat.',
+      'Warming at the time CO₂ has doubled while it rises by 1 % a year, as a 20-year mean around year 70; the oceans are still taking up heat.',
     units: perDoubling,
   },
   trend: {

@@ -20,7 +20,7 @@ const questions: Question[] = [
   },
   {
     id: 'doubling-or-e-folding',
-    question: 'Is the number per doubling of CO2, or per e-folding (per unit of the natural logarithm)?',
+    question: 'Is the number per doubling of CO₂, or per e-folding (per unit of the natural logarithm)?',
     why: 'The two differ by the factor ln 2 = 0.693.',
     options: ['per doubling, as printed', 'per e-folding, as printed', 'not printed: taken from the context'],
     applies: isSensitivity,

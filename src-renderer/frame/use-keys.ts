@@ -28,5 +28,5 @@ function run(event: KeyboardEvent, action: () => unknown): void {
 function isTyping(target: EventTarget | null): boolean {
   if (!(target instanceof HTMLElement)) return false;
   if (target instanceof HTMLInputElement) return !['checkbox', 'radio', 'button', 'file'].includes(target.type);
-  return target instanceof HTMLTextAreaElement || target instanceof HTMLSelectElement || target.isContentEditable;
+  return target instanceof HTMLTextAreaElement || target.isContentEditable;
 }

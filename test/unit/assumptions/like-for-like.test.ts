@@ -68,7 +68,7 @@ describe('like-for-like', () => {
   });
 
   it.each([
-    ['transient-climate-response', /the forcings other than CO2/],
+    ['transient-climate-response', /the forcings other than CO₂/],
     ['trend', /no conversion/],
   ] as const)('gives no factor between an apparent sensitivity and %s', (presentedAs, why) => {
     const outcome = outcomeFor({ presentedAs }, { energyBudget: ar6EnergyBudget });

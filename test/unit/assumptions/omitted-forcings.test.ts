@@ -97,7 +97,7 @@ describe('omitted-forcings', () => {
     const temperatureK = co2ForcingWm2.map((value, row) => 0.6 * value + 0.2 * (otherWm2[row] ?? 0));
     const claim = { years, co2Ppm, temperatureK, totalForcingWm2, co2ForcingWm2, evidence: { doublingWm2 } };
     const outcome = omittedForcings.test(testContext(logRegressionClaim({ ...claim, procedure: { intercept: true } })));
-    expectClose(figure(outcome, /two predictors: slope on CO2/), 0.6, exact);
+    expectClose(figure(outcome, /two predictors: slope on CO₂/), 0.6, exact);
     expectClose(figure(outcome, /two predictors: slope on all others/), 0.2, exact);
     expectClose(figure(outcome, /two predictors: forcing of a doubling/), 0.6 * doublingWm2.mean, exact);
     // With two predictors the factor is 1/(1 − r²) of the one on the other.
@@ -106,7 +106,7 @@ describe('omitted-forcings', () => {
     const dot = (p: readonly number[] = [], q: readonly number[] = []) =>
       p.reduce((total, value, row) => total + value * (q[row] ?? 0), 0);
     const inflation = 1 / (1 - dot(a, b) ** 2 / (dot(a, a) * dot(b, b)));
-    expectClose(figure(outcome, /variance inflation of CO2/), inflation, exact);
+    expectClose(figure(outcome, /variance inflation of CO₂/), inflation, exact);
     expectClose(figure(outcome, /variance inflation of all others/), inflation, exact);
   });
 
@@ -142,7 +142,7 @@ describe('omitted-forcings', () => {
     [
       'no forcing of a doubling',
       { totalForcingWm2: co2ForcingWm2 },
-      { reason: /The forcing of a CO2 doubling is not given/, wouldNeed: /W\/m², with its 5–95 % half-width/ },
+      { reason: /The forcing of a CO₂ doubling is not given/, wouldNeed: /W\/m², with its 5–95 % half-width/ },
     ],
   ])('says what is missing: %s', (_, given, { reason, wouldNeed }) => {
     const claim = logRegressionClaim({ years, co2Ppm, temperatureK: x.map((value) => 2.7 * value), ...given });

@@ -3,7 +3,7 @@ import { claimComputation, claimSweepRequest, derivationRequest, type ClaimCompu
 import type { Claim } from '../contract/claim.ts';
 import type { Result, ResultMethod } from '../contract/result.ts';
 import { seriesValues, type SeriesData } from '../contract/series.ts';
-import { ProjectError } from '../errors.ts';
+import { InputError, ProjectError } from '../errors.ts';
 import { canonicalJson } from '../project/canonical-json.ts';
 import type { Project } from '../project/project.ts';
 
@@ -26,7 +26,7 @@ export function requestFor(project: Project, claim: Claim, method: ResultMethod,
   if (method === 'derivation') return { method, lines: claim.derivation };
   const { statement, procedure, tolerance, seed } = claim;
   if (!procedure) {
-    throw new ProjectError({
+    throw new InputError({
       code: 'no-procedure',
       where: `Claim ${claim.id}`,
       expected: 'a procedure: how the number was obtained',

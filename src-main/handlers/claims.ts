@@ -1,6 +1,7 @@
-import type { Claim, ClaimDraft } from '../contract/claim.ts';
+import type { Claim } from '../contract/claim.ts';
 import { InputError } from '../errors.ts';
 import type { Project } from '../project/project.ts';
+import { checkClaim, completeDraft } from './claim-draft.ts';
 import { claimView } from './claim-view.ts';
 import type { HandlerContext, Handlers } from './context.ts';
 import { projectView } from './project-view.ts';
@@ -29,7 +30,7 @@ export const claimHandlers: Handlers<Names> = {
   'claim.update': ({ claimId, change: patch }, context) =>
     changeClaim(context, claimId, 'change claim', (claim) => {
       const changed = { ...claim, ...patch };
-      checkSeries(context.workspace.open(), changed);
+      checkClaim(context.workspace.open(), changed);
       return changed;
     }),
   'claim.remove'({ claimId }, { workspace }) {
@@ -70,8 +71,19 @@ export const claimHandlers: Handlers<Names> = {
     return claimView(project, claimId);
   },
   'note.remove'({ claimId, noteId }, { workspace }) {
+    const project = workspace.open();
+    const note = project.get('note', noteId);
+    if (note.claimId !== claimId) {
+      throw new InputError({
+        code: 'note-of-another-claim',
+        where: `Note ${noteId}`,
+        expected: `a note on claim ${claimId}`,
+        received: `one on claim ${note.claimId}`,
+        hint: 'Name the claim that the note is on.',
+      });
+    }
     workspace.change('remove note', `claim ${claimId}`, (change) => change.remove('note', noteId));
-    return claimView(workspace.open(), claimId);
+    return claimView(project, claimId);
   },
 };
 
@@ -93,6 +105,7 @@ function changeClaim({ workspace }: HandlerContext, claimId: number, action: str
 
 /** A signed finding stands on its claim: the claim waits for a new revision before it changes. */
 export function refuseFrozen(project: Project, claimId: number): void {
+  project.get('claim', claimId);
   const latest = project
     .list('finding')
     .filter((row) => row.claimId === claimId)
@@ -105,102 +118,4 @@ export function refuseFrozen(project: Project, claimId: number): void {
     received: `revision ${latest.revision}, which is signed and frozen`,
     hint: 'Start a new revision, saying what changes and why.',
   });
-}
-
-/** A draft with its defaults filled in and its series found by name. */
-function completeDraft(project: Project, draft: ClaimDraft): Omit<Claim, 'id'> {
-  const find = (reference: number | string, field: string) => findSeries(project, reference, field);
-  const findOrNull = (reference: number | string | null | undefined, field: string) =>
-    reference === null || reference === undefined ? null : find(reference, field);
-  const record: Omit<Claim, 'id'> = {
-    title: draft.title,
-    statement: {
-      sourceId: null,
-      locator: '',
-      bound: 'equals',
-      definition: '',
-      presentedAs: null,
-      statedRSquared: null,
-      ...withoutUndefined(draft.statement),
-    },
-    answers: draft.answers ?? {},
-    derivation: draft.derivation ?? [],
-    procedure: completeProcedure(draft.procedure, find),
-    evidence: {
-      energyBudget: draft.evidence?.energyBudget ?? null,
-      comparedWith: draft.evidence?.comparedWith ?? null,
-      doublingWm2: draft.evidence?.doublingWm2 ?? null,
-      totalForcingSeriesId: findOrNull(draft.evidence?.totalForcingSeriesId, 'evidence.totalForcingSeriesId'),
-      co2ForcingSeriesId: findOrNull(draft.evidence?.co2ForcingSeriesId, 'evidence.co2ForcingSeriesId'),
-    },
-    tolerance: draft.tolerance ?? { notableShare: 0.1, decisiveShare: 0.25 },
-    seed: draft.seed ?? 20_261,
-  };
-  checkSeries(project, record);
-  return record;
-}
-
-function completeProcedure(
-  procedure: ClaimDraft['procedure'],
-  find: (reference: number | string, field: string) => number,
-): Claim['procedure'] {
-  if (!procedure) return null;
-  switch (procedure.kind) {
-    case 'log-regression':
-      return {
-        minMonths: 12,
-        window: null,
-        anchor: { kind: 'first-year' },
-        intercept: false,
-        covariance: { kind: 'classical' },
-        conversion: 'per-doubling',
-        ...withoutUndefined(procedure),
-        temperatureSeriesId: find(procedure.temperatureSeriesId, 'procedure.temperatureSeriesId'),
-        co2SeriesId: find(procedure.co2SeriesId, 'procedure.co2SeriesId'),
-      };
-    case 'trend':
-      return {
-        minMonths: 12,
-        window: null,
-        covariance: { kind: 'classical' },
-        per: 'decade',
-        ...withoutUndefined(procedure),
-        seriesId: find(procedure.seriesId, 'procedure.seriesId'),
-      };
-    case 'ratio':
-      return procedure;
-  }
-}
-
-function findSeries(project: Project, reference: number | string, field: string): number {
-  const all = project.list('series');
-  const found = all.find((series) => series.id === reference || series.name === reference);
-  if (found) return found.id;
-  throw new InputError({
-    code: 'unknown-series',
-    where: field,
-    expected: `a series of this project (${all.map((series) => series.name).join(', ') || 'there is none yet'})`,
-    received: String(reference),
-    hint: 'Import it first, or correct the name.',
-  });
-}
-
-function checkSeries(project: Project, { procedure, evidence }: Pick<Claim, 'procedure' | 'evidence'>): void {
-  if (procedure?.kind === 'log-regression') {
-    findSeries(project, procedure.temperatureSeriesId, 'procedure.temperatureSeriesId');
-    findSeries(project, procedure.co2SeriesId, 'procedure.co2SeriesId');
-  }
-  if (procedure?.kind === 'trend') findSeries(project, procedure.seriesId, 'procedure.seriesId');
-  for (const field of ['totalForcingSeriesId', 'co2ForcingSeriesId'] as const) {
-    const id = evidence[field];
-    if (id !== null) findSeries(project, id, `evidence.${field}`);
-  }
-}
-
-function withoutUndefined<Value extends object>(
-  value: Value,
-): { [Key in keyof Value]: Exclude<Value[Key], undefined> } {
-  return Object.fromEntries(Object.entries(value).filter(([, entry]) => entry !== undefined)) as {
-    [Key in keyof Value]: Exclude<Value[Key], undefined>;
-  };
 }

@@ -105,8 +105,8 @@ export const dataHandlers: Handlers<Names> = {
     const { offset } = rebase(annualMeans({ ...series, values }, minMonths), baseline);
     const shifted = shiftValues(values, -offset);
     const taken = new Set(project.list('series').map((row) => row.name));
-    const name = freeName(`${series.name}-vs-${baseline.start}-${baseline.end}`, taken);
-    const label = `${series.label}, re-based to ${formatYears(baseline)}`;
+    const name = freeName(series.name, taken, `-vs-${baseline.start}-${baseline.end}`);
+    const label = `${cut(series.label, 400)}, re-based to ${formatYears(baseline)}`;
     const added = workspace.change('re-base series', name, (change) =>
       change.add('series', {
         ...series,
@@ -161,10 +161,17 @@ function shiftValues(values: SeriesValues, shift: number): SeriesValues {
   return { ...values, values: shifted(values.values), lower: bounds(values.lower), upper: bounds(values.upper) };
 }
 
+const maxNameLength = 120;
+
 /** Two versions of one file keep their own names: "gistemp-annual", "gistemp-annual-2". */
-function freeName(name: string, taken: ReadonlySet<string>): string {
-  if (!taken.has(name)) return name;
-  let copy = 2;
-  while (taken.has(`${name}-${copy}`)) copy += 1;
-  return `${name}-${copy}`;
+function freeName(name: string, taken: ReadonlySet<string>, ending = ''): string {
+  const candidate = (mark: string) => cut(name, maxNameLength - mark.length) + mark;
+  let free = candidate(ending);
+  for (let copy = 2; taken.has(free); copy += 1) free = candidate(`${ending}-${copy}`);
+  return free;
+}
+
+/** The first characters of a text, never half of one. */
+function cut(text: string, length: number): string {
+  return text.slice(0, length).replace(/\p{Surrogate}$/u, '');
 }

@@ -1,9 +1,8 @@
-import { InputError } from '../errors.ts';
 import type { Finding } from '../contract/finding.ts';
 import { resultMethod } from '../contract/result.ts';
 import type { Project } from '../project/project.ts';
 import { signFinding } from '../project/sign-finding.ts';
-import { publishedValues } from '../quantities/published-values.ts';
+import { checkPublishedValues } from './claim-draft.ts';
 import { refuseFrozen } from './claims.ts';
 import { claimView } from './claim-view.ts';
 import type { HandlerContext, Handlers } from './context.ts';
@@ -14,7 +13,7 @@ export const findingHandlers: Handlers<'finding.save' | 'finding.sign' | 'findin
   'finding.save'({ claimId, ...words }, { workspace }) {
     const project = workspace.open();
     refuseFrozen(project, claimId);
-    refuseUnknownValues(words.publishedValueIds);
+    checkPublishedValues('finding.publishedValueIds', words.publishedValueIds);
     const earlier = latestFinding(project, claimId);
     const revision = earlier?.revision ?? 1;
     workspace.change('write finding', `claim ${claimId} · revision ${revision}`, (change) => {
@@ -82,17 +81,4 @@ function citeNewestResults({ workspace }: HandlerContext, finding: Finding): voi
   workspace.change('cite newest results', `claim ${finding.claimId} · revision ${finding.revision}`, (change) =>
     change.put('finding', { ...finding, resultIds }),
   );
-}
-
-function refuseUnknownValues(ids: readonly string[]): void {
-  const known = new Set(publishedValues.map((value) => value.id));
-  const unknown = ids.find((id) => !known.has(id));
-  if (unknown === undefined) return;
-  throw new InputError({
-    code: 'unknown-published-value',
-    where: 'finding.publishedValueIds',
-    expected: 'the id of a published value of this version',
-    received: unknown,
-    hint: `Known: ${[...known].join(', ')}.`,
-  });
 }

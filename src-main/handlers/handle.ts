@@ -67,10 +67,9 @@ export function createCore({
     host,
     places,
     jobs,
-    workspace: createWorkspace(identityStore(places.home), now),
+    workspace: createWorkspace(identityStore(places.home), now, reviewerIfUnknown),
     now,
   };
-  if (reviewerIfUnknown) context.workspace.assumeReviewer(reviewerIfUnknown);
   // A change is one synchronous step, so most requests need no order. Those that put one project in another's place do:
   // each waits for the one before, a worked example being filled included.
   let turn: Promise<unknown> = Promise.resolve();

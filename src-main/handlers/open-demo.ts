@@ -1,6 +1,7 @@
-import { mkdirSync, readdirSync, readFileSync, rmSync } from 'node:fs';
-import { basename, join, resolve } from 'node:path';
+import { readdirSync, readFileSync, rmSync } from 'node:fs';
+import { basename, join } from 'node:path';
 import { workedExample, type WorkedExample } from '../contract/worked-example.ts';
+import { engineVersion } from '../engine-version.ts';
 import { createProject } from '../project/create-project.ts';
 import { claimHandlers } from './claims.ts';
 import type { HandlerContext } from './context.ts';
@@ -8,6 +9,7 @@ import { dataHandlers } from './data.ts';
 import { findingHandlers } from './findings.ts';
 import { freePath } from './free-path.ts';
 import { holder } from './holder.ts';
+import { makeFolder } from './make-folder.ts';
 import { runClaimMethod } from './run-claim-method.ts';
 import { sourceHandlers } from './sources.ts';
 
@@ -19,12 +21,13 @@ export async function openDemo(context: HandlerContext, directory: string): Prom
   const folder = exampleFolder(context.places.demoProjects);
   const example = workedExample.parse(JSON.parse(readFileSync(join(folder, 'claims.json'), 'utf8')));
   const { workspace } = context;
-  if (!workspace.identity.reviewer()) workspace.assumeReviewer(example.reviewer);
-  mkdirSync(resolve(directory), { recursive: true });
-  workspace.replace(null);
-  const path = freePath(directory, example.title);
+  const path = freePath(makeFolder(directory), example.title);
+  const reviewer = workspace.identity.reviewer() ?? example.reviewer;
+  const doing = { reviewer: { name: reviewer.name, role: reviewer.role }, at: context.now(), engineVersion };
+  const { title } = example;
   workspace.replace(
-    createProject(path, { title: example.title, isInvented: true, holder: holder(context), ...workspace.signed() }),
+    createProject(path, { title, isInvented: true, holder: { ...holder(context), reviewer: reviewer.name }, ...doing }),
+    { standIn: example.reviewer },
   );
 
   const read = (inside: string) => ({

@@ -1,13 +1,14 @@
-import { mkdirSync, readdirSync, statSync } from 'node:fs';
+import { readdirSync, realpathSync, statSync } from 'node:fs';
 import { dirname, join, resolve } from 'node:path';
-import { InputError } from '../errors.ts';
 import { createProject } from '../project/create-project.ts';
 import { openProject } from '../project/open-project.ts';
 import { readProjectTitle } from '../project/read-project-title.ts';
 import { verifyProject } from '../project/verify-project.ts';
 import type { Handlers } from './context.ts';
+import { fileProblem } from './file-problem.ts';
 import { freePath } from './free-path.ts';
 import { holder } from './holder.ts';
+import { makeFolder } from './make-folder.ts';
 import { openDemo } from './open-demo.ts';
 import { projectView } from './project-view.ts';
 import { recheck } from './recheck.ts';
@@ -25,8 +26,7 @@ type Names =
 
 export const projectHandlers: Handlers<Names> = {
   'projects.list'({ directory }, { places }) {
-    const folder = resolve(directory ?? places.projects);
-    if (!directory) mkdirSync(folder, { recursive: true });
+    const folder = directory ? resolve(directory) : makeFolder(places.projects);
     const entries = readFolder(folder).filter((entry) => !entry.name.startsWith('.'));
     return {
       directory: folder,
@@ -51,18 +51,16 @@ export const projectHandlers: Handlers<Names> = {
     const { workspace, places } = context;
     const signed = workspace.signed();
     const file = path ? resolve(path) : freePath(directory ?? places.projects, title);
-    mkdirSync(dirname(file), { recursive: true });
-    workspace.replace(null);
+    makeFolder(dirname(file));
     workspace.replace(createProject(file, { title, isInvented: false, holder: holder(context), ...signed }));
     return projectView(workspace.open());
   },
 
   'project.open'({ path, readOnly = false }, context) {
     const { workspace } = context;
-    const file = resolve(path);
+    const file = realPath(path);
     if (workspace.project?.path === file && workspace.project.isReadOnly === readOnly)
       return projectView(workspace.project);
-    if (workspace.project?.path === file) workspace.replace(null);
     workspace.replace(openProject(file, { readOnly, holder: holder(context) }));
     return projectView(workspace.open());
   },
@@ -96,12 +94,15 @@ function readFolder(folder: string) {
   try {
     return readdirSync(folder, { withFileTypes: true });
   } catch (error) {
-    throw new InputError({
-      code: 'folder-unreadable',
-      where: folder,
-      expected: 'a folder that can be read',
-      received: error instanceof Error ? error.message : String(error),
-      hint: 'Choose another folder.',
-    });
+    throw fileProblem('folder-unreadable', folder, 'a folder that can be read', error);
+  }
+}
+
+/** One file may have many names; the open project goes by its own. */
+function realPath(path: string): string {
+  try {
+    return realpathSync(path);
+  } catch {
+    return resolve(path);
   }
 }

@@ -1,5 +1,5 @@
-import { existsSync, mkdirSync, renameSync, writeFileSync } from 'node:fs';
-import { join, parse, resolve } from 'node:path';
+import { existsSync, renameSync, writeFileSync } from 'node:fs';
+import { join, parse } from 'node:path';
 import { cautions } from '../contract/cautions.ts';
 import type { Report, ReportClaim } from '../contract/project.ts';
 import { engineVersion } from '../engine-version.ts';
@@ -9,7 +9,9 @@ import type { Project } from '../project/project.ts';
 import { reportHtml } from '../report/report-html.ts';
 import { claimView } from './claim-view.ts';
 import type { Handlers } from './context.ts';
+import { fileProblem } from './file-problem.ts';
 import { fillIn } from './fill-in.ts';
+import { makeFolder } from './make-folder.ts';
 
 export const reportHandlers: Handlers<'report.render' | 'report.write'> = {
   async 'report.render'({ claimIds }, { workspace, now }) {
@@ -18,8 +20,7 @@ export const reportHandlers: Handlers<'report.render' | 'report.write'> = {
   },
   async 'report.write'({ directory, formats, claimIds }, { workspace, now }) {
     const report = assembleReport(workspace.open(), claimIds, now());
-    const folder = resolve(directory);
-    mkdirSync(folder, { recursive: true });
+    const folder = makeFolder(directory);
     const files: string[] = [];
     for (const format of formats) {
       const text = format === 'html' ? await reportHtml(report) : `${canonicalJson(report)}\n`;
@@ -35,9 +36,13 @@ export const reportHandlers: Handlers<'report.render' | 'report.write'> = {
  */
 function writeWhole(path: string, text: string): string {
   const unfinished = `${path}.unfinished`;
-  writeFileSync(unfinished, text);
-  if (existsSync(path)) renameSync(path, freeName(path));
-  renameSync(unfinished, path);
+  try {
+    writeFileSync(unfinished, text);
+    if (existsSync(path)) renameSync(path, freeName(path));
+    renameSync(unfinished, path);
+  } catch (error) {
+    throw fileProblem('report-not-written', path, 'a file that can be written', error);
+  }
   return path;
 }
 
@@ -51,7 +56,7 @@ function freeName(path: string): string {
 
 export function assembleReport(project: Project, claimIds: number[] | undefined, writtenAt: string): Report {
   const { title, isInvented } = project.get('project', 1);
-  const claims = project.list('claim').filter((claim) => !claimIds || claimIds.includes(claim.id));
+  const claims = claimIds ? claimIds.map((id) => project.get('claim', id)) : project.list('claim');
   return {
     title,
     isInvented,

@@ -5,6 +5,12 @@ import type { IdentityStore } from '../project/identity.ts';
 import type { Change } from '../project/change-set.ts';
 import type { Project } from '../project/project.ts';
 
+/** A name and role for the trail where nobody has said who is reviewing. */
+export interface StandIn {
+  name: string;
+  role: string;
+}
+
 /** The project that is open, and who is working on it. */
 export interface Workspace {
   /** The open project, or null. */
@@ -12,23 +18,25 @@ export interface Workspace {
   readonly identity: IdentityStore;
   /** The open project; refuses when there is none. */
   open(): Project;
-  /** Puts another project in the open one's place, closing that first. */
-  replace(project: Project | null): void;
+  /** Puts another project in the open one's place; the stand-in reviews in it while nobody has said who is reviewing. */
+  replace(project: Project | null, stand?: { standIn: StandIn }): void;
   /** Who is reviewing, as far as anybody has said. */
   knownReviewer(): Reviewer | null;
   /** Who is reviewing; refuses when nobody has said so. */
   reviewer(): Reviewer;
-  /** Stands in, for this session only, while nobody has said who is reviewing. */
-  assumeReviewer(reviewer: { name: string; role: string }): void;
   /** Runs one command: its changes and its trail entry are stored together or not at all. */
   change<Value>(action: string, subject: string, work: (change: Change) => Value): Value;
   /** Who does what follows, when, and with which engine: what each trail entry carries. */
   signed(): { reviewer: { name: string; role: string }; at: string; engineVersion: string };
 }
 
-export function createWorkspace(identity: IdentityStore, now: () => string): Workspace {
+export function createWorkspace(
+  identity: IdentityStore,
+  now: () => string,
+  reviewerIfUnknown: StandIn | null = null,
+): Workspace {
   let project: Project | null = null;
-  let assumed: Reviewer | null = null;
+  let standIn = reviewerIfUnknown;
   const workspace: Workspace = {
     identity,
     get project() {
@@ -44,11 +52,12 @@ export function createWorkspace(identity: IdentityStore, now: () => string): Wor
         hint: 'Open or create one first.',
       });
     },
-    replace(next) {
+    replace(next, stand) {
       project?.close();
       project = next;
+      standIn = stand?.standIn ?? reviewerIfUnknown;
     },
-    knownReviewer: () => identity.reviewer() ?? assumed,
+    knownReviewer: () => identity.reviewer() ?? (standIn && { ...standIn, publicKey: null, fingerprint: null }),
     reviewer() {
       const reviewer = workspace.knownReviewer();
       if (reviewer) return reviewer;
@@ -59,9 +68,6 @@ export function createWorkspace(identity: IdentityStore, now: () => string): Wor
         received: 'no name yet',
         hint: 'Give your name on the start page, or with --reviewer on the command line.',
       });
-    },
-    assumeReviewer({ name, role }) {
-      assumed = { name, role, publicKey: null, fingerprint: null };
     },
     signed() {
       const { name, role } = workspace.reviewer();

@@ -1,0 +1,18 @@
+import { mkdirSync } from 'node:fs';
+import { resolve } from 'node:path';
+import { fileProblem } from './file-problem.ts';
+
+/**
+ * The folder's full path; it is there afterwards, with all above it.
+ *
+ * @throws InputError folder-not-made
+ */
+export function makeFolder(path: string): string {
+  const folder = resolve(path);
+  try {
+    mkdirSync(folder, { recursive: true });
+  } catch (error) {
+    throw fileProblem('folder-not-made', folder, 'a folder that is there or can be made', error);
+  }
+  return folder;
+}

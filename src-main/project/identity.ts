@@ -90,8 +90,12 @@ export function identityStore(folder: string): IdentityStore {
   }
 
   function write(identity: IdentityFile): Reviewer {
-    mkdirSync(folder, { recursive: true, mode: 0o700 });
-    writeFileAtomically(path, JSON.stringify(identity, null, 2) + '\n');
+    try {
+      mkdirSync(folder, { recursive: true, mode: 0o700 });
+      writeFileAtomically(path, JSON.stringify(identity, null, 2) + '\n');
+    } catch (error) {
+      throw unwritable(path, error);
+    }
     return asReviewer(identity);
   }
 
@@ -165,6 +169,16 @@ function passphraseKey(passphrase: string, { n, r, p, salt }: LockedKey['scrypt'
 
 function identityError(code: string, expected: string, received: string, hint?: string): InputError {
   return new InputError({ code, where: 'Identity', expected, received, ...(hint && { hint }) });
+}
+
+function unwritable(path: string, error: unknown): InputError {
+  return new InputError({
+    code: 'identity-not-written',
+    where: path,
+    expected: 'a place where the name and key of the reviewer can be kept',
+    received: error instanceof Error ? error.message : String(error),
+    hint: 'Make the folder writable, or name another in FOOTING_HOME.',
+  });
 }
 
 function unreadable(path: string, error: unknown): InputError {

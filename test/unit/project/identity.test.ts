@@ -90,4 +90,11 @@ describe('identityStore', () => {
       expect(codeOf(() => store.reviewer())).toBe('identity-unreadable');
     }
   });
+
+  it('says where it could not be kept', () => {
+    const path = join(temporaryFolder(), 'a file');
+    writeFileSync(path, '');
+    const store = identityStore(join(path, 'reviewer'));
+    expect(codeOf(() => store.setReviewer({ name: 'R. Example', role: '' }))).toBe('identity-not-written');
+  });
 });

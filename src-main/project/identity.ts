@@ -79,7 +79,7 @@ export function identityStore(folder: string): IdentityStore {
     try {
       text = readFileSync(path, 'utf8');
     } catch (error) {
-      if (error instanceof Error && 'code' in error && error.code === 'ENOENT') return null;
+      if (error instanceof Error && 'code' in error && /^(ENOENT|ENOTDIR)$/.test(String(error.code))) return null;
       throw unreadable(path, error);
     }
     try {

@@ -34,9 +34,18 @@ export function schemaNames(): string[] {
 
 export function schemaOf(name: string): object | null {
   const schema = Object.hasOwn(schemas, name) ? schemas[name] : undefined;
-  return schema ? z.toJSONSchema(schema, { io: 'input', unrepresentable: 'any' }) : null;
+  if (!schema) return null;
+  return z.toJSONSchema(schema, {
+    io: 'input',
+    unrepresentable: 'any',
+    // A field that is not listed is refused on the way in, and never there on the way out.
+    override: ({ jsonSchema }) => {
+      if (jsonSchema.properties) jsonSchema.additionalProperties ??= false;
+    },
+  });
 }
 
-function withMethod(name: string, input: z.ZodType): z.ZodType {
-  return z.intersection(z.object({ method: z.literal(name) }), input);
+/** A compute request as it is sent: the inputs of the method beside its name. */
+function withMethod(name: string, input: z.ZodObject): z.ZodType {
+  return input.safeExtend({ method: z.literal(name) });
 }

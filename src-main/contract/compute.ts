@@ -1,5 +1,17 @@
 import { z } from 'zod';
 import { anchor, evidence, procedure, slopeCovariance, statement, tolerance } from './claim.ts';
+import {
+  column,
+  glsAr1Input,
+  glsAr1Value,
+  huberInput,
+  huberValue,
+  predictors,
+  theilSenInput,
+  theilSenValue,
+  yorkInput,
+  yorkValue,
+} from './line-estimators.ts';
 import { year } from './primitives.ts';
 import {
   assumptionsAnswer,
@@ -11,8 +23,8 @@ import {
   windowSweep,
 } from './result.ts';
 import { seriesData } from './series.ts';
+import { adfInput, adfValue, kpssInput, kpssValue, residualTestsInput, residualTestsValue } from './series-tests.ts';
 
-const column = z.array(z.number()).min(1).max(1_000_000);
 const covariance = z.object({
   kind: z.enum(['classical', 'hc0', 'hc1', 'hc2', 'hc3', 'newey-west']),
   lag: z.int().min(0).optional(),
@@ -22,7 +34,7 @@ const normal = z.object({ mean: z.number(), sd: z.number().min(0) });
 const seed = z.int().min(0).max(4_294_967_295);
 
 export const regressionRequest = z.object({
-  x: z.union([column, z.array(column).min(1).max(100)]),
+  x: predictors,
   y: column,
   intercept: z.boolean(),
   weights: column.optional(),
@@ -79,6 +91,13 @@ export type ClaimSweepRequest = z.infer<typeof claimSweepRequest>;
 /** Every method that `footing compute` and the stored results can name. */
 export const computeMethods = {
   regression: { input: regressionRequest, value: regressionAnswer },
+  'residual-tests': { input: residualTestsInput, value: residualTestsValue },
+  'gls-ar1': { input: glsAr1Input, value: glsAr1Value },
+  'theil-sen': { input: theilSenInput, value: theilSenValue },
+  huber: { input: huberInput, value: huberValue },
+  york: { input: yorkInput, value: yorkValue },
+  adf: { input: adfInput, value: adfValue },
+  kpss: { input: kpssInput, value: kpssValue },
   'window-sweep': { input: windowSweepRequest, value: windowSweep },
   'energy-budget': { input: energyBudgetRequest, value: energyBudgetAnswer },
   derivation: { input: derivationRequest, value: derivationAnswer },

@@ -5,7 +5,14 @@ import type { ComputeInput, ComputeMethod, ComputeValue } from '../contract/comp
 import { claimSweep } from '../robustness/claim-sweep.ts';
 import { windowSweep } from '../robustness/window-sweep.ts';
 import { evaluateDerivation } from '../sources/derivation.ts';
+import { adf } from '../statistics/adf.ts';
+import { ar1Line } from '../statistics/ar1-line.ts';
+import { huber } from '../statistics/huber.ts';
+import { kpss } from '../statistics/kpss.ts';
 import { regression } from '../statistics/regression.ts';
+import { residualTests } from '../statistics/residual-tests.ts';
+import { theilSen } from '../statistics/theil-sen.ts';
+import { york } from '../statistics/york.ts';
 
 export type ReportProgress = (shareDone: number) => void;
 
@@ -16,6 +23,13 @@ type Methods = {
 /** The pure function behind each method: data in, data out, the same digits wherever it runs. */
 export const methods: Methods = {
   regression: (input) => regression(input),
+  'residual-tests': (input) => residualTests(input),
+  'gls-ar1': (input) => ar1Line(input),
+  'theil-sen': (input) => theilSenAt95(input),
+  huber: (input) => huber(input),
+  york: ({ r = 0, ...input }) => york({ ...input, r }),
+  adf: (input) => adf(input),
+  kpss: (input) => kpss(input),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
   'energy-budget': (input, onProgress) => energyBudget(input, onProgress),
   derivation: ({ lines }) => evaluateDerivation(lines),
@@ -23,6 +37,11 @@ export const methods: Methods = {
   assumptions: (input, onProgress) => testAssumptions(input, onProgress),
   'claim-sweep': (input, onProgress) => claimSweep(input, onProgress),
 };
+
+function theilSenAt95(input: ComputeInput<'theil-sen'>): ComputeValue<'theil-sen'> {
+  const { confidence: confidence95, ...fit } = theilSen({ ...input, levelPercent: 95 });
+  return { ...fit, confidence95 };
+}
 
 /** Runs a method by its name; the input has been checked against the method's schema before. */
 export function runMethod<Method extends ComputeMethod>(

@@ -1,0 +1,85 @@
+import { z } from 'zod';
+import { caveat } from './primitives.ts';
+
+/** One value for each row, in order of time where the method asks for an order. */
+export const column = z.array(z.number()).min(1).max(1_000_000);
+/** One predictor, or several as columns. */
+export const predictors = z.union([column, z.array(column).min(1).max(100)]);
+const oneOrEach = z.union([z.number(), column]);
+const caveats = z.array(caveat);
+
+/** Coefficients of a line with their standard errors, the intercept first when there is one. */
+const line = z.object({ coefficients: z.array(z.number()), standardErrors: z.array(z.number()) });
+
+export const glsAr1Input = z.object({
+  x: predictors,
+  y: column,
+  intercept: z.boolean(),
+  estimator: z.enum(['ml', 'reml', 'prais-winsten']),
+});
+export type GlsAr1Input = z.infer<typeof glsAr1Input>;
+
+export const glsAr1Value = line.extend({
+  /** Lag-one coefficient of the errors. */
+  rho: z.number(),
+  /** Standard deviation of the innovations: RSS* over n for ml, over n − k otherwise. */
+  sigma: z.number(),
+  /** Restricted for reml; of all rows for the others, so that those can be held against each other. */
+  logLikelihood: z.number(),
+  caveats,
+});
+export type GlsAr1Value = z.infer<typeof glsAr1Value>;
+
+export const theilSenInput = z.object({ x: column, y: column });
+
+export const theilSenValue = z.object({
+  slope: z.number(),
+  /** Median of y less slope times median of x. */
+  intercept: z.number(),
+  /** Sen's interval; null when the series is too short for one, with a caveat. */
+  confidence95: z.tuple([z.number(), z.number()]).nullable(),
+  caveats,
+});
+
+export const huberInput = z.object({
+  x: predictors,
+  y: column,
+  intercept: z.boolean(),
+  /** Residuals beyond k scales count only linearly; 1.345 keeps 95 % efficiency for normal errors. */
+  k: z.number(),
+});
+
+export const huberValue = line.extend({
+  /** Median of |residual| over 0.6745. */
+  scale: z.number(),
+  /** By row: 1 where it counts in full. */
+  weights: z.array(z.number()),
+  nIterations: z.int(),
+  caveats,
+});
+
+export const yorkInput = z.object({
+  x: column,
+  y: column,
+  /** Standard deviations of the errors, one for all rows or one for each. */
+  sx: oneOrEach,
+  sy: oneOrEach,
+  /** Correlation of a row's two errors; 0 unless given. */
+  r: oneOrEach.optional(),
+});
+
+export const yorkValue = z.object({
+  slope: z.number(),
+  intercept: z.number(),
+  /** From the stated errors alone, at the adjusted points (York et al. 2004). */
+  slopeStandardError: z.number(),
+  interceptStandardError: z.number(),
+  /** Of slope and intercept. */
+  covariance: z.number(),
+  chiSquare: z.number(),
+  /** χ²/(n − 2). */
+  goodness: z.number(),
+  /** The standard errors times √goodness. */
+  scaledSlopeStandardError: z.number(),
+  scaledInterceptStandardError: z.number(),
+});

@@ -1,0 +1,52 @@
+import { z } from 'zod';
+import { column, predictors } from './line-estimators.ts';
+import { caveat } from './primitives.ts';
+
+const lags = z.int().min(0);
+const chiSquared = z.object({ statistic: z.number(), df: z.int(), p: z.number() });
+const caveats = z.array(caveat);
+
+export const residualTestsInput = z.object({
+  x: predictors,
+  y: column,
+  intercept: z.boolean(),
+  /** How far back Breusch–Godfrey and Ljung–Box look. */
+  lags: z.int().min(1),
+  /** Fitted ARMA coefficients that Ljung–Box takes off its degrees of freedom; 0 unless given. */
+  fitdf: lags.optional(),
+});
+export type ResidualTestsInput = z.infer<typeof residualTestsInput>;
+
+export const residualTestsValue = z.object({
+  /** Lag-one correlation of the residuals, demeaned. */
+  lag1: z.number(),
+  /** n (1 − r)/(1 + r). */
+  nEff: z.number(),
+  durbinWatson: z.number(),
+  breuschGodfrey: chiSquared,
+  ljungBox: chiSquared,
+  caveats,
+});
+export type ResidualTestsValue = z.infer<typeof residualTestsValue>;
+
+export const adfInput = z.object({ y: column, lags, deterministic: z.enum(['none', 'constant', 'trend']) });
+
+export const adfValue = z.object({
+  statistic: z.number(),
+  /** After MacKinnon 1994, asymptotic. */
+  p: z.number(),
+  /** Rows of the test regression. */
+  nObs: z.int(),
+  /** After MacKinnon 2010, at these rows. */
+  critical: z.object({ '1%': z.number(), '5%': z.number(), '10%': z.number() }),
+});
+
+export const kpssInput = z.object({ y: column, lags, deterministic: z.enum(['constant', 'trend']) });
+
+export const kpssValue = z.object({
+  statistic: z.number(),
+  /** Between 0.01 and 0.10; the nearer end outside the published table, with a caveat. */
+  p: z.number(),
+  critical: z.object({ '10%': z.number(), '5%': z.number(), '2.5%': z.number(), '1%': z.number() }),
+  caveats,
+});

@@ -1,0 +1,28 @@
+import { ar1Rows } from './ar1-rows.ts';
+import { refuseExactFit } from './exact-fit.ts';
+import { finiteNumber, finiteValues } from './finite-values.ts';
+import { sumOfProducts } from './summation.ts';
+
+/**
+ * Exact log-likelihood of errors under an AR(1) process, all rows counted, at the variance that makes it largest: holds
+ * lines from different estimators of ρ against each other.
+ *
+ * Model    −n/2 (log 2πσ² + 1) + ½ log(1 − ρ²), σ² = Σ e*²/n, e* the errors freed from ρ, the first times √(1 − ρ²)
+ * Assumes  errors in order of time, equally spaced, without gaps
+ *
+ * @param errors  [nObs] y − Xb, finite, not all zero
+ * @param rho     −1 < ρ < 1
+ * @throws   InputError not-finite, out-of-range; NumericError exact-fit
+ *
+ * Source   Beach & MacKinnon 1978, Econometrica 46, 51–58
+ * Checked  test/reference/statistics/ar1-line.test.ts (B: dense covariance matrices in base R)
+ */
+export function ar1LogLikelihood(errors: ArrayLike<number>, rho: number): number {
+  const e = finiteValues('ar1LogLikelihood', 'errors', errors);
+  finiteNumber('ar1LogLikelihood', 'rho', rho, { above: -1, below: 1 });
+  const freed = ar1Rows(e, rho);
+  const squares = sumOfProducts(freed, freed);
+  refuseExactFit('ar1LogLikelihood', squares);
+  const n = e.length;
+  return -0.5 * n * (Math.log((2 * Math.PI * squares) / n) + 1) + 0.5 * Math.log((1 - rho) * (1 + rho));
+}

@@ -1,0 +1,59 @@
+import type { Caveat } from '../contract/primitives.ts';
+import type { ResidualTestsInput, ResidualTestsValue } from '../contract/series-tests.ts';
+import { breuschGodfrey } from './breusch-godfrey.ts';
+import { designColumns } from './design-columns.ts';
+import { durbinWatson } from './durbin-watson.ts';
+import { effectiveSampleSize } from './effective-sample-size.ts';
+import { refuseExactFit } from './exact-fit.ts';
+import { lagOneAutocorrelation } from './lag-one-autocorrelation.ts';
+import { leastSquares } from './least-squares.ts';
+import { ljungBox } from './ljung-box.ts';
+import { sumOfProducts } from './summation.ts';
+
+/**
+ * What the residuals of a least-squares line say about its errors: are they correlated in time?
+ *
+ * Model    the fit of y on x by least squares; each test as its own function says
+ * Assumes  rows in order of time, equally spaced, without gaps
+ *
+ * @param x      [nObs], or columns; y [nObs]; finite
+ * @param lags   how far back Breusch–Godfrey and Ljung–Box look, 1 … n − k − 1
+ * @param fitdf  fitted ARMA coefficients; 0 unless given
+ * @returns  caveats no-intercept, lags-against-length
+ * @throws   InputError and NumericError as `leastSquares`; NumericError exact-fit; InputError out-of-range
+ *
+ * Checked  test/reference/statistics/residual-tests.test.ts (B: base R)
+ */
+export function residualTests({ x, y, intercept, lags, fitdf = 0 }: ResidualTestsInput): ResidualTestsValue {
+  const columns = designColumns('residualTests', x, y.length, intercept);
+  const fit = leastSquares({ columns, y, caller: 'residualTests' });
+  refuseExactFit('residualTests', fit.residualSumOfSquares, sumOfProducts(fit.y, fit.y));
+  const { residuals } = fit;
+  const lag1 = lagOneAutocorrelation(residuals);
+  return {
+    lag1,
+    nEff: effectiveSampleSize(fit.nObs, lag1),
+    durbinWatson: durbinWatson(residuals),
+    breuschGodfrey: breuschGodfrey(fit, lags),
+    ljungBox: ljungBox(residuals, lags, fitdf),
+    caveats: caveatsOf(fit.nObs, intercept, lags),
+  };
+}
+
+function caveatsOf(nObs: number, intercept: boolean, lags: number): Caveat[] {
+  const caveats: Caveat[] = [];
+  if (!intercept) {
+    caveats.push({
+      code: 'no-intercept',
+      detail: 'Without an intercept the published Durbin–Watson bounds do not apply; Breusch–Godfrey holds.',
+    });
+  }
+  // Common practice: at most a fifth of the rows.
+  if (lags > nObs / 5) {
+    caveats.push({
+      code: 'lags-against-length',
+      detail: `${lags} lags are many for ${nObs} rows: the χ² distribution of the tests is then a rough guide.`,
+    });
+  }
+  return caveats;
+}

@@ -1,0 +1,159 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { computeMethods } from '../../src-main/contract/compute.ts';
+import type { ErrorAnswer } from '../../src-main/contract/requests.ts';
+import { schemaOf } from '../../src-main/hosts/command-line/json-schemas.ts';
+import { testCore, type TestCore } from '../helpers/test-core.ts';
+
+/** Invented: a line with a wiggle that carries over. */
+const x = Array.from({ length: 24 }, (_, t) => t / 10);
+const y = x.map((value, t) =>
+  Number((0.4 + 1.7 * value + 0.2 * Math.sin(t * 0.9) + 0.05 * Math.cos(t * 2.3)).toFixed(4)),
+);
+const same = <Value>(value: Value, length = x.length): Value[] => Array.from({ length }, () => value);
+const without = (at: number) => y.map((value, t) => (t === at ? null : value));
+const onALine = x.map((value) => 2 * value);
+
+let test: TestCore;
+beforeAll(async () => {
+  test = await testCore();
+});
+afterAll(() => test.end());
+
+/** As a program on the other side of a pipe sees it. */
+async function compute(method: string, input: object): Promise<{ value?: unknown; error?: ErrorAnswer }> {
+  const request: unknown = JSON.parse(JSON.stringify({ method, ...input }));
+  const answer = await test.core.handle('compute', request);
+  return answer.ok ? { value: answer.value } : { error: answer.error };
+}
+
+const valid = {
+  'residual-tests': { x, y, intercept: true, lags: 3 },
+  'gls-ar1': { x, y, intercept: true, estimator: 'ml' },
+  'theil-sen': { x, y },
+  huber: { x, y, intercept: true, k: 1.345 },
+  york: { x, y, sx: 0.05, sy: 0.1 },
+  adf: { y, lags: 1, deterministic: 'trend' },
+  kpss: { y, lags: 2, deterministic: 'constant' },
+} as const;
+type Method = keyof typeof valid;
+const methods = Object.keys(valid) as Method[];
+
+describe.each(methods)('compute %s', (method) => {
+  it('answers in its own form, with finite numbers only', async () => {
+    const { value } = await compute(method, valid[method]);
+    expect(computeMethods[method].value.strict().parse(value)).toEqual(value);
+    expect(JSON.stringify(value)).not.toContain('null');
+  });
+
+  it('is described by footing schema', () => {
+    expect(schemaOf(`compute.${method}`)).toMatchObject({
+      type: 'object',
+      properties: { method: { const: method } },
+    });
+    expect(schemaOf(`compute.${method}.value`)).toMatchObject({ type: 'object' });
+  });
+
+  it('refuses a field that it does not know', async () => {
+    const { error } = await compute(method, { ...valid[method], lag: 2 });
+    expect(error).toMatchObject({ code: 'unknown-field', where: method });
+  });
+
+  it('refuses a missing value, and says how one is left out', async () => {
+    const { error } = await compute(method, { ...valid[method], y: without(5) });
+    expect(error).toMatchObject({ code: 'input-form', where: `${method}.y[5]`, received: 'null' });
+    expect(error?.hint).toContain('Leave a row with a missing value out');
+  });
+});
+
+/** Each parameter away from its plain value, twice: the answer moves, so the parameter arrives. */
+const parameters: [Method, string, readonly [object, object]][] = [
+  ['residual-tests', 'lags', [{ lags: 2 }, { lags: 5 }]],
+  ['residual-tests', 'fitdf', [{ fitdf: 1 }, { fitdf: 2 }]],
+  ['residual-tests', 'intercept', [{ intercept: false }, { intercept: true }]],
+  ['gls-ar1', 'estimator', [{ estimator: 'reml' }, { estimator: 'prais-winsten' }]],
+  ['gls-ar1', 'intercept', [{ intercept: false }, { intercept: true }]],
+  ['huber', 'k', [{ k: 0.8 }, { k: 1.1 }]],
+  ['huber', 'intercept', [{ intercept: false }, { intercept: true }]],
+  ['york', 'sx', [{ sx: 0.2 }, { sx: x.map((_, t) => 0.1 + t / 100) }]],
+  ['york', 'sy', [{ sy: 0.2 }, { sy: x.map((_, t) => 0.1 + t / 100) }]],
+  ['york', 'r', [{ r: 0.4 }, { r: x.map((_, t) => -t / 40) }]],
+  ['adf', 'lags', [{ lags: 0 }, { lags: 3 }]],
+  ['adf', 'deterministic', [{ deterministic: 'none' }, { deterministic: 'constant' }]],
+  ['kpss', 'lags', [{ lags: 0 }, { lags: 4 }]],
+  ['kpss', 'deterministic', [{ deterministic: 'trend' }, { deterministic: 'constant' }]],
+];
+
+it.each(parameters)('compute %s uses %s', async (method, _, [one, other]) => {
+  const answers = await Promise.all([one, other].map((change) => compute(method, { ...valid[method], ...change })));
+  expect(answers.map(({ error }) => error)).toEqual([undefined, undefined]);
+  expect(answers[0]?.value).not.toEqual(answers[1]?.value);
+});
+
+const line = ['residual-tests', 'gls-ar1', 'huber'] as const;
+const short = { x: [1, 2], y: [1, 3] };
+const bad: [Method, string, object, Partial<ErrorAnswer>][] = [
+  ...line.map((method): [Method, string, object, Partial<ErrorAnswer>] => [
+    method,
+    'fewer rows than coefficients',
+    { x: [1], y: [2] },
+    { code: 'too-few-observations' },
+  ]),
+  ...line.map((method): [Method, string, object, Partial<ErrorAnswer>] => [
+    method,
+    'a constant predictor',
+    { x: same(3) },
+    { kind: 'NumericError', code: 'rank-deficient' },
+  ]),
+  ...([...line, 'theil-sen', 'york'] as const).map((method): [Method, string, object, Partial<ErrorAnswer>] => [
+    method,
+    'columns of different lengths',
+    { x: x.slice(1) },
+    { code: 'wrong-length' },
+  ]),
+  ['gls-ar1', 'as many rows as coefficients', short, { code: 'too-few-observations' }],
+  ['gls-ar1', 'an exact line', { y: onALine }, { code: 'exact-fit' }],
+  ['gls-ar1', 'an exact line (prais-winsten)', { y: onALine, estimator: 'prais-winsten' }, { code: 'exact-fit' }],
+  ['residual-tests', 'an exact line', { y: onALine }, { code: 'exact-fit' }],
+  ['residual-tests', 'as many lags as rows', { lags: 24 }, { code: 'out-of-range', where: 'breuschGodfrey, lags' }],
+  ['residual-tests', 'half a lag', { lags: 1.5 }, { code: 'input-form' }],
+  [
+    'residual-tests',
+    'more fitted coefficients than lags',
+    { fitdf: 3 },
+    { code: 'out-of-range', where: 'ljungBox, fitdf' },
+  ],
+  ['theil-sen', 'two rows', short, { code: 'too-few-values' }],
+  ['theil-sen', 'a constant predictor', { x: same(3) }, { code: 'constant', where: 'theilSen, x' }],
+  [
+    'huber',
+    'a line through half of the rows',
+    { y: onALine.map((value, t) => value + (t % 5 === 0 ? 1 : 0)) },
+    { code: 'zero-scale' },
+  ],
+  ['huber', 'k of zero', { k: 0 }, { code: 'out-of-range', where: 'huber, k' }],
+  ['york', 'two rows', short, { code: 'too-few-values' }],
+  ['york', 'a negative error', { sy: -0.1 }, { code: 'negative' }],
+  ['york', 'no error at all', { sx: 0, sy: 0 }, { code: 'no-error' }],
+  ['york', 'errors of another length', { sy: same(0.1, 5) }, { code: 'wrong-length' }],
+  ['york', 'wholly correlated errors', { r: 1 }, { code: 'out-of-range' }],
+  ['york', 'a constant predictor', { x: same(3) }, { kind: 'NumericError' }],
+  ['adf', 'as many lags as rows', { lags: 24 }, { code: 'out-of-range', where: 'adf, lags' }],
+  ['adf', 'a constant series', { y: same(3) }, { kind: 'NumericError' }],
+  ['adf', 'another word', { deterministic: 'drift' }, { code: 'input-form', where: 'adf.deterministic' }],
+  ['kpss', 'as many lags as rows', { lags: 24 }, { code: 'out-of-range', where: 'kpss, lags' }],
+  ['kpss', 'a constant series', { y: same(3) }, { code: 'exact-fit' }],
+];
+
+it.each(bad)('compute %s refuses %s', async (method, _, change, expected) => {
+  const { value, error } = await compute(method, { ...valid[method], ...change });
+  expect(value).toBeUndefined();
+  expect(error).toMatchObject(expected);
+  expect(error?.expected).not.toBe('');
+  expect(error?.received).not.toBe('');
+});
+
+it('compute theil-sen says by a caveat that a series is too short for an interval', async () => {
+  const { value } = await compute('theil-sen', { x: [1, 2, 3], y: [1, 3, 2] });
+  expect(value).toMatchObject({ confidence95: null });
+  expect(JSON.stringify(value)).toContain('no-interval');
+});

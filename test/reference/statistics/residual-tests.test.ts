@@ -1,0 +1,71 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { residualTests } from '../../../src-main/statistics/residual-tests.ts';
+import { expectClose } from '../../helpers/close.ts';
+import { startR, type RSession } from '../../helpers/r-session.ts';
+import { co2AndTemperature } from '../../helpers/real-series.ts';
+
+// Level B: base R on the real record; the tests one by one are in serial-correlation.test.ts.
+
+let r: RSession;
+beforeAll(async () => {
+  r = await startR(new URL('./serial-correlation.R', import.meta.url));
+});
+afterAll(() => r.close());
+
+const near = { rel: 1e-9, abs: 0, why: 'two double-precision programs, p-values in the tail' };
+const { co2Ppm, temperatureK, years } = co2AndTemperature();
+const x = co2Ppm.map((value) => Math.log(value / (co2Ppm[0] ?? NaN)));
+const y = temperatureK.map((value) => value - (temperatureK[0] ?? NaN));
+
+describe('residualTests', () => {
+  it('are those of R on lm’s residuals: two numbers of lags, with and without intercept and fitted coefficients', async () => {
+    for (const [intercept, lags, fitdf] of [
+      [true, 3, undefined],
+      [true, 5, 1],
+      [false, 4, 2],
+    ] as const) {
+      const found = residualTests({ x, y, intercept, lags, ...(fitdf === undefined ? {} : { fitdf }) });
+      const reference = await r.numbers(
+        `fit <- if (intercept) lm(y ~ x) else lm(y ~ x - 1)
+         e <- residuals(fit)
+         lb <- box(e, lags, fitdf)
+         bg <- breusch_godfrey(fit, lags)
+         r1 <- lag_one(e)
+         list(lag1 = r1, nEff = length(e) * (1 - r1) / (1 + r1), durbinWatson = sum(diff(e)^2) / sum(e^2),
+              lb = unlist(lb), bg = unlist(bg))`,
+        { x, y, intercept, lags, fitdf: fitdf ?? 0 },
+      );
+      expectClose(
+        {
+          lag1: [found.lag1],
+          nEff: [found.nEff],
+          durbinWatson: [found.durbinWatson],
+          lb: [found.ljungBox.statistic, found.ljungBox.df, found.ljungBox.p],
+          bg: [found.breuschGodfrey.statistic, found.breuschGodfrey.df, found.breuschGodfrey.p],
+        },
+        reference,
+        near,
+      );
+    }
+  });
+
+  it('takes several predictors', () => {
+    const two = [x, years.map((year) => (year - 1985) ** 2)];
+    expect(residualTests({ x: two, y, intercept: true, lags: 2 }).durbinWatson).toBeGreaterThan(
+      residualTests({ x, y, intercept: true, lags: 2 }).durbinWatson,
+    );
+  });
+
+  it('says what bears on the figures', () => {
+    const codes = (intercept: boolean, lags: number) =>
+      residualTests({ x, y, intercept, lags }).caveats.map(({ code }) => code);
+    expect(codes(true, 4)).toEqual([]);
+    expect(codes(false, 20)).toEqual(['no-intercept', 'lags-against-length']);
+  });
+
+  it('refuses an exact fit', () => {
+    expect(() => residualTests({ x, y: x.map((value) => 3 * value), intercept: false, lags: 1 })).toThrow(
+      'an exact fit',
+    );
+  });
+});

@@ -8,14 +8,20 @@ export type Path = readonly PropertyKey[];
 export function inputProblem(name: string, { issues }: z.ZodError, input: unknown): InputError {
   const found = issues.map(deepest);
   const [first = { path: [], expected: 'another form' }] = found;
+  const received = valueAt(input, first.path);
+  const missing = received === null && first.expected === typeWords['number'] ? missingHint : '';
+  const others = found.length > 1 ? `${found.length - 1} more place(s) in it need another form too.` : '';
   return new InputError({
     code: 'input-form',
     where: placeIn(name, first.path),
     expected: first.expected,
-    received: valueWords(valueAt(input, first.path)),
-    hint: found.length > 1 ? `${found.length - 1} more place(s) in it need another form too.` : '',
+    received: valueWords(received),
+    hint: [missing, others].filter((words) => words !== '').join(' '),
   });
 }
+
+/** JSON has no NaN: a program that writes one writes null. */
+const missingHint = 'Leave a row with a missing value out of every column, and say which rows those are.';
 
 /** `claim.create.procedure.window`: the name of what was given and the way into it. */
 export function placeIn(name: string, path: Path): string {

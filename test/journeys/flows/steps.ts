@@ -42,5 +42,5 @@ export async function stored(page: Page, act: () => Promise<unknown>): Promise<v
   const entries = page.getByRole('navigation', { name: 'Project' }).getByRole('link', { name: /^Trail/ });
   const before = await entries.textContent();
   await act();
-  await expect.poll(() => entries.textContent(), { timeout: 20_000 }).not.toBe(before);
+  await expect.poll(() => entries.textContent()).not.toBe(before);
 }

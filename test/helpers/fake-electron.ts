@@ -1,5 +1,5 @@
 import { EventEmitter } from 'node:events';
-import { vi } from 'vitest';
+import { vi, type Mock } from 'vitest';
 
 /**
  * Stands in for the module `electron`: has what the shell is meant to use and records how it is used. What it lacks
@@ -29,7 +29,7 @@ class FakeApp extends EventEmitter {
   commandLine = { appendSwitch: vi.fn((name: string) => note(`switch ${name}`)) };
   requestSingleInstanceLock = vi.fn(() => state.hasLock);
   quit = vi.fn(() => note('quit'));
-  exit = vi.fn();
+  exit: Mock = vi.fn();
   whenReady = vi.fn(async () => {
     await new Promise((resolve) => setTimeout(resolve));
     note('ready');
@@ -41,11 +41,11 @@ class FakeContents extends EventEmitter {
   mainFrame = { url: '' };
   windowOpenHandler: ((details: { url: string }) => unknown) | undefined;
   setWindowOpenHandler = (handler: (details: { url: string }) => unknown) => (this.windowOpenHandler = handler);
-  setWebRTCIPHandlingPolicy = vi.fn();
-  send = vi.fn();
-  reload = vi.fn();
-  print = vi.fn();
-  sendInputEvent = vi.fn();
+  setWebRTCIPHandlingPolicy: Mock = vi.fn();
+  send: Mock = vi.fn();
+  reload: Mock = vi.fn();
+  print: Mock = vi.fn();
+  sendInputEvent: Mock = vi.fn();
 }
 
 export class BrowserWindow extends EventEmitter {
@@ -55,9 +55,9 @@ export class BrowserWindow extends EventEmitter {
   isGone = false;
   isMinimized = () => false;
   isDestroyed = () => this.isGone;
-  show = vi.fn();
-  focus = vi.fn();
-  restore = vi.fn();
+  show: Mock = vi.fn();
+  focus: Mock = vi.fn();
+  restore: Mock = vi.fn();
 
   constructor(options: BrowserWindow['options']) {
     super();
@@ -83,7 +83,7 @@ class FakeSession extends EventEmitter {
   setPermissionCheckHandler = this.keep('permission check');
   setDevicePermissionHandler = this.keep('device permission');
   setDisplayMediaRequestHandler = this.keep('display media');
-  setSpellCheckerEnabled = vi.fn();
+  setSpellCheckerEnabled: Mock = vi.fn();
   protocol = { handle: vi.fn((_scheme: string, handler: Listener) => void this.handlers.set('protocol', handler)) };
 }
 export const session = { defaultSession: new FakeSession() };
@@ -108,5 +108,5 @@ export const Menu = {
   setApplicationMenu: vi.fn((_menu: MenuItem[]) => undefined),
 };
 
-export const dialog = { showErrorBox: vi.fn() };
+export const dialog: { showErrorBox: Mock } = { showErrorBox: vi.fn() };
 export const nativeTheme = { shouldUseDarkColors: false };

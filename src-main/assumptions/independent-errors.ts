@@ -1,3 +1,4 @@
+import { fittedLine } from '../climate/procedures/fitted-line.ts';
 import { covarianceWords } from '../climate/procedures/slope-estimates.ts';
 import type { AssumptionOutcome } from '../contract/result.ts';
 import { NumericError } from '../errors.ts';
@@ -9,7 +10,7 @@ import { ljungBox } from '../statistics/ljung-box.ts';
 import { praisWinsten } from '../statistics/prais-winsten.ts';
 import { regression } from '../statistics/regression.ts';
 import { outcome, untestable, type Assumption } from './assumption.ts';
-import { claimLine, interval90 } from './claim-line.ts';
+import { interval90 } from './claim-line.ts';
 import type { TestContext } from './test-context.ts';
 import { heavier, weightWords } from './weigh.ts';
 
@@ -35,7 +36,7 @@ export const independentErrors: Assumption = {
 
   test(context) {
     const { recomputation, show, showWithUnit, showShift } = context;
-    const { fit, factor } = claimLine(context);
+    const { fit, factor } = fittedLine(context);
     const { durbinWatson, lag1Autocorrelation: lagOne, effectiveSampleSize: nEffective, nObs } = fit.diagnostics;
     if (durbinWatson === null || lagOne === null || nEffective === null || nObs < 8) {
       return untestable(independentErrors, {
@@ -95,7 +96,7 @@ export const independentErrors: Assumption = {
 };
 
 function serialTests(context: TestContext) {
-  const { fit, intercept, serialCovariance } = claimLine(context);
+  const { fit, intercept, serialCovariance } = fittedLine(context);
   const lags = Math.max(1, Math.min(serialCovariance.lag, fit.y.length - 4));
   const columns = designColumns('independent-errors', fit.x, fit.y.length, intercept);
   const line = leastSquares({ columns, y: fit.y, caller: 'independent-errors' });
@@ -104,7 +105,7 @@ function serialTests(context: TestContext) {
 
 /** 90 % intervals of the number: under Newey–West, under classical and under the procedure's own errors. */
 function intervals(context: TestContext) {
-  const { fit, intercept, factor, serialCovariance } = claimLine(context);
+  const { fit, intercept, factor, serialCovariance } = fittedLine(context);
   const place = intercept ? 1 : 0;
   const { value } = context.recomputation;
   const underErrors = (covariance: Parameters<typeof regression>[0]['covariance']) => {
@@ -126,7 +127,7 @@ function intervals(context: TestContext) {
 
 /** null when the residuals leave no stationary AR(1) process to fit. */
 function ar1Number(context: TestContext, factor: number) {
-  const { fit, intercept } = claimLine(context);
+  const { fit, intercept } = fittedLine(context);
   try {
     const line = praisWinsten({ x: fit.x, y: fit.y, intercept });
     const place = intercept ? 1 : 0;

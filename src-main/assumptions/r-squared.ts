@@ -1,9 +1,9 @@
+import { fittedLine } from '../climate/procedures/fitted-line.ts';
 import type { AssumptionOutcome, Recomputation } from '../contract/result.ts';
 import { isFootingError } from '../errors.ts';
 import { formatNumber } from '../quantities/notation.ts';
 import { correlation } from '../statistics/correlation.ts';
 import { outcome, type Assumption } from './assumption.ts';
-import { claimLine } from './claim-line.ts';
 import { forcingLine, forcingMissing, type ForcingLine } from './forcing-line.ts';
 import { statedRSquared, type StatedRSquared } from './stated-r-squared.ts';
 import type { TestContext } from './test-context.ts';
@@ -38,7 +38,7 @@ export const rSquared: Assumption = {
 
   test(context) {
     const { statement } = context.computation;
-    const { fit, procedure } = claimLine(context);
+    const { fit, procedure } = fittedLine(context);
     const { rSquaredCentred: centred, rSquaredUncentred: uncentred, correlation: r } = fit.diagnostics;
     const measures: Measures = { centred, uncentred, r };
     const stated = statement.statedRSquared?.trim() ? statedRSquared(statement.statedRSquared) : null;

@@ -1,9 +1,9 @@
+import { fittedLine } from '../climate/procedures/fitted-line.ts';
 import { InputError } from '../errors.ts';
 import { formatNumber, formatShare, formatYears } from '../quantities/notation.ts';
 import { claimSweep, defaultMinYears } from '../robustness/claim-sweep.ts';
 import { quantile } from '../statistics/quantile.ts';
 import { outcome, untestable, type Assumption } from './assumption.ts';
-import { claimLine } from './claim-line.ts';
 import type { TestContext } from './test-context.ts';
 import { heavier, weightWords } from './weigh.ts';
 
@@ -87,7 +87,7 @@ export const window: Assumption = {
 
 /** At least the usual fewest years, and long enough for the procedure's own anchor and lag. */
 function shortestWindow(context: TestContext): number {
-  const { procedure } = claimLine(context);
+  const { procedure } = fittedLine(context);
   const anchorYears =
     procedure.kind === 'log-regression' && procedure.anchor.kind === 'mean-of-first' ? procedure.anchor.years : 1;
   const lag = procedure.covariance.kind === 'newey-west' ? procedure.covariance.lag : 0;

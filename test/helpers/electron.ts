@@ -34,7 +34,7 @@ export async function openElectronStage({
       ...(isDemo ? ['--demo'] : []),
       ...(projectPath === undefined ? [] : [`--project=${projectPath}`]),
     ],
-    env: { ...process.env, FOOTING_HOME: home } as Record<string, string>,
+    env: { ...process.env, FOOTING_HOME: home },
   });
   const page = await app.firstWindow();
   const problems = watchPage(page, (url) => /^(data|blob):/.test(url) || url.startsWith('footing://app/'));

@@ -32,7 +32,7 @@ net.Socket.prototype.connect = function (this: net.Socket, ...values: unknown[])
   const isLocal = typeof path === 'string' || target === 'localhost' || isThisMachine(target);
   if (!isLocal) refuse(`a connection to ${target}`);
   return Reflect.apply(connect, this, values) as net.Socket;
-} as typeof connect;
+};
 
 const { listen } = net.Server.prototype;
 net.Server.prototype.listen = function (this: net.Server, ...values: unknown[]) {
@@ -53,7 +53,7 @@ for (const [folder, functions] of Object.entries({ dns, 'dns.promises': dns.prom
     };
   }
 }
-dgram.createSocket = (() => refuse('a datagram socket')) as typeof dgram.createSocket;
+dgram.createSocket = () => refuse('a datagram socket');
 
 syncBuiltinESMExports();
 write(isMainThread ? 'armed: main thread' : 'armed: worker thread');

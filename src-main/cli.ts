@@ -1,6 +1,6 @@
-import { userInfo } from 'node:os';
 import { join } from 'node:path';
 import { createCore } from './handlers/handle.ts';
+import { accountName } from './hosts/command-line/account-name.ts';
 import { runCommand } from './hosts/command-line/run-command.ts';
 import { directRunner } from './jobs/direct-runner.ts';
 
@@ -9,9 +9,13 @@ const createCommandCore = (home: string | undefined) =>
     host: 'command line',
     jobs: directRunner(),
     installation: join(import.meta.dirname, '..', '..'),
-    reviewerIfUnknown: { name: userInfo().username, role: 'account name on this machine' },
+    reviewerIfUnknown: { name: accountName(), role: 'account name on this machine' },
     ...(home === undefined ? {} : { home }),
   });
+// Whoever reads the output may have read enough.
+process.stdout.on('error', (error: NodeJS.ErrnoException) => {
+  if (error.code !== 'EPIPE') throw error;
+});
 process.exitCode = await runCommand(process.argv.slice(2), createCommandCore, {
   out: (text) => process.stdout.write(text),
   error: (text) => process.stderr.write(text),

@@ -4,14 +4,14 @@ import type { z } from 'zod';
 import type { ProgressEvent } from '../contract/events.ts';
 import { requestNames, type RequestName } from '../contract/request-names.ts';
 import { requests, type Answer, type ErrorAnswer } from '../contract/requests.ts';
-import { isFootingError } from '../errors.ts';
-import { JobCancelled, type JobRunner } from '../jobs/job.ts';
+import type { JobRunner } from '../jobs/job.ts';
 import { identityStore } from '../project/identity.ts';
 import { checkInput } from './check-input.ts';
 import { claimHandlers } from './claims.ts';
 import { computeHandlers } from './compute.ts';
 import type { Handler, HandlerContext, Handlers } from './context.ts';
 import { dataHandlers } from './data.ts';
+import { errorAnswer } from './error-answer.ts';
 import { figureHandlers } from './figures.ts';
 import { findingHandlers } from './findings.ts';
 import { projectHandlers } from './projects.ts';
@@ -115,31 +115,5 @@ function unknownRequest(name: string): ErrorAnswer {
     expected: 'the name of a request of this version',
     received: JSON.stringify(name.slice(0, 80)),
     hint: 'footing schema lists all of them.',
-  };
-}
-
-function errorAnswer(error: unknown, name: RequestName): ErrorAnswer {
-  if (isFootingError(error)) {
-    const { code, where, expected, received, hint = '' } = error.fields;
-    return { kind: error.name, code, where, expected, received, hint };
-  }
-  if (error instanceof JobCancelled) {
-    return {
-      kind: 'Cancelled',
-      code: 'cancelled',
-      where: name,
-      expected: 'a finished computation',
-      received: error.message,
-      hint: '',
-    };
-  }
-  const message = error instanceof Error ? error.message : String(error);
-  return {
-    kind: 'ProjectError',
-    code: 'unexpected',
-    where: name,
-    expected: 'an answer',
-    received: `a fault in Footing itself: ${message}`,
-    hint: 'Nothing was stored by this step. Please report the fault with these words.',
   };
 }

@@ -1,5 +1,6 @@
 import type { RequestName } from '../../contract/request-names.ts';
 import type { ErrorAnswer, RequestAnswer, RequestInput } from '../../contract/requests.ts';
+import { InputError } from '../../errors.ts';
 
 /** 0 done · 1 checked and found wanting · 2 bad input · 3 project in use or unreadable. */
 export type ExitStatus = 0 | 1 | 2 | 3;
@@ -25,17 +26,18 @@ export interface CommandTools {
   /** Sends a request and gives the answer as it is. */
   tryAsk(name: RequestName, input: unknown): Promise<{ ok: true; value: unknown } | { ok: false; error: ErrorAnswer }>;
   readFile(path: string): Buffer;
-  readStandardInput(): Promise<string>;
-  /** The passphrase of the reviewer's key, from the environment or asked for. */
-  passphrase(purpose: string): Promise<string>;
+  /** The JSON in a file, or in standard input for "-". */
+  readJson(path: string): Promise<unknown>;
+  /** The passphrase of the reviewer's key, from the environment or asked for; a new one is asked for twice. */
+  passphrase(isNew: boolean): Promise<string>;
   /** A line on standard error. */
   tell(line: string): void;
 }
 
-/** What a command comes to: the same facts as JSON and as text. */
+/** What a command comes to: the same facts as JSON and as lines of text. */
 export interface CommandOutcome {
   json: unknown;
-  text: string;
+  lines: string[];
   status?: ExitStatus;
 }
 
@@ -54,7 +56,7 @@ export interface Command {
   run(args: CommandArguments, tools: CommandTools): Promise<CommandOutcome>;
 }
 
-/** Ends a command with an error of the core or of the command line itself. */
+/** Ends a command with an error that the core answered with. */
 export class CommandFailure extends Error {
   readonly error: ErrorAnswer;
 
@@ -64,32 +66,53 @@ export class CommandFailure extends Error {
   }
 }
 
-export function badUsage(where: string, expected: string, received: string, hint = ''): CommandFailure {
-  return new CommandFailure({ kind: 'InputError', code: 'usage', where, expected, received, hint });
+export function badUsage(where: string, expected: string, received: string, hint = ''): InputError {
+  return new InputError({ code: 'usage', where, expected, received, hint });
 }
 
-/** The number of a claim; the only claim when none is named. */
+/** The value of an option that names one of a few things; undefined when it is not given. */
+export function oneOf<Value extends string>(
+  args: CommandArguments,
+  name: string,
+  values: readonly Value[],
+): Value | undefined {
+  const given = args.option(name);
+  const found = values.find((value) => value === given);
+  if (given === undefined || found !== undefined) return found;
+  throw badUsage(`--${name}`, `one of ${values.join(', ')}`, given);
+}
+
+/** The value of an option that is a whole number above zero; undefined when it is not given. */
+export function wholeNumber(args: CommandArguments, name: string, expected: string): number | undefined {
+  const given = args.option(name);
+  if (given === undefined) return undefined;
+  if (/^[1-9]\d{0,8}$/.test(given)) return Number(given);
+  throw badUsage(`--${name}`, expected, given === '' ? 'nothing' : given);
+}
+
+/** The number of a claim of the open project; the only claim when none is named. */
 export async function claimNumber(args: CommandArguments, tools: CommandTools): Promise<number> {
-  const given = args.option('claim');
-  if (given !== undefined) {
-    const number = Number(given);
-    if (Number.isInteger(number) && number > 0) return number;
-    throw badUsage('--claim', 'the number of a claim', given);
-  }
   const { claims } = await tools.ask('project.view', {});
-  const [only, ...others] = claims;
-  if (only && others.length === 0) return only.id;
+  const numbers = claims.map(({ id }) => id);
+  const list = numbers.join(', ');
+  const given = wholeNumber(args, 'claim', `the number of a claim (${list || 'there is none yet'})`);
+  const [only, ...others] = numbers;
+  const chosen = given ?? (others.length === 0 ? only : undefined);
+  if (chosen !== undefined && numbers.includes(chosen)) return chosen;
   throw badUsage(
     '--claim',
-    'the number of a claim',
-    only ? `none, and ${claims.length} to choose from` : 'none, and no claim in the project',
+    only === undefined ? 'a claim in the project' : `the number of a claim (${list})`,
+    String(given ?? 'none'),
+    only === undefined ? 'footing claim FILE CLAIM.json adds one.' : '',
   );
 }
 
 export const claimOption = {
   claim: { value: 'N', help: 'number of the claim; may be left out when there is only one' },
 };
-export const reviewerOptions = {
+/** Options of every command. */
+export const commonOptions: Record<string, OptionRule> = {
   reviewer: { value: 'NAME', help: 'who is reviewing; kept for the next time' },
-  role: { value: 'ROLE', help: 'the reviewer’s role' },
+  role: { value: 'ROLE', help: 'the reviewer’s role; with --reviewer' },
+  json: { help: 'one JSON value on standard output and nothing else there' },
 };

@@ -12,14 +12,13 @@ export const computeCommands: Command[] = [
     options: {},
     isJsonOnly: true,
     async run({ positionals: [file = ''] }, tools) {
-      const text = file === '-' ? await tools.readStandardInput() : tools.readFile(file).toString('utf8');
-      const request = parseJson(file, text);
+      const request = await tools.readJson(file);
       const answers = [];
       for (const one of Array.isArray(request) ? request : [request])
         answers.push(answerOf(await tools.tryAsk('compute', one)));
       const isEveryOneDone = answers.every((answer) => answer.ok);
       const json = Array.isArray(request) ? answers : answers[0];
-      return { json, text: '', status: isEveryOneDone ? 0 : 2 };
+      return { json, lines: [], status: isEveryOneDone ? 0 : 2 };
     },
   },
   {
@@ -30,25 +29,13 @@ export const computeCommands: Command[] = [
     nPositionals: { min: 0, max: 1 },
     options: {},
     async run({ positionals: [name] }) {
-      if (name === undefined) return { json: schemaNames(), text: schemaNames().join('\n') };
+      if (name === undefined) return { json: schemaNames(), lines: schemaNames() };
       const schema = schemaOf(name);
       if (!schema) throw badUsage('NAME', 'a name that footing schema lists', name);
-      return { json: schema, text: JSON.stringify(schema, null, 2) };
+      return { json: schema, lines: JSON.stringify(schema, null, 2).split('\n') };
     },
   },
 ];
-
-function parseJson(file: string, text: string): unknown {
-  try {
-    return JSON.parse(text);
-  } catch (error) {
-    throw badUsage(
-      file === '-' ? 'standard input' : file,
-      'JSON',
-      error instanceof Error ? error.message : String(error),
-    );
-  }
-}
 
 function answerOf(answer: { ok: true; value: unknown } | { ok: false; error: ErrorAnswer }) {
   if (answer.ok) return answer;

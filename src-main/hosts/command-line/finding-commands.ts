@@ -1,5 +1,7 @@
+import { cautions } from '../../contract/cautions.ts';
 import { conclusion, signatureMeaning } from '../../contract/finding.ts';
-import { badUsage, claimNumber, claimOption, type Command } from './command.ts';
+import { fillIn } from '../../handlers/fill-in.ts';
+import { badUsage, claimNumber, claimOption, oneOf, type Command } from './command.ts';
 
 const formats = ['html', 'json'] as const;
 
@@ -22,18 +24,24 @@ export const findingCommands: Command[] = [
       const claimId = await claimNumber(args, tools);
       const { findings } = await tools.ask('claim.view', { claimId });
       const earlier = findings.at(-1);
-      const chosen = args.option('conclusion');
-      const parsed = conclusion.safeParse(chosen ?? earlier?.conclusion);
-      if (!parsed.success) throw badUsage('--conclusion', `one of ${conclusion.options.join(', ')}`, chosen ?? 'none');
+      const chosen = oneOf(args, 'conclusion', conclusion.options) ?? earlier?.conclusion;
+      if (!chosen) throw badUsage('--conclusion', `one of ${conclusion.options.join(', ')}`, 'none');
       const view = await tools.ask('finding.save', {
         claimId,
-        conclusion: parsed.data,
+        conclusion: chosen,
         text: args.option('text') ?? earlier?.text ?? '',
         conditions: args.option('conditions') ?? earlier?.conditions ?? '',
         publishedValueIds: args.has('published') ? args.options('published') : (earlier?.publishedValueIds ?? []),
       });
       const finding = view.findings.at(-1);
-      return { json: finding, text: `claim ${claimId}, revision ${finding?.revision ?? 1}: ${parsed.data}` };
+      for (const caution of cautions) tools.tell(`caution: ${caution}`);
+      const { unknown } = fillIn(finding?.text ?? '', view.fillIns);
+      if (unknown.length > 0) {
+        tools.tell(
+          `No figure is called {${unknown.join('}, {')}}. There are: ${Object.keys(view.fillIns).join(', ')}.`,
+        );
+      }
+      return { json: finding, lines: [`claim ${claimId}, revision ${finding?.revision ?? 1}: ${chosen}`] };
     },
   },
   {
@@ -48,14 +56,12 @@ export const findingCommands: Command[] = [
       remark: { value: 'TEXT', help: 'a remark that is signed with it' },
     },
     async run(args, tools) {
-      const meaning = signatureMeaning.safeParse(args.option('meaning') ?? 'sign-off');
-      if (!meaning.success)
-        throw badUsage('--meaning', `one of ${signatureMeaning.options.join(', ')}`, args.option('meaning') ?? '');
+      const meaning = oneOf(args, 'meaning', signatureMeaning.options) ?? 'sign-off';
       await tools.ask('project.open', { path: args.positionals[0] ?? '' });
       const claimId = await claimNumber(args, tools);
       const { reviewer } = await tools.ask('session.get', {});
       const isNew = !reviewer?.publicKey;
-      const passphrase = await tools.passphrase(isNew ? 'to protect the new signing key' : 'of the signing key');
+      const passphrase = await tools.passphrase(isNew);
       if (isNew) {
         const made = await tools.ask('identity.create', { passphrase });
         tools.tell(`Made a signing key: ${made.fingerprint ?? ''}`);
@@ -63,14 +69,18 @@ export const findingCommands: Command[] = [
       const view = await tools.ask('finding.sign', {
         claimId,
         passphrase,
-        meaning: meaning.data,
+        meaning,
         remark: args.option('remark') ?? '',
       });
       const signature = view.signatures.at(-1);
       const check = view.signatureChecks.at(-1);
       return {
         json: signature,
-        text: `${meaning.data} on claim ${claimId}, revision ${signature?.revision ?? ''}, by ${signature?.signer.name ?? ''}, key ${check?.fingerprint ?? ''}, witnessing trail ${signature?.trailSequence ?? ''} ${signature?.trailHash ?? ''}`,
+        lines: [
+          `${meaning} on claim ${claimId}, revision ${signature?.revision ?? ''}, by ${signature?.signer.name ?? ''}`,
+          `key ${check?.fingerprint ?? ''}`,
+          `witnessing trail ${signature?.trailSequence ?? ''} ${signature?.trailHash ?? ''}`,
+        ],
       };
     },
   },
@@ -82,13 +92,13 @@ export const findingCommands: Command[] = [
     nPositionals: { min: 1, max: 1 },
     options: { ...claimOption, reason: { value: 'TEXT', help: 'what changes and why' } },
     async run(args, tools) {
-      await tools.ask('project.open', { path: args.positionals[0] ?? '' });
-      const claimId = await claimNumber(args, tools);
       const reason = args.option('reason');
       if (!reason) throw badUsage('--reason', 'what changes and why', 'nothing');
+      await tools.ask('project.open', { path: args.positionals[0] ?? '' });
+      const claimId = await claimNumber(args, tools);
       const view = await tools.ask('finding.revise', { claimId, reason });
       const finding = view.findings.at(-1);
-      return { json: finding, text: `claim ${claimId}: revision ${finding?.revision ?? ''} begun` };
+      return { json: finding, lines: [`claim ${claimId}: revision ${finding?.revision ?? ''} begun`] };
     },
   },
   {
@@ -116,7 +126,7 @@ export const findingCommands: Command[] = [
         );
       await tools.ask('project.open', { path: args.positionals[0] ?? '', readOnly: true });
       const { files } = await tools.ask('report.write', { directory, formats: known });
-      return { json: files, text: files.join('\n') };
+      return { json: files, lines: files };
     },
   },
 ];

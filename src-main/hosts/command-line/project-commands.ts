@@ -1,5 +1,5 @@
 import { join } from 'node:path';
-import type { Command, CommandTools } from './command.ts';
+import { wholeNumber, type Command, type CommandTools } from './command.ts';
 import { textTable } from './text-table.ts';
 
 const open = (tools: CommandTools, path: string, readOnly = false) => tools.ask('project.open', { path, readOnly });
@@ -19,7 +19,7 @@ export const projectCommands: Command[] = [
       });
       return {
         json: view,
-        text: `${view.path}\n${view.project.title} · trail ${view.head.sequence} ${view.head.hash}`,
+        lines: [view.path, `${view.project.title} · trail ${view.head.sequence} ${view.head.hash}`],
       };
     },
   },
@@ -46,7 +46,7 @@ export const projectCommands: Command[] = [
       const claims = (await tools.ask('project.view', {})).claims;
       return {
         json: { project: view.path, report: files, claims, verify: check, recheck },
-        text: [
+        lines: [
           `Project  ${view.path} (invented data)`,
           ...claims.map(
             (claim) => `Claim ${claim.id}  ${claim.title}: ${claim.status}${claim.isSigned ? ', signed' : ''}`,
@@ -54,7 +54,7 @@ export const projectCommands: Command[] = [
           ...files.map((file) => `Report   ${file}`),
           `Verified ${check.isSound ? 'sound' : 'NOT SOUND'}: ${check.nEntries} entries, head ${check.head.hash}`,
           `Recheck  ${recheck.nResults} results, ${recheck.isIdentical ? 'identical to the last digit' : 'DIFFERENT'}`,
-        ].join('\n'),
+        ],
         status: check.isSound && recheck.isIdentical ? 0 : 1,
       };
     },
@@ -76,7 +76,7 @@ export const projectCommands: Command[] = [
         ),
         `${report.isSound ? 'Sound' : 'NOT SOUND'}: ${report.nEntries} entries, ${report.nRecords} records, ${report.nContents} contents; head ${report.head.sequence} ${report.head.hash}`,
       ];
-      return { json: report, text: lines.join('\n'), status: report.isSound ? 0 : 1 };
+      return { json: report, lines, status: report.isSound ? 0 : 1 };
     },
   },
   {
@@ -96,7 +96,7 @@ export const projectCommands: Command[] = [
         ),
         `${report.nResults} results, ${report.isIdentical ? 'identical to the last digit' : `${report.differences.length} different`}`,
       ];
-      return { json: report, text: lines.join('\n'), status: report.isIdentical ? 0 : 1 };
+      return { json: report, lines, status: report.isIdentical ? 0 : 1 };
     },
   },
   {
@@ -106,17 +106,18 @@ export const projectCommands: Command[] = [
     examples: ['trail review.footing --limit 20'],
     nPositionals: { min: 1, max: 1 },
     options: { limit: { value: 'N', help: 'how many of the newest entries; 50 unless given' } },
-    async run({ positionals: [path = ''], option }, tools) {
-      await open(tools, path, true);
-      const { lines } = await tools.ask('trail.list', { limit: Number(option('limit') ?? 50) });
-      const rows = lines.map((line) => [
+    async run(args, tools) {
+      const limit = wholeNumber(args, 'limit', 'a number from 1 to 500') ?? 50;
+      await open(tools, args.positionals[0] ?? '', true);
+      const { lines: entries } = await tools.ask('trail.list', { limit });
+      const rows = entries.map((line) => [
         String(line.sequence),
         line.at,
         line.reviewer.name,
         `${line.action}: ${line.subject}${line.isUndone ? ' (undone)' : ''}`,
         line.hash.slice(0, 12),
       ]);
-      return { json: lines, text: textTable(rows) };
+      return { json: entries, lines: textTable(rows) };
     },
   },
   ...(['undo', 'redo'] as const).map((name): Command => ({
@@ -129,7 +130,7 @@ export const projectCommands: Command[] = [
     async run({ positionals: [path = ''] }, tools) {
       const before = await open(tools, path);
       const view = await tools.ask(`trail.${name}`, {});
-      return { json: view, text: `${name === 'undo' ? 'Undone' : 'Done again'}: ${before[name] ?? ''}` };
+      return { json: view, lines: [`${name === 'undo' ? 'Undone' : 'Done again'}: ${before[name] ?? ''}`] };
     },
   })),
 ];

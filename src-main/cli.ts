@@ -4,6 +4,10 @@ import { accountName } from './hosts/command-line/account-name.ts';
 import { runCommand } from './hosts/command-line/run-command.ts';
 import { directRunner } from './jobs/direct-runner.ts';
 
+// npm runs scripts in the package's folder; paths are meant from where the command was typed.
+const { INIT_CWD: typedIn, npm_lifecycle_event: script } = process.env;
+if (typedIn !== undefined && script === 'footing') process.chdir(typedIn);
+
 const createCommandCore = (home: string | undefined) =>
   createCore({
     host: 'command line',

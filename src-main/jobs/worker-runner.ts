@@ -75,7 +75,7 @@ export function workerRunner(workerFile: string, now: () => number = () => perfo
 
   const run: RunJob = (method, input, options) =>
     new Promise((resolve, reject) => {
-      const job: RunningJob = { options, startedAt: now(), resolve: resolve as (value: unknown) => void, reject };
+      const job: RunningJob = { options, startedAt: now(), resolve: resolve, reject };
       waiting.push({ request: { method, input }, job });
       startNext();
     });

@@ -15,7 +15,7 @@ export const glsAr1Input = z.object({
   x: predictors,
   y: column,
   intercept: z.boolean(),
-  estimator: z.enum(['ml', 'reml', 'prais-winsten']),
+  estimator: z.enum(['ml', 'reml', 'prais-winsten', 'cochrane-orcutt']),
 });
 export type GlsAr1Input = z.infer<typeof glsAr1Input>;
 

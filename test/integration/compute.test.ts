@@ -71,6 +71,7 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['residual-tests', 'fitdf', [{ fitdf: 1 }, { fitdf: 2 }]],
   ['residual-tests', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['gls-ar1', 'estimator', [{ estimator: 'reml' }, { estimator: 'prais-winsten' }]],
+  ['gls-ar1', 'estimator', [{ estimator: 'cochrane-orcutt' }, { estimator: 'ml' }]],
   ['gls-ar1', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['huber', 'k', [{ k: 0.8 }, { k: 1.1 }]],
   ['huber', 'intercept', [{ intercept: false }, { intercept: true }]],

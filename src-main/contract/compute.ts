@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { anchor, evidence, procedure, slopeCovariance, statement, tolerance } from './claim.ts';
+import { estimatorComparison } from './estimator-comparison.ts';
 import {
   column,
   glsAr1Input,
@@ -104,6 +105,7 @@ export const computeMethods = {
   recomputation: { input: claimComputation, value: recomputation },
   assumptions: { input: claimComputation, value: assumptionsAnswer },
   'claim-sweep': { input: claimSweepRequest, value: claimSweep },
+  estimators: { input: claimComputation, value: estimatorComparison },
 } as const;
 export type ComputeMethod = keyof typeof computeMethods;
 export type ComputeInput<Method extends ComputeMethod> = z.infer<(typeof computeMethods)[Method]['input']>;

@@ -11,6 +11,7 @@ import {
 } from './result.ts';
 import { claim, energyBudgetInputs, statementQuestion } from './claim.ts';
 import { conclusion, finding, mark, note, publishedValue, reviewer, signature, signatureCheck } from './finding.ts';
+import { estimatorComparison } from './estimator-comparison.ts';
 import { figure, stemFigure } from './figure.ts';
 import { longText, recordId, sha256, shortText, timestamp } from './primitives.ts';
 import { dataset, series } from './series.ts';
@@ -90,6 +91,7 @@ export const claimView = z.object({
   recomputation: stored(recomputation).nullable(),
   assumptions: stored(assumptionsAnswer).nullable(),
   sweep: stored(claimSweep).nullable(),
+  estimators: stored(estimatorComparison).nullable(),
   /** What stands in the way of a recomputation: a series not chosen, a unit not set. */
   obstacles: z.array(z.string()),
   marks: z.array(mark),
@@ -133,6 +135,7 @@ export const reportClaim = z.object({
   ledger: z.array(z.object({ outcome: assumptionOutcome, title: z.string(), mark: mark.nullable() })),
   ladder: assumptionsAnswer.shape.ladder,
   sweep: claimSweep.nullable(),
+  estimators: estimatorComparison.nullable(),
   conclusion: conclusion.nullable(),
   finding: finding.nullable(),
   findingText: z.string(),

@@ -28,6 +28,7 @@ export const requestNames = [
   'claim.recompute',
   'claim.testAssumptions',
   'claim.sweep',
+  'claim.compareEstimators',
   'claim.mark',
   'note.add',
   'note.remove',

@@ -110,6 +110,7 @@ export const requests = {
   'claim.recompute': { input: longWork, answer: claimView },
   'claim.testAssumptions': { input: longWork, answer: claimView },
   'claim.sweep': { input: longWork.extend({ minYears: z.int().min(3).max(1000) }), answer: claimView },
+  'claim.compareEstimators': { input: longWork, answer: claimView },
   'claim.mark': { input: onClaim.extend({ assumptionId, mark: markValue, note: longText }), answer: claimView },
 
   'note.add': { input: onClaim.extend({ text: z.string().trim().min(1).max(20_000) }), answer: claimView },

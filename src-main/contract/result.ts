@@ -292,7 +292,7 @@ export const derivationLine = z.object({
 export const derivationAnswer = z.object({ lines: z.array(derivationLine) });
 export type DerivationAnswer = z.infer<typeof derivationAnswer>;
 
-export const resultMethod = z.enum(['recomputation', 'assumptions', 'claim-sweep', 'derivation']);
+export const resultMethod = z.enum(['recomputation', 'assumptions', 'claim-sweep', 'estimators', 'derivation']);
 export type ResultMethod = z.infer<typeof resultMethod>;
 
 /** A stored computation: everything needed to run it again, and the digest of what came out. */

@@ -42,8 +42,9 @@ export function requestFor(project: Project, claim: Claim, method: ResultMethod,
     }),
   );
   const request = { method, statement, procedure, tolerance, seed, evidence, series };
-  // A recomputation stands on the statement, the procedure and its series alone: new evidence does not make it stale.
-  if (method === 'recomputation') return plain({ ...request, evidence: noEvidence, series: withoutForcing(series) });
+  // These stand on the statement, the procedure and its series alone: new evidence does not make them stale.
+  if (method === 'recomputation' || method === 'estimators')
+    return plain({ ...request, evidence: noEvidence, series: withoutForcing(series) });
   return plain(
     method === 'claim-sweep' ? { ...request, evidence: noEvidence, series: withoutForcing(series), minYears } : request,
   );
@@ -64,6 +65,7 @@ export function resolveRequest(project: Project, request: StoredRequest) {
     case 'derivation':
       return { method, input: derivationRequest.parse(input) } as const;
     case 'recomputation':
+    case 'estimators':
     case 'assumptions':
       return { method, input: claimComputation.parse({ ...input, series }) } as const;
     case 'claim-sweep':

@@ -29,6 +29,7 @@ export function claimView(project: Project, claimId: number): ClaimView {
     recomputation: stored('recomputation'),
     assumptions: stored('assumptions'),
     sweep: stored('claim-sweep'),
+    estimators: stored('estimators'),
   };
   const findings = own(project.list('finding'));
   const marks = own(project.list('mark'));

@@ -16,6 +16,7 @@ type Names =
   | 'claim.recompute'
   | 'claim.testAssumptions'
   | 'claim.sweep'
+  | 'claim.compareEstimators'
   | 'claim.mark'
   | 'note.add'
   | 'note.remove';
@@ -50,6 +51,8 @@ export const claimHandlers: Handlers<Names> = {
   'claim.recompute': ({ claimId, jobId }, context) => run(context, claimId, 'recomputation', { jobId }),
   'claim.testAssumptions': ({ claimId, jobId }, context) => run(context, claimId, 'assumptions', { jobId }),
   'claim.sweep': ({ claimId, jobId, minYears }, context) => run(context, claimId, 'claim-sweep', { jobId, minYears }),
+
+  'claim.compareEstimators': ({ claimId, jobId }, context) => run(context, claimId, 'estimators', { jobId }),
 
   'claim.mark'({ claimId, assumptionId, mark, note }, { workspace }) {
     const project = workspace.open();

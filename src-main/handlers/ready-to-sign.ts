@@ -40,7 +40,7 @@ function* wordProblems({ fillIns }: ClaimView, finding: Finding): Iterable<Probl
 }
 
 function* resultProblems(view: ClaimView, finding: Finding): Iterable<Problem> {
-  const stored = [view.derivation, view.recomputation, view.assumptions, view.sweep];
+  const stored = [view.derivation, view.recomputation, view.assumptions, view.sweep, view.estimators];
   const nStale = stored.filter((one) => one?.isStale).length;
   if (nStale > 0) {
     yield {

@@ -92,6 +92,7 @@ function reportClaim(project: Project, claimId: number): ReportClaim {
     })),
     ladder: assumptions?.answer.ladder ?? null,
     sweep: view.sweep?.answer ?? null,
+    estimators: view.estimators?.answer ?? null,
     conclusion: finding?.conclusion ?? null,
     finding,
     findingText: finding ? fillIn(finding.text, view.fillIns).text : '',

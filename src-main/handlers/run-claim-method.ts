@@ -11,6 +11,7 @@ const labels: Record<ResultMethod, { running: string; done: string }> = {
   derivation: { running: 'Checking the arithmetic', done: 'check arithmetic' },
   recomputation: { running: 'Recomputing', done: 'recompute' },
   assumptions: { running: 'Testing the assumptions', done: 'test assumptions' },
+  estimators: { running: 'Comparing the estimators', done: 'compare estimators' },
   'claim-sweep': { running: 'Sweeping the windows', done: 'sweep windows' },
 };
 

@@ -1,5 +1,6 @@
 import { testAssumptions } from '../assumptions/test-assumptions.ts';
 import { energyBudget } from '../climate/energy-budget.ts';
+import { compareEstimators } from '../climate/estimators/compare-estimators.ts';
 import { recompute } from '../climate/procedures/recompute.ts';
 import type { ComputeInput, ComputeMethod, ComputeValue } from '../contract/compute.ts';
 import { claimSweep } from '../robustness/claim-sweep.ts';
@@ -36,6 +37,7 @@ export const methods: Methods = {
   recomputation: (input) => recompute(input),
   assumptions: (input, onProgress) => testAssumptions(input, onProgress),
   'claim-sweep': (input, onProgress) => claimSweep(input, onProgress),
+  estimators: (input) => compareEstimators(input),
 };
 
 function theilSenAt95(input: ComputeInput<'theil-sen'>): ComputeValue<'theil-sen'> {

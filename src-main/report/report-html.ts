@@ -3,6 +3,7 @@ import { Html, html } from './html.ts';
 import { arithmeticPart } from './parts/arithmetic-part.ts';
 import { contentsPart } from './parts/contents-part.ts';
 import { dataPart } from './parts/data-part.ts';
+import { estimatorsPart } from './parts/estimators-part.ts';
 import { firstPage } from './parts/first-page.ts';
 import { ladderPart } from './parts/ladder-part.ts';
 import { ledgerPart } from './parts/ledger-part.ts';
@@ -57,9 +58,9 @@ function claimPart(claim: ReportClaim, report: Report): Html {
     <section class="page first" aria-label="Finding on claim ${id}">${firstPage(claim, report)}</section>
     <section class="page" aria-label="The check of claim ${id} in full">
       <p class="kicker">The check in full · claim ${id}</p>
-      ${statementPart(claim)} ${arithmeticPart(claim)} ${recomputationPart(claim)} ${ledgerPart(claim)}
-      ${ladderPart(claim)} ${windowsPart(claim)} ${publishedPart(claim)} ${dataPart(claim)} ${resultsPart(claim)}
-      ${notesPart(claim)} ${signaturesPart(claim)}
+      ${statementPart(claim)} ${arithmeticPart(claim)} ${recomputationPart(claim)} ${estimatorsPart(claim)}
+      ${ledgerPart(claim)} ${ladderPart(claim)} ${windowsPart(claim)} ${publishedPart(claim)} ${dataPart(claim)}
+      ${resultsPart(claim)} ${notesPart(claim)} ${signaturesPart(claim)}
     </section>
   </article>`;
 }

@@ -7,6 +7,7 @@ const methodNames = {
   recomputation: 'Recomputation',
   assumptions: 'Assumptions and ladder',
   'claim-sweep': 'Other windows',
+  estimators: 'Other estimators',
   derivation: 'Arithmetic',
 } as const;
 

@@ -2,6 +2,7 @@ import type { StemFigure, XyFigure } from '../../../src-main/contract/figure.ts'
 import { cautions } from '../../../src-main/contract/cautions.ts';
 import type { Report, ReportClaim } from '../../../src-main/contract/project.ts';
 import type { AssumptionOutcome, Recomputation } from '../../../src-main/contract/result.ts';
+import { inventedComparison } from '../../helpers/invented-comparison.ts';
 
 /** Everything here is invented: the coast, the port, the people, the talk, the series and the figures. */
 
@@ -378,6 +379,7 @@ export const inventedClaim: ReportClaim = {
     valueQuantiles: { min: 1.46, q05: 1.66, q50: 2.01, q95: 2.5, max: 2.84 },
     shareAtOrBelowStated: 0.23,
   },
+  estimators: inventedComparison,
   conclusion: 'not supported',
   finding: {
     id: 2,
@@ -631,6 +633,7 @@ export const untouchedClaim: ReportClaim = {
   ledger: [],
   ladder: null,
   sweep: null,
+  estimators: null,
   conclusion: null,
   finding: null,
   findingText: '',

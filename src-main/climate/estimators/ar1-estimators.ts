@@ -1,0 +1,57 @@
+import type { GlsAr1Input } from '../../contract/line-estimators.ts';
+import { ar1Line } from '../../statistics/ar1-line.ts';
+import { tInterval, tWords, type ComparedLine, type Estimator, type SlopeEstimate } from './estimator.ts';
+
+const model = 'e_t = ρ e_(t−1) + u_t';
+const errorWords = 'its error takes ρ for known';
+
+function ar1Slope(
+  { fit: { x, y }, intercept }: ComparedLine,
+  estimator: GlsAr1Input['estimator'],
+  words: string,
+): SlopeEstimate {
+  const line = ar1Line({ x, y, intercept, estimator });
+  const place = intercept ? 1 : 0;
+  const slope = line.coefficients[place] ?? NaN;
+  const standardError = line.standardErrors[place] ?? NaN;
+  const degreesOfFreedom = y.length - line.coefficients.length;
+  return {
+    slope,
+    standardError,
+    interval95: tInterval(slope, standardError, degreesOfFreedom),
+    convention: `${model}; ${words}; ${errorWords}; ${tWords(degreesOfFreedom)}`,
+    parameters: [
+      { symbol: 'ρ', value: line.rho },
+      { symbol: 'σ', value: line.sigma },
+    ],
+    caveats: line.caveats,
+  };
+}
+
+/** The line whose errors carry over a share ρ from year to year. */
+export const ar1Estimators: readonly Estimator[] = [
+  {
+    id: 'gls-ar1-ml',
+    label: 'AR(1) errors, maximum likelihood',
+    usesOrder: true,
+    estimate: (line) => ar1Slope(line, 'ml', 'exact normal likelihood of all rows at its highest point'),
+  },
+  {
+    id: 'gls-ar1-reml',
+    label: 'AR(1) errors, restricted likelihood',
+    usesOrder: true,
+    estimate: (line) =>
+      ar1Slope(line, 'reml', 'exact restricted normal likelihood (REML), which allows for the fitted coefficients'),
+  },
+  {
+    id: 'prais-winsten',
+    label: 'AR(1) errors, Prais–Winsten',
+    usesOrder: true,
+    estimate: (line) =>
+      ar1Slope(
+        line,
+        'prais-winsten',
+        'least squares on freed rows, the first kept, ρ = Σ e_t e_(t−1)/Σ e²_(t−1), repeated until ρ stands still',
+      ),
+  },
+];

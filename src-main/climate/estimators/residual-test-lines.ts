@@ -1,0 +1,46 @@
+import type { ResidualTest } from '../../contract/estimator-comparison.ts';
+import { residualTests } from '../../statistics/residual-tests.ts';
+import type { FittedLine } from '../procedures/fitted-line.ts';
+
+/**
+ * The tests of a line's residuals as lines of a table, each with its convention in words.
+ *
+ * @throws  as `residualTests`
+ *
+ * Checked  test/unit/climate/estimators/compare-estimators.test.ts (C: the figures are those of `residualTests`)
+ */
+export function residualTestLines({ fit: { x, y }, intercept, serialCovariance }: FittedLine): ResidualTest[] {
+  const nCoefficients = intercept ? 2 : 1;
+  const lags = Math.max(1, Math.min(serialCovariance.lag, y.length - nCoefficients - 1));
+  const { durbinWatson, breuschGodfrey, ljungBox, caveats } = residualTests({ x, y, intercept, lags });
+  const lagWords = lags === 1 ? 'one lag' : `${lags} lags`;
+  const bearing = (...codes: string[]) => caveats.filter(({ code }) => codes.includes(code));
+  return [
+    {
+      id: 'durbin-watson',
+      label: 'Durbin–Watson',
+      asks: 'neighbouring residuals are unrelated (about 2; towards 0 when they are alike)',
+      statistic: durbinWatson,
+      df: null,
+      p: null,
+      convention: 'Σ(e_t − e_(t−1))²/Σe_t², in order of year',
+      caveats: bearing('no-intercept'),
+    },
+    {
+      id: 'breusch-godfrey',
+      label: 'Breusch–Godfrey',
+      asks: `residuals are unrelated to those of up to ${lagWords} before`,
+      ...breuschGodfrey,
+      convention: `n R² of the residuals on the line’s own design and ${lagWords} of residuals, zero before the first; χ²`,
+      caveats: bearing('lags-against-length'),
+    },
+    {
+      id: 'ljung-box',
+      label: 'Ljung–Box',
+      asks: `the first ${lagWords} of autocorrelation are zero together`,
+      ...ljungBox,
+      convention: `n(n + 2) Σ r_j²/(n − j) over ${lagWords}, demeaned; χ²; made for raw series: Breusch–Godfrey knows the predictor`,
+      caveats: bearing('lags-against-length'),
+    },
+  ];
+}

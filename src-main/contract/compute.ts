@@ -24,7 +24,16 @@ import {
   windowSweep,
 } from './result.ts';
 import { seriesData } from './series.ts';
-import { adfInput, adfValue, kpssInput, kpssValue, residualTestsInput, residualTestsValue } from './series-tests.ts';
+import {
+  adfInput,
+  adfValue,
+  engleGrangerInput,
+  engleGrangerValue,
+  kpssInput,
+  kpssValue,
+  residualTestsInput,
+  residualTestsValue,
+} from './series-tests.ts';
 
 const covariance = z.object({
   kind: z.enum(['classical', 'hc0', 'hc1', 'hc2', 'hc3', 'newey-west']),
@@ -99,6 +108,7 @@ export const computeMethods = {
   york: { input: yorkInput, value: yorkValue },
   adf: { input: adfInput, value: adfValue },
   kpss: { input: kpssInput, value: kpssValue },
+  'engle-granger': { input: engleGrangerInput, value: engleGrangerValue },
   'window-sweep': { input: windowSweepRequest, value: windowSweep },
   'energy-budget': { input: energyBudgetRequest, value: energyBudgetAnswer },
   derivation: { input: derivationRequest, value: derivationAnswer },

@@ -41,6 +41,18 @@ export const adfValue = z.object({
   critical: z.object({ '1%': z.number(), '5%': z.number(), '10%': z.number() }),
 });
 
+export const engleGrangerInput = z.object({
+  y: column,
+  x: predictors,
+  lags,
+  deterministic: z.enum(['constant', 'trend']),
+});
+
+export const engleGrangerValue = adfValue.extend({
+  /** Series taken together, y among them. */
+  nSeries: z.int(),
+});
+
 export const kpssInput = z.object({ y: column, lags, deterministic: z.enum(['constant', 'trend']) });
 
 export const kpssValue = z.object({

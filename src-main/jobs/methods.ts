@@ -8,6 +8,7 @@ import { windowSweep } from '../robustness/window-sweep.ts';
 import { evaluateDerivation } from '../sources/derivation.ts';
 import { adf } from '../statistics/adf.ts';
 import { ar1Line } from '../statistics/ar1-line.ts';
+import { engleGranger } from '../statistics/engle-granger.ts';
 import { huber } from '../statistics/huber.ts';
 import { kpss } from '../statistics/kpss.ts';
 import { regression } from '../statistics/regression.ts';
@@ -31,6 +32,7 @@ export const methods: Methods = {
   york: ({ r = 0, ...input }) => york({ ...input, r }),
   adf: (input) => adf(input),
   kpss: (input) => kpss(input),
+  'engle-granger': (input) => engleGranger(input),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
   'energy-budget': (input, onProgress) => energyBudget(input, onProgress),
   derivation: ({ lines }) => evaluateDerivation(lines),

@@ -1,9 +1,7 @@
-import { refuseExactFit } from './exact-fit.ts';
-import { finiteNumber, finiteValues } from './finite-values.ts';
-import { leastSquares } from './least-squares.ts';
+import { dickeyFullerT } from './dickey-fuller-t.ts';
+import { finiteValues } from './finite-values.ts';
 import type { Deterministic } from './mackinnon-tables.ts';
 import { mackinnonCritical, mackinnonP, type CriticalValues } from './mackinnon.ts';
-import { sumOfProducts } from './summation.ts';
 
 export interface AdfRequest {
   y: ArrayLike<number>;
@@ -41,21 +39,6 @@ export interface AdfTest {
  */
 export function adf({ y, lags, deterministic }: AdfRequest): AdfTest {
   const series = finiteValues('adf', 'y', y, { atLeast: 6 });
-  const nDeterministic = { none: 0, constant: 1, trend: 2 }[deterministic];
-  const mostLags = Math.floor((series.length - nDeterministic - 3) / 2);
-  finiteNumber('adf', 'lags', lags, { isWhole: true, atLeast: 0, atMost: mostLags });
-
-  const differences = series.subarray(1).map((value, t) => value - series[t]!);
-  const response = differences.subarray(lags);
-  const nObs = response.length;
-  const level = series.subarray(lags, lags + nObs);
-  const lagged = Array.from({ length: lags }, (_, j) => differences.subarray(lags - j - 1, lags - j - 1 + nObs));
-  const terms = [response.map(() => 1), response.map((_, t) => t + 1)].slice(0, nDeterministic);
-  const fit = leastSquares({ columns: [level, ...lagged, ...terms], y: response, caller: 'adf' });
-
-  refuseExactFit('adf', fit.residualSumOfSquares, sumOfProducts(response, response));
-  const variance = fit.residualSumOfSquares / (nObs - fit.nCoefficients);
-  const standardError = Math.sqrt(variance * fit.unscaledCovariance[0]!);
-  const statistic = fit.coefficients[0]! / standardError;
+  const { statistic, nObs } = dickeyFullerT('adf', series, lags, deterministic);
   return { statistic, p: mackinnonP(statistic, deterministic), nObs, critical: mackinnonCritical(deterministic, nObs) };
 }

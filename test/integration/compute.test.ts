@@ -34,6 +34,7 @@ const valid = {
   york: { x, y, sx: 0.05, sy: 0.1 },
   adf: { y, lags: 1, deterministic: 'trend' },
   kpss: { y, lags: 2, deterministic: 'constant' },
+  'engle-granger': { x, y, lags: 1, deterministic: 'constant' },
 } as const;
 type Method = keyof typeof valid;
 const methods = Object.keys(valid) as Method[];
@@ -80,6 +81,8 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['york', 'r', [{ r: 0.4 }, { r: x.map((_, t) => -t / 40) }]],
   ['adf', 'lags', [{ lags: 0 }, { lags: 3 }]],
   ['adf', 'deterministic', [{ deterministic: 'none' }, { deterministic: 'constant' }]],
+  ['engle-granger', 'lags', [{ lags: 0 }, { lags: 3 }]],
+  ['engle-granger', 'deterministic', [{ x: y.toReversed() }, { x: y.toReversed(), deterministic: 'trend' }]],
   ['kpss', 'lags', [{ lags: 0 }, { lags: 4 }]],
   ['kpss', 'deterministic', [{ deterministic: 'trend' }, { deterministic: 'constant' }]],
 ];

@@ -21,3 +21,10 @@ kpss_statistic <- function(y, lags, deterministic) {
   kernel <- toeplitz(pmax(0, 1 - (0:(n - 1)) / (lags + 1)))
   list(statistic = sum(cumsum(e)^2) / n^2 / (as.numeric(e %*% kernel %*% e) / n))
 }
+
+# x: columns one after the other.
+engle_granger_statistic <- function(x, y, lags, deterministic) {
+  design <- matrix(x, nrow = length(y))
+  line <- if (deterministic == "trend") lm(y ~ design + seq_along(y)) else lm(y ~ design)
+  adf_statistic(as.vector(residuals(line)), lags, "none")
+}

@@ -1,6 +1,10 @@
+import { readFileSync } from 'node:fs';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { adf } from '../../../src-main/statistics/adf.ts';
+import { dickeyFullerT } from '../../../src-main/statistics/dickey-fuller-t.ts';
+import { engleGranger } from '../../../src-main/statistics/engle-granger.ts';
 import { kpss } from '../../../src-main/statistics/kpss.ts';
+import { criticalSurfaces, pValueSurfaces, type Deterministic } from '../../../src-main/statistics/mackinnon-tables.ts';
 import { mackinnonCritical, mackinnonP } from '../../../src-main/statistics/mackinnon.ts';
 import { expectClose } from '../../helpers/close.ts';
 import { startR, type RSession } from '../../helpers/r-session.ts';
@@ -33,6 +37,7 @@ describe('adf', () => {
           const { statistic, nObs, p, critical } = adf({ y, lags, deterministic });
           const fromR = await r.numbers('adf_statistic(y, lags, deterministic)', { y, lags, deterministic });
           expectClose({ statistic: [statistic], nObs: [nObs] }, fromR, near);
+          expect(dickeyFullerT('adf', Float64Array.from(y), lags, deterministic)).toEqual({ statistic, nObs });
           expect(p).toBe(mackinnonP(statistic, deterministic));
           expect(critical).toEqual(mackinnonCritical(deterministic, nObs));
         }
@@ -133,7 +138,99 @@ describe('kpss', () => {
   ] as const)('refuses %s', (_, request, sentence) => expect(() => kpss(request)).toThrow(sentence));
 });
 
+describe('engleGranger', () => {
+  // Level B: base R, beside this file; the distributions are held against their tables below.
+  it('base R: no lags, one, four; a constant, a trend; one predictor and two', async () => {
+    const { years, co2Ppm, temperatureK } = co2AndTemperature();
+    const logRatio = co2Ppm.map((value) => Math.log(value / 300));
+    const {
+      gdp = [],
+      year = [],
+      employed = [],
+    } = await r.numbers('list(gdp = longley$GNP, year = longley$Population, employed = longley$Employed)');
+    const cases = [
+      { x: [logRatio], y: temperatureK, most: 4 },
+      { x: [logRatio, years.map((value) => Math.sin(value))], y: temperatureK, most: 4 },
+      { x: [gdp, year], y: employed, most: 1 },
+    ];
+    for (const { x, y, most } of cases) {
+      for (const lags of [0, 1, most]) {
+        for (const deterministic of ['constant', 'trend'] as const) {
+          const test = engleGranger({ x, y, lags, deterministic });
+          const fromR = await r.numbers('engle_granger_statistic(x, y, lags, deterministic)', {
+            x: x.flat(),
+            y,
+            lags,
+            deterministic,
+          });
+          expectClose({ statistic: [test.statistic], nObs: [test.nObs] }, fromR, near);
+          expect(test.nSeries).toBe(x.length + 1);
+          expect(test.p).toBe(mackinnonP(test.statistic, deterministic, x.length + 1));
+          expect(test.critical).toEqual(mackinnonCritical(deterministic, test.nObs, x.length + 1));
+        }
+      }
+    }
+  });
+
+  it('does not know units and levels', () => {
+    const { co2Ppm: x, temperatureK: y } = co2AndTemperature();
+    const plain = engleGranger({ x, y, lags: 2, deterministic: 'trend' });
+    const moved = engleGranger({
+      x: x.map((value) => 0.1 * value - 30),
+      y: y.map((value) => 1.8 * value + 32),
+      lags: 2,
+      deterministic: 'trend',
+    });
+    expectClose(moved, plain, { ...near, rel: 1e-8 });
+  });
+
+  const years = Array.from({ length: 12 }, (_, t) => t);
+  const wiggle = years.map((t) => Math.sin(t * t));
+  const asked = { x: years, y: wiggle, lags: 0, deterministic: 'constant' } as const;
+  it.each([
+    ['an exact line', { ...asked, y: years.map((t) => 2 + 3 * t) }, 'engleGranger: expected residuals'],
+    ['a constant predictor', { ...asked, x: years.map(() => 4) }, 'a constant predictor'],
+    ['a trend beside a trend', { ...asked, deterministic: 'trend' as const }, 'none is a combination'],
+    ['more lags than the rows bear', { ...asked, lags: 5 }, 'engleGranger, lags'],
+    ['six predictors', { ...asked, x: [1, 2, 3, 4, 5, 6].map((k) => years.map((t) => t ** k)) }, 'at most 5 columns'],
+    [
+      'fewer rows than coefficients',
+      { ...asked, x: [1, 2, 3].map((k) => [1, 2, 3, 4, 5].map((t) => t ** k)), y: [1, 3, 2, 5, 4] },
+      'at least 6',
+    ],
+    ['a missing value', { ...asked, x: years.with(3, NaN) }, 'engleGranger, x[3]'],
+    ['mismatched lengths', { ...asked, x: years.slice(1) }, 'expected 12 values'],
+  ])('refuses %s', (_, request, sentence) => expect(() => engleGranger(request)).toThrow(sentence));
+});
+
 describe('MacKinnon’s surfaces', () => {
+  // Level A: the published coefficients, retyped beside this file apart from the source code.
+  const table = (name: string) =>
+    readFileSync(new URL(name, import.meta.url), 'utf8')
+      .trim()
+      .split('\n')
+      .filter((line) => !line.startsWith('#'))
+      .slice(1)
+      .map((line) => line.split(','));
+  const numbers = (cells: string[]) =>
+    cells.filter((cell) => cell !== '').map((cell) => (cell === 'inf' ? Infinity : Number(cell)));
+
+  it('coefficients of 2010 and 1994', () => {
+    const critical = table('mackinnon-2010.csv');
+    expect(critical).toHaveLength(3 * 13);
+    for (const [deterministic, nSeries, level, ...b] of critical) {
+      const surface = criticalSurfaces[deterministic as Deterministic][Number(nSeries) - 1];
+      expect(surface?.[level as '1%']).toEqual(numbers(b));
+    }
+    const pieces = table('mackinnon-1994.csv');
+    expect(pieces).toHaveLength(2 * 18);
+    for (const [deterministic, nSeries, piece, lowest, star, highest, ...c] of pieces) {
+      const surface = pValueSurfaces[deterministic as Deterministic][Number(nSeries) - 1];
+      expect([surface?.lowest, surface?.star, surface?.highest]).toEqual(numbers([lowest, star, highest].map(String)));
+      expect(surface?.[piece as 'small']).toEqual(numbers(c));
+    }
+  });
+
   // Level A: asymptotic values of MacKinnon 2010; at T = 100 and 50 computed independently from the same table; Stata's
   // egranger prints the last row for 200 observations.
   it('critical values', () => {

@@ -22,7 +22,8 @@ export interface LogRegressionSeries {
 /**
  * The two series of a log-regression as annual values on common years, in ppm and K.
  *
- * @throws InputError as {@link alignWindow} and `checkUnit`; `not-positive` for a CO2 value that has no logarithm
+ * @throws InputError as {@link alignWindow} and `checkUnit`; `not-positive` for a CO2 value that has no
+ *         logarithm; `constant-co2`
  */
 export function alignForLogRegression(
   computation: ClaimComputation,
@@ -47,6 +48,15 @@ export function alignForLogRegression(
       expected: 'a CO2 concentration above 0 ppm',
       received: String(co2Ppm[row]),
       hint: 'A mark for missing values may have been read as a value: import the file again with that mark.',
+    });
+  }
+  if (co2Ppm.length > 1 && co2Ppm.every((value) => value === co2Ppm[0])) {
+    throw new InputError({
+      code: 'constant-co2',
+      where: `series ${co2.name}`,
+      expected: 'CO2 that changes over the window',
+      received: `${co2Ppm[0]} ppm in every year`,
+      hint: 'Choose another CO2 series, or a longer window.',
     });
   }
   return { window, years, co2Ppm, temperatureK: temperatureValues.map((value) => value * kPerUnit), leftOut, caveats };

@@ -34,6 +34,7 @@ export function alignWindow(
       where: 'window',
       expected: 'a first year that is not after the last',
       received: formatYears(window),
+      hint: 'Put the earlier year first.',
     });
   }
   const annual = seriesList.map((series) => annualMeans(series, minMonths));

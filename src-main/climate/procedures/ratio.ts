@@ -16,7 +16,8 @@ import {
  *
  * Model    q = n/d; the interval of q has the quotients of the ends of the two rounding intervals as its ends
  *
- * @throws  InputError `not-a-number`; NumericError `zero-denominator` when the denominator may be zero within rounding
+ * @throws  InputError `not-a-number`; NumericError `zero-denominator` when the denominator may be zero within rounding,
+ *          `out-of-range` when the ratio or its interval is beyond the largest number
  *
  * Source   interval arithmetic on rounded numbers: common practice
  * Checked  test/unit/climate/procedures/ratio.test.ts (C: by hand)
@@ -34,6 +35,15 @@ export function ratio({ statement }: ClaimComputation, { numerator, denominator 
   }
   const value = statedValue(numerator.value) / statedValue(denominator.value);
   const computedInterval = quotientInterval(statedInterval(numerator.value), below);
+  if (![value, computedInterval.low, computedInterval.high].every(Number.isFinite)) {
+    throw new NumericError({
+      code: 'out-of-range',
+      where: 'procedure ratio',
+      expected: 'a ratio, rounding included, within the range of numbers',
+      received: `${numerator.value} over ${denominator.value}`,
+      hint: 'Give both numbers in units in which they are of ordinary size.',
+    });
+  }
   const { unit } = statement;
   const parts = [numerator, denominator].map((part) => withUnit(part.value.replace('-', '−'), part.unit)).join(' ÷ ');
   const [low, high] = [computedInterval.low, computedInterval.high].map((end) =>

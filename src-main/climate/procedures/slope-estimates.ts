@@ -1,6 +1,7 @@
 import type { SlopeCovariance } from '../../contract/claim.ts';
 import type { Caveat } from '../../contract/primitives.ts';
 import type { FitDiagnostics, Recomputation, RegressionAnswer } from '../../contract/result.ts';
+import { InputError } from '../../errors.ts';
 import { correlation } from '../../statistics/correlation.ts';
 import { effectiveSampleSize } from '../../statistics/effective-sample-size.ts';
 import { lagOneAutocorrelation } from '../../statistics/lag-one-autocorrelation.ts';
@@ -28,14 +29,15 @@ export interface LineOptions {
  * The slope of y on x with its error under the asked covariance and, for comparison, under classical errors and under
  * Newey–West errors (lag by the rule of thumb unless one is asked for), each with its convention in words.
  *
- * @param x, y  [nObs] in order of time
- * @throws  InputError and NumericError as `regression`
+ * @param x, y  [nObs] in order of time, at least three
+ * @throws  InputError too-few-years, lag-too-long, and as `regression`; NumericError as `regression`
  */
 export function slopeEstimates(
   x: readonly number[],
   y: readonly number[],
   { intercept, covariance }: LineOptions,
 ): SlopeEstimates {
+  checkLength(y.length, covariance);
   const neweyWest: SlopeCovariance = { kind: 'newey-west', lag: neweyWestLag(y.length), smallSample: false };
   const comparison: SlopeCovariance = covariance.kind === 'classical' ? neweyWest : { kind: 'classical' };
   const asked = regression({ x: [...x], y: [...y], intercept, covariance });
@@ -50,6 +52,28 @@ export function slopeEstimates(
     diagnostics,
     caveats: [...asked.caveats, ...autocorrelationCaveats(diagnostics, covariance)],
   };
+}
+
+/** Two years always lie on a line, and a lag must find years to look back to. */
+function checkLength(nYears: number, covariance: SlopeCovariance): void {
+  if (nYears < 3) {
+    throw new InputError({
+      code: 'too-few-years',
+      where: 'window',
+      expected: 'at least 3 years that all series have',
+      received: String(nYears),
+      hint: 'Choose a longer window, or a lower number of months for an annual mean.',
+    });
+  }
+  if (covariance.kind === 'newey-west' && covariance.lag >= nYears) {
+    throw new InputError({
+      code: 'lag-too-long',
+      where: 'covariance, lag',
+      expected: `a lag below the number of years, ${nYears}`,
+      received: String(covariance.lag),
+      hint: 'Choose a smaller lag or a longer window.',
+    });
+  }
 }
 
 function slopeOf(answer: RegressionAnswer, covariance: SlopeCovariance, hasIntercept: boolean): SlopeEstimate {

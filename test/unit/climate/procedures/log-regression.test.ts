@@ -139,8 +139,26 @@ describe('logRegression', () => {
     expect(codes(neweyWest)).not.toContain('autocorrelated-residuals');
   });
 
-  it('needs more rows than coefficients', () => {
-    expect(() => run({ window: { start: 1960, end: 1961 }, intercept: true })).toThrow(/more than 2 rows/);
+  it('needs three years, with and without an intercept', () => {
+    for (const intercept of [true, false]) {
+      for (const end of [1960, 1961]) {
+        expect(() => run({ window: { start: 1960, end }, intercept })).toThrow(/^window: expected at least 3 years/);
+      }
+      expect(run({ window: { start: 1960, end: 1962 }, intercept }).fit?.years).toHaveLength(3);
+    }
+  });
+
+  it('needs a lag that finds years to look back to', () => {
+    const run6 = (lag: number) =>
+      run({ window: { start: 1960, end: 1965 }, covariance: { kind: 'newey-west', lag, smallSample: false } });
+    expect(() => run6(6)).toThrow(/lag: expected a lag below the number of years, 6, but found 6/);
+    expect(run6(5).standardError).toBeGreaterThan(0);
+  });
+
+  it('needs CO2 that changes', () => {
+    const still = years.map(() => 316);
+    const given = { ...series, co2SeriesId: annualSeries('co2', 'co2', 'ppm', years, still) };
+    expect(() => run({}, {}, given)).toThrow(/CO2 that changes over the window, but found 316 ppm in every year/);
   });
 });
 

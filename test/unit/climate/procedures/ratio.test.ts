@@ -46,4 +46,13 @@ describe('ratio', () => {
     );
     expect(() => recompute(computationOf(procedure('3.7', '0'), {}, stated))).toThrow(/not zero/);
   });
+
+  it('refuses a ratio that no number can hold, its rounding included', () => {
+    for (const [n, d] of [
+      ['1e308', '1.0e-308'],
+      ['1.7e308', '1.0'],
+    ] as const) {
+      expect(() => recompute(computationOf(procedure(n, d), {}, stated))).toThrow(/within the range of numbers/);
+    }
+  });
 });

@@ -102,6 +102,7 @@ function checkedRecord({ years, x, co2Ppm, y, minYears, anchor, covariance }: Wi
       where: `${caller}, years[${row}]`,
       expected: `a year after ${before}`,
       received: String(year),
+      hint: 'Put the rows in order of time, each year once.',
     });
   });
   finiteNumber(caller, 'minYears', minYears, { isWhole: true, atLeast: 3 });

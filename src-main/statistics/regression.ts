@@ -32,7 +32,7 @@ import { upperTailF } from './upper-tail-f.ts';
  *           intercept, against zero without; log-likelihood of normal errors at σ² = RSS/n;
  *           AIC = −2 logL + 2k, BIC = −2 logL + k log n; Durbin–Watson of √w·e; Cook's distance with classical σ².
  *           null stands for what does not exist (exact fit, constant y, a row with leverage 1), with a caveat
- * @throws   InputError wrong-length, not-finite, too-few-observations, lag-missing, out-of-range;
+ * @throws   InputError wrong-length, not-finite, too-few-observations, lag-missing, option-unused, out-of-range;
  *           NumericError rank-deficient, ill-conditioned, leverage-of-one
  *
  * Differs  R's AIC and BIC count σ as a coefficient: larger by 2 and by log n. Without an intercept, R's and
@@ -126,6 +126,7 @@ function coefficientCovariance(
   return Array.from({ length: k }, (_, j) => [...flat.subarray(j * k, (j + 1) * k)]);
 
   function covarianceByKind(): Float64Array {
+    if (kind !== 'newey-west') refuseUnused({ kind, lag, smallSample });
     if (kind === 'classical') return fit.unscaledCovariance.map((value) => value * residualVariance);
     if (kind !== 'newey-west') return heteroskedasticCovariance(fit, kind);
     if (lag !== undefined) return neweyWest(fit, { lag, smallSample });
@@ -137,6 +138,19 @@ function coefficientCovariance(
       hint: 'A common rule of thumb is floor(4 (n/100)^(2/9)); state the lag beside the figure.',
     });
   }
+}
+
+/** Options of Newey–West errors would be passed over: whoever gives them takes the errors to allow for them. */
+function refuseUnused({ kind, lag, smallSample }: RegressionRequest['covariance']): void {
+  if (lag === undefined && !smallSample) return;
+  const option = lag === undefined ? 'smallSample' : 'lag';
+  throw new InputError({
+    code: 'option-unused',
+    where: `regression, covariance.${option}`,
+    expected: `none for ${kind} errors`,
+    received: String(lag ?? smallSample),
+    hint: 'Ask for newey-west, or leave it out.',
+  });
 }
 
 function normalLogLikelihood({ nObs, residualSumOfSquares, weights }: LeastSquaresFit): number {

@@ -106,6 +106,8 @@ describe('regression', () => {
       'regression, covariance.lag: expected a whole number of rows for newey-west',
     ],
     ['out-of-range', { covariance: { kind: 'newey-west', lag: 3 } }, 'lag'],
+    ['option-unused', { covariance: { kind: 'classical', lag: 0 } }, 'covariance.lag: expected none for classical'],
+    ['option-unused', { covariance: { kind: 'hc1', smallSample: true } }, 'covariance.smallSample: expected none'],
     ['not-finite', { y: [1, NaN, 6] }, 'regression, y[1]: expected a finite number, but found NaN'],
     ['not-finite', { x: [1, 2, Infinity] }, 'regression, x[2]'],
     ['not-finite', { weights: [1, 1, NaN] }, 'regression, weights[2]'],

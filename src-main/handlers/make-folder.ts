@@ -1,5 +1,5 @@
-import { mkdirSync } from 'node:fs';
 import { resolve } from 'node:path';
+import { makeFolders } from '../project/make-folders.ts';
 import { fileProblem } from './file-problem.ts';
 
 /**
@@ -10,7 +10,7 @@ import { fileProblem } from './file-problem.ts';
 export function makeFolder(path: string): string {
   const folder = resolve(path);
   try {
-    mkdirSync(folder, { recursive: true });
+    makeFolders(folder);
   } catch (error) {
     throw fileProblem('folder-not-made', folder, 'a folder that is there or can be made', error);
   }

@@ -55,7 +55,15 @@ function readStart(path: string, nBytes: number): Buffer {
       code: 'not-found',
       where: path,
       expected: 'a project file that can be read',
-      received: error instanceof Error ? error.message : String(error),
+      received: notFoundWords(error),
+      hint: 'Check the path.',
     });
   }
+}
+
+function notFoundWords(error: unknown): string {
+  const code = error instanceof Error && 'code' in error ? error.code : '';
+  if (code === 'ENOENT' || code === 'ENOTDIR') return 'no such file';
+  if (code === 'EISDIR') return 'a folder';
+  return error instanceof Error ? error.message : String(error);
 }

@@ -1,7 +1,7 @@
 import { existsSync, realpathSync, renameSync, rmSync } from 'node:fs';
 import { basename, dirname, join } from 'node:path';
 import Database from 'better-sqlite3';
-import { ProjectError } from '../errors.ts';
+import { InputError, ProjectError } from '../errors.ts';
 import { applicationId, schemaSql, schemaVersion } from './file-schema.ts';
 import { openLocked } from './open-project.ts';
 import { type Doing, Project } from './project.ts';
@@ -19,7 +19,7 @@ export interface NewProject extends Doing {
 /**
  * Creates a project file and opens it for writing. The file appears under its name only when it is complete.
  *
- * @throws ProjectError not-found (the folder), exists, in-use, not-writable
+ * @throws InputError exists; ProjectError not-found (the folder), in-use, not-writable
  */
 export function createProject(path: string, { holder, ...content }: NewProject): Project {
   const realPath = join(realFolder(path), basename(path));
@@ -73,8 +73,8 @@ function realFolder(path: string): string {
   }
 }
 
-function exists(path: string): ProjectError {
-  return new ProjectError({
+function exists(path: string): InputError {
+  return new InputError({
     code: 'exists',
     where: path,
     expected: 'a name that is free',

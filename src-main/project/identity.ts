@@ -8,12 +8,13 @@ import {
   scryptSync,
   sign,
 } from 'node:crypto';
-import { mkdirSync, readFileSync } from 'node:fs';
+import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { z } from 'zod';
 import type { Reviewer } from '../contract/finding.ts';
 import { InputError } from '../errors.ts';
 import { fingerprint } from './fingerprint.ts';
+import { makeFolders } from './make-folders.ts';
 import { writeFileAtomically } from './write-file-atomically.ts';
 
 /** A reviewer whose key has been unlocked. */
@@ -91,7 +92,7 @@ export function identityStore(folder: string): IdentityStore {
 
   function write(identity: IdentityFile): Reviewer {
     try {
-      mkdirSync(folder, { recursive: true, mode: 0o700 });
+      makeFolders(folder, 0o700);
       writeFileAtomically(path, JSON.stringify(identity, null, 2) + '\n');
     } catch (error) {
       throw unwritable(path, error);

@@ -231,7 +231,15 @@ function readOnly(path: string): ProjectError {
 }
 
 function cannotTakeBack(step: UndoStep | null, action: 'undo' | 'redo'): InputError {
-  if (!step) return misuse(`nothing-to-${action}`, `something to ${action}`, 'nothing');
+  if (!step) {
+    return new InputError({
+      code: `nothing-to-${action}`,
+      where: action,
+      expected: action === 'undo' ? 'a change to take back' : 'an undone change to do again',
+      received: 'nothing',
+      hint: action === 'undo' ? 'The trail goes back no further.' : 'A new change ends what could be done again.',
+    });
+  }
   return new InputError({
     code: `cannot-${action}`,
     where: `${action} “${step.words}”`,

@@ -100,7 +100,7 @@ export const claimView = z.object({
   signatures: z.array(signature),
   signatureChecks: z.array(signatureCheck),
   stem: stemFigure.nullable(),
-  figures: z.record(z.enum(['fit', 'residuals', 'sweep']), figure.nullable()),
+  figures: z.record(z.enum(['fit', 'residuals', 'lag', 'autocorrelation', 'quantiles', 'sweep']), figure.nullable()),
   /** What the assumptions in the ledger are called and how each is tested. */
   catalogue: z.array(catalogueEntry),
   /** Published ranges of quantities that this claim may be held against. */

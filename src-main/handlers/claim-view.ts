@@ -12,6 +12,7 @@ import { obstacles, requestDigest, requestFor } from './claim-request.ts';
 import { fillIns } from './fill-ins.ts';
 import { publishedBudget } from '../quantities/published-budget.ts';
 import { publishedForClaim } from './published-for-claim.ts';
+import { residualFigures } from './residual-figures.ts';
 import { sectionStates } from './section-states.ts';
 import { stemOf } from './stem-of.ts';
 import { latestAnswer } from './stored-results.ts';
@@ -52,6 +53,7 @@ export function claimView(project: Project, claimId: number): ClaimView {
     figures: {
       fit: recomputation && fitFigure(claim, recomputation, digests),
       residuals: recomputation && residualsFigure(claim, recomputation, digests),
+      ...residualFigures(claim, recomputation, digests),
       sweep: sweep && sweepFigure(claim, sweep, digests),
     },
     catalogue: [...catalogueEntries],

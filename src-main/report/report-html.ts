@@ -11,6 +11,7 @@ import { notesPart } from './parts/notes-part.ts';
 import { projectPart } from './parts/project-part.ts';
 import { publishedPart } from './parts/published-part.ts';
 import { recomputationPart } from './parts/recomputation-part.ts';
+import { residualsPart } from './parts/residuals-part.ts';
 import { resultsPart } from './parts/results-part.ts';
 import { signaturesPart } from './parts/signatures-part.ts';
 import { statementPart } from './parts/statement-part.ts';
@@ -59,8 +60,8 @@ function claimPart(claim: ReportClaim, report: Report): Html {
     <section class="page" aria-label="The check of claim ${id} in full">
       <p class="kicker">The check in full · claim ${id}</p>
       ${statementPart(claim)} ${arithmeticPart(claim)} ${recomputationPart(claim)} ${estimatorsPart(claim)}
-      ${ledgerPart(claim)} ${ladderPart(claim)} ${windowsPart(claim)} ${publishedPart(claim)} ${dataPart(claim)}
-      ${resultsPart(claim)} ${notesPart(claim)} ${signaturesPart(claim)}
+      ${residualsPart(claim)} ${ledgerPart(claim)} ${ladderPart(claim)} ${windowsPart(claim)} ${publishedPart(claim)}
+      ${dataPart(claim)} ${resultsPart(claim)} ${notesPart(claim)} ${signaturesPart(claim)}
     </section>
   </article>`;
 }

@@ -1,4 +1,5 @@
 import type { Figure } from '../../contract/figure.ts';
+import type { ReportClaim } from '../../contract/project.ts';
 import { figureDrawing } from '../../figures/figure-drawing.ts';
 import { printPalette } from '../../figures/palette.ts';
 import { svgText } from '../../figures/svg-text.ts';
@@ -7,9 +8,15 @@ import { Html, html, joined } from '../html.ts';
 
 const widthPx = 700;
 
-/** Figures of the window sweep stand with its quantiles; all others with the recomputation. */
-export function isWindowsFigure({ name }: Figure): boolean {
-  return name.endsWith('-windows');
+type Place = 'recomputation' | 'residuals' | 'windows';
+
+/** The figures of one part of the check: of the window sweep, of the residuals beside something, or all others. */
+export function figuresOf({ figures }: ReportClaim, place: Place): Figure[] {
+  return figures.filter(({ name }) => placeOf(name) === place);
+}
+
+function placeOf(name: string): Place {
+  return name.endsWith('-windows') ? 'windows' : name.includes('-residual-') ? 'residuals' : 'recomputation';
 }
 
 /** A figure with what it shows and the digests of its data. */

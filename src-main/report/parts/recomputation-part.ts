@@ -10,7 +10,7 @@ import {
 import { quantityNames } from '../../quantities/quantity-names.ts';
 import { facts, html, nothing, table, type Html, type HtmlValue } from '../html.ts';
 import { caveatsPart } from './caveats-part.ts';
-import { figurePart, isWindowsFigure } from './figure-part.ts';
+import { figurePart, figuresOf } from './figure-part.ts';
 import { procedureWords } from './procedure-words.ts';
 
 type Fit = NonNullable<Recomputation['fit']>;
@@ -45,7 +45,7 @@ export function recomputationPart(claim: ReportClaim): Html {
     ])}
     ${fit ? fitPart(fit, claim.claim.procedure?.kind === 'trend' ? 'K per year' : 'K per e-folding') : nothing('This procedure has no regression, so there are no diagnostics of a fit.')}
     ${caveatsPart([...recomputation.caveats, ...(fit?.regression.caveats ?? [])])}
-    ${claim.figures.filter((figure) => !isWindowsFigure(figure)).map(figurePart)}`;
+    ${figuresOf(claim, 'recomputation').map(figurePart)}`;
 }
 
 function fitPart(fit: Fit, slopeUnit: string): HtmlValue {

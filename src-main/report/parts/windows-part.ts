@@ -2,11 +2,11 @@ import type { ReportClaim } from '../../contract/project.ts';
 import { formatNumber, formatQuantity, formatShare, formatYears } from '../../quantities/notation.ts';
 import { html, nothing, table, type Html, type HtmlValue } from '../html.ts';
 import { caveatsPart } from './caveats-part.ts';
-import { figurePart, isWindowsFigure } from './figure-part.ts';
+import { figurePart, figuresOf } from './figure-part.ts';
 
 /** The same procedure over every start and end year. */
 export function windowsPart(claim: ReportClaim): Html {
-  const figures = claim.figures.filter(isWindowsFigure).map(figurePart);
+  const figures = figuresOf(claim, 'windows').map(figurePart);
   return html`<h2>Other windows</h2>
     ${content(claim.sweep)}${figures}`;
 }

@@ -22,6 +22,6 @@ export function fileProblem(code: string, path: string, expected: string, error:
     where: path,
     expected,
     received: words ? `${words} (${system})` : message,
-    hint: 'Choose another place, or put this one right.',
+    hint: 'Check the path; choose another, or put this one right.',
   });
 }

@@ -7,6 +7,7 @@ import { checkInput } from '../../handlers/check-input.ts';
 import { ledgerLines, recomputationLines, sweepLines } from './claim-text.ts';
 import { badUsage, claimNumber, claimOption, CommandFailure, wholeNumber } from './command.ts';
 import type { Command, CommandTools } from './command.ts';
+import { estimatorsLines } from './estimators-text.ts';
 
 export const claimCommands: Command[] = [
   {
@@ -36,6 +37,7 @@ export const claimCommands: Command[] = [
         const view = await recompute(tools, await claimNumber(args, tools));
         return { json: recomputationJson(view), lines: recomputationLines(view) };
       }
+      if (claims.length === 0) return { json: [], lines: ['No claims yet. footing claim FILE CLAIM.json adds one.'] };
       const done = [];
       for (const { id, title } of claims) done.push({ id, title, ...(await attempt(() => recompute(tools, id))) });
       return {
@@ -68,10 +70,23 @@ export const claimCommands: Command[] = [
     nPositionals: { min: 1, max: 1 },
     options: { ...claimOption, 'min-years': { value: 'N', help: 'shortest window; 20 unless given' } },
     async run(args, tools) {
-      const minYears = wholeNumber(args, 'min-years', 'a whole number of years, at least 3') ?? 20;
+      const minYears = wholeNumber(args, 'min-years', { atLeast: 3, atMost: 1000 }) ?? 20;
       await tools.ask('project.open', { path: args.positionals[0] ?? '' });
       const view = await tools.ask('claim.sweep', { claimId: await claimNumber(args, tools), minYears });
       return { json: view.sweep?.answer ?? null, lines: sweepLines(view) };
+    },
+  },
+  {
+    name: 'estimators',
+    usage: 'FILE',
+    summary: 'the number under other estimators, each with its convention, and tests of the residuals',
+    examples: ['estimators review.footing --claim 2', 'estimators review.footing --claim 2 --json'],
+    nPositionals: { min: 1, max: 1 },
+    options: claimOption,
+    async run(args, tools) {
+      await tools.ask('project.open', { path: args.positionals[0] ?? '' });
+      const view = await tools.ask('claim.compareEstimators', { claimId: await claimNumber(args, tools) });
+      return { json: view.estimators?.answer ?? null, lines: estimatorsLines(view) };
     },
   },
   {

@@ -16,7 +16,7 @@ export interface Streams {
   environment: Record<string, string | undefined>;
 }
 
-const maxFileMiB = 64;
+const maxMebibytes = 64;
 
 export function commandTools(core: CommandCore, streams: Streams): CommandTools {
   return {
@@ -47,14 +47,19 @@ export function commandTools(core: CommandCore, streams: Streams): CommandTools 
 }
 
 function readFile(path: string): Buffer {
-  const expected = `a file of at most ${maxFileMiB} MiB`;
+  const mebibytes = reading(path, () => statSync(path).size) / 2 ** 20;
+  if (mebibytes > maxMebibytes) {
+    const found = `${Math.ceil(mebibytes)} MiB`;
+    throw badUsage(path, `a file of at most ${maxMebibytes} MiB`, found, 'Cut it to the part that is needed.');
+  }
+  return reading(path, () => readFileSync(path));
+}
+
+function reading<Value>(path: string, read: () => Value): Value {
   try {
-    const { size } = statSync(path);
-    if (size <= maxFileMiB * 2 ** 20) return readFileSync(path);
-    throw badUsage(path, expected, `${Math.ceil(size / 2 ** 20)} MiB`, 'Cut it to the part that is needed.');
+    return read();
   } catch (error) {
-    if (error instanceof Error && 'syscall' in error) throw fileProblem('file-unreadable', path, expected, error);
-    throw error;
+    throw fileProblem('file-unreadable', path, 'a file that can be read', error);
   }
 }
 

@@ -67,7 +67,7 @@ export class CommandFailure extends Error {
 }
 
 export function badUsage(where: string, expected: string, received: string, hint = ''): InputError {
-  return new InputError({ code: 'usage', where, expected, received, hint });
+  return new InputError({ code: 'usage', where, expected, received: received || 'nothing', hint });
 }
 
 /** The value of an option that names one of a few things; undefined when it is not given. */
@@ -82,12 +82,17 @@ export function oneOf<Value extends string>(
   throw badUsage(`--${name}`, `one of ${values.join(', ')}`, given);
 }
 
-/** The value of an option that is a whole number above zero; undefined when it is not given. */
-export function wholeNumber(args: CommandArguments, name: string, expected: string): number | undefined {
+/** The value of an option that is a whole number; undefined when it is not given. */
+export function wholeNumber(
+  args: CommandArguments,
+  name: string,
+  { atLeast = 1, atMost = 999_999_999, expected }: { atLeast?: number; atMost?: number; expected?: string } = {},
+): number | undefined {
   const given = args.option(name);
   if (given === undefined) return undefined;
-  if (/^[1-9]\d{0,8}$/.test(given)) return Number(given);
-  throw badUsage(`--${name}`, expected, given === '' ? 'nothing' : given);
+  const number = Number(given);
+  if (/^\d+$/.test(given) && number >= atLeast && number <= atMost) return number;
+  throw badUsage(`--${name}`, expected ?? `a whole number from ${atLeast} to ${atMost}`, given);
 }
 
 /** The number of a claim of the open project; the only claim when none is named. */
@@ -95,7 +100,7 @@ export async function claimNumber(args: CommandArguments, tools: CommandTools): 
   const { claims } = await tools.ask('project.view', {});
   const numbers = claims.map(({ id }) => id);
   const list = numbers.join(', ');
-  const given = wholeNumber(args, 'claim', `the number of a claim (${list || 'there is none yet'})`);
+  const given = wholeNumber(args, 'claim', { expected: `the number of a claim (${list || 'there is none yet'})` });
   const [only, ...others] = numbers;
   const chosen = given ?? (others.length === 0 ? only : undefined);
   if (chosen !== undefined && numbers.includes(chosen)) return chosen;

@@ -15,7 +15,7 @@ export const projectCommands: Command[] = [
     async run({ positionals: [path = ''], option }, tools) {
       const view = await tools.ask('project.create', {
         path,
-        title: option('title') ?? path.replace(/^.*[\\/]|\.footing$/g, ''),
+        title: option('title') ?? path.replace(/^.*[\\/]|\.footing$/g, '').slice(0, 200),
       });
       return {
         json: view,
@@ -107,7 +107,7 @@ export const projectCommands: Command[] = [
     nPositionals: { min: 1, max: 1 },
     options: { limit: { value: 'N', help: 'how many of the newest entries; 50 unless given' } },
     async run(args, tools) {
-      const limit = wholeNumber(args, 'limit', 'a number from 1 to 500') ?? 50;
+      const limit = wholeNumber(args, 'limit', { atMost: 500 }) ?? 50;
       await open(tools, args.positionals[0] ?? '', true);
       const { lines: entries } = await tools.ask('trail.list', { limit });
       const rows = entries.map((line) => [

@@ -10,6 +10,7 @@ export const estimatorId = z.enum([
   'gls-ar1-ml',
   'gls-ar1-reml',
   'prais-winsten',
+  'cochrane-orcutt',
   'theil-sen',
   'huber',
   'york',

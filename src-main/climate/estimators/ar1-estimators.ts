@@ -4,6 +4,7 @@ import { tInterval, tWords, type ComparedLine, type Estimator, type SlopeEstimat
 
 const model = 'e_t = ρ e_(t−1) + u_t';
 const errorWords = 'its error takes ρ for known';
+const shareWords = 'ρ = Σ e_t e_(t−1)/Σ e²_(t−1), repeated until ρ stands still';
 
 function ar1Slope(
   { fit: { x, y }, intercept }: ComparedLine,
@@ -14,7 +15,8 @@ function ar1Slope(
   const place = intercept ? 1 : 0;
   const slope = line.coefficients[place] ?? NaN;
   const standardError = line.standardErrors[place] ?? NaN;
-  const degreesOfFreedom = y.length - line.coefficients.length;
+  const nRows = estimator === 'cochrane-orcutt' ? y.length - 1 : y.length;
+  const degreesOfFreedom = nRows - line.coefficients.length;
   return {
     slope,
     standardError,
@@ -48,10 +50,13 @@ export const ar1Estimators: readonly Estimator[] = [
     label: 'AR(1) errors, Prais–Winsten',
     usesOrder: true,
     estimate: (line) =>
-      ar1Slope(
-        line,
-        'prais-winsten',
-        'least squares on freed rows, the first kept, ρ = Σ e_t e_(t−1)/Σ e²_(t−1), repeated until ρ stands still',
-      ),
+      ar1Slope(line, 'prais-winsten', `least squares on rows freed from ρ, the first kept; ${shareWords}`),
+  },
+  {
+    id: 'cochrane-orcutt',
+    label: 'AR(1) errors, Cochrane–Orcutt',
+    usesOrder: true,
+    estimate: (line) =>
+      ar1Slope(line, 'cochrane-orcutt', `least squares on rows freed from ρ, the first left out; ${shareWords}`),
   },
 ];

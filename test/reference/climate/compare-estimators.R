@@ -1,5 +1,6 @@
 # The slope under each estimator and its 95 % interval, in base R: lm, and the functions beside the tests of the single
-# estimators (gls-ar1.R, prais-winsten.R, huber.R, theil-sen.R). Everything is in the slope's own unit.
+# estimators (gls-ar1.R, prais-winsten.R, cochrane-orcutt.R,
+# huber.R, theil-sen.R). Everything is in the slope's own unit.
 slope_of <- function(estimate, se, df) c(estimate, se, estimate - qt(0.975, df) * se, estimate + qt(0.975, df) * se)
 
 estimators_in_r <- function(x, y, intercept, lag, small) {
@@ -20,6 +21,7 @@ estimators_in_r <- function(x, y, intercept, lag, small) {
     c(slope_of(best$coefficients[place], best$standardErrors[place], df), best$rho)
   }
   pw <- prais_winsten(x, y, intercept)
+  co <- cochrane_orcutt(x, y, intercept)
   robust <- huber_fit(x, y, 1, intercept, 1.345)
   sen <- theil_sen(x, y, 0.95)
   list(
@@ -30,6 +32,7 @@ estimators_in_r <- function(x, y, intercept, lag, small) {
     `gls-ar1-ml` = ar1(FALSE),
     `gls-ar1-reml` = ar1(TRUE),
     `prais-winsten` = c(slope_of(pw$coefficients[place], pw$standardErrors[place], df), pw$rho),
+    `cochrane-orcutt` = c(slope_of(co$coefficients[place], co$standardErrors[place], df - 1), co$rho),
     huber = c(slope_of(robust$coefficients[place], robust$standardErrors[place], df), robust$scale),
     `theil-sen` = c(sen$slope, sen$confidence)
   )

@@ -14,7 +14,7 @@ let r: RSession;
 let test: TestCore;
 beforeAll(async () => {
   const beside = (name: string) => new URL(name, import.meta.url);
-  const statistics = ['gls-ar1.R', 'prais-winsten.R', 'huber.R', 'theil-sen.R'];
+  const statistics = ['gls-ar1.R', 'prais-winsten.R', 'cochrane-orcutt.R', 'huber.R', 'theil-sen.R'];
   r = await startR(beside('compare-estimators.R'), ...statistics.map((name) => beside(`../statistics/${name}`)));
   test = await testCore();
   await test.ask('project.create', { title: 'Real record' });

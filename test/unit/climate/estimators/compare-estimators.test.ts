@@ -105,7 +105,7 @@ describe('compareEstimators', () => {
     const { notComputed, estimates } = compareEstimators(logRegressionClaim(record));
     expect(notComputed.map(({ ids }) => ids)).toEqual([['york', 'york-scaled']]);
     expect(notComputed[0]?.reason).toContain('series air: expected annual values with limits');
-    expect(estimates).toHaveLength(9);
+    expect(estimates).toHaveLength(10);
   });
 
   it('has neither likelihoods nor tests for an exact line, and says so', () => {
@@ -147,7 +147,13 @@ describe('compareEstimators', () => {
     expect(gaps).toMatchObject({ years: [1970, 1971], usesCalendarDistance: false });
     expect(gaps.sentence).toContain('Calendar distance is not used');
     const warned = estimates.filter(({ caveats }) => caveats.some(({ code }) => code === 'gap-in-window'));
-    expect(warned.map(({ id }) => id)).toEqual(['ols-newey-west', 'gls-ar1-ml', 'gls-ar1-reml', 'prais-winsten']);
+    expect(warned.map(({ id }) => id)).toEqual([
+      'ols-newey-west',
+      'gls-ar1-ml',
+      'gls-ar1-reml',
+      'prais-winsten',
+      'cochrane-orcutt',
+    ]);
     expect(tests.every(({ caveats }) => caveats.some(({ code }) => code === 'gap-in-window'))).toBe(true);
     expect(compareEstimators(logRegressionClaim(record)).gaps).toMatchObject({ years: [] });
   });

@@ -8,6 +8,7 @@ const results = {
   'claim.recompute': 'recomputation',
   'claim.testAssumptions': 'assumptions',
   'claim.sweep': 'sweep',
+  'claim.compareEstimators': 'estimators',
 } as const;
 type LongWork = keyof typeof results;
 

@@ -7,6 +7,9 @@ export interface TextFile {
   notes: readonly string[];
 }
 
+/** Twenty thousand years by month, and room for a header: no series of years or months is longer. */
+const maxLines = 300_000;
+
 /** First bytes of files that are no text, with what they are. */
 const signatures: readonly { bytes: readonly number[]; kind: string; hint: string }[] = [
   {
@@ -41,7 +44,7 @@ const signatures: readonly { bytes: readonly number[]; kind: string; hint: strin
  * Bytes as lines of text: UTF-8 with or without byte order mark, UTF-16 with one, else Windows-1252 (of which Latin-1's
  * printable characters are a part). Lines end with LF, CRLF or CR.
  *
- * @throws InputError `empty-file`, `not-text` or `web-page`
+ * @throws InputError `empty-file`, `not-text`, `web-page` or `too-many-lines`
  */
 export function decodeText(fileName: string, bytes: Uint8Array): TextFile {
   if (bytes.length === 0) {
@@ -69,6 +72,15 @@ export function decodeText(fileName: string, bytes: Uint8Array): TextFile {
   }
   const lines = text.split(/\r\n|\n|\r/);
   if (lines.at(-1) === '') lines.pop();
+  if (lines.length > maxLines) {
+    throw new InputError({
+      code: 'too-many-lines',
+      where: fileName,
+      expected: `at most ${maxLines} lines: a row for each year or month`,
+      received: String(lines.length),
+      hint: 'Average hourly or daily values to months first; cut a file of many stations or grid cells to one series.',
+    });
+  }
   return { fileName, lines, notes };
 }
 

@@ -82,6 +82,11 @@ describe('decodeText', () => {
     expect(decodeText('f', bytesOf('[invented] level\n1990 1\n')).lines).toHaveLength(2);
   });
 
+  it('refuses a file of more lines than any series of months has', () => {
+    expect(errorOf('1990 1\n'.repeat(300_001)).fields).toMatchObject({ code: 'too-many-lines', received: '300001' });
+    expect(decodeText('f', bytesOf('1990 1\n'.repeat(300_000))).lines).toHaveLength(300_000);
+  });
+
   it('refuses a saved web page', () => {
     expect(errorOf('<!DOCTYPE html><html><body>Data</body></html>').fields.code).toBe('web-page');
   });

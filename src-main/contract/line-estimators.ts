@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { caveat } from './primitives.ts';
+import { caveat, year } from './primitives.ts';
 
 /** One value for each row, in order of time where the method asks for an order. */
 export const column = z.array(z.number()).min(1).max(1_000_000);
@@ -29,6 +29,30 @@ export const glsAr1Value = line.extend({
   caveats,
 });
 export type GlsAr1Value = z.infer<typeof glsAr1Value>;
+
+/** Years of the rows, for a method that can say what a gap does to it, or predict across one. */
+export const rowYears = z.array(year).min(1).max(1_000_000);
+
+export const glsArma11Input = z.object({
+  x: predictors,
+  y: column,
+  intercept: z.boolean(),
+  estimator: z.literal('ml'),
+  /** Years without a row are predicted across; without `years` the rows are taken as consecutive. */
+  years: rowYears.optional(),
+});
+export type GlsArma11Input = z.infer<typeof glsArma11Input>;
+
+export const glsArma11Value = line.extend({
+  /** Of the error one step before. */
+  phi: z.number(),
+  /** Of the innovation one step before; the sign is that of e_t = φ e_(t−1) + u_t + θ u_(t−1). */
+  theta: z.number(),
+  /** Standard deviation of the innovations: √(RSS* /n). */
+  sigma: z.number(),
+  logLikelihood: z.number(),
+  caveats,
+});
 
 export const theilSenInput = z.object({ x: column, y: column });
 

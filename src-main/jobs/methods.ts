@@ -9,6 +9,7 @@ import { evaluateDerivation } from '../sources/derivation.ts';
 import { adf } from '../statistics/adf.ts';
 import { ar1Line } from '../statistics/ar1-line.ts';
 import { engleGranger } from '../statistics/engle-granger.ts';
+import { glsArma11 } from '../statistics/gls-arma11.ts';
 import { huber } from '../statistics/huber.ts';
 import { kpss } from '../statistics/kpss.ts';
 import { regression } from '../statistics/regression.ts';
@@ -27,6 +28,7 @@ export const methods: Methods = {
   regression: (input) => regression(input),
   'residual-tests': (input) => residualTests(input),
   'gls-ar1': (input) => ar1Line(input),
+  'gls-arma11': (input) => glsArma11(input),
   'theil-sen': (input) => theilSenAt95(input),
   huber: (input) => huber(input),
   york: ({ r = 0, ...input }) => york({ ...input, r }),

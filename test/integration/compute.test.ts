@@ -11,6 +11,7 @@ const y = x.map((value, t) =>
 );
 const same = <Value>(value: Value, length = x.length): Value[] => Array.from({ length }, () => value);
 const without = (at: number) => y.map((value, t) => (t === at ? null : value));
+const withGapAt = (at: number) => x.map((_, t) => 1960 + t + (t < at ? 0 : 2));
 const onALine = x.map((value) => 2 * value);
 
 let test: TestCore;
@@ -29,6 +30,7 @@ async function compute(method: string, input: object): Promise<{ value?: unknown
 const valid = {
   'residual-tests': { x, y, intercept: true, lags: 3 },
   'gls-ar1': { x, y, intercept: true, estimator: 'ml' },
+  'gls-arma11': { x, y, intercept: true, estimator: 'ml' },
   'theil-sen': { x, y },
   huber: { x, y, intercept: true, k: 1.345 },
   york: { x, y, sx: 0.05, sy: 0.1 },
@@ -74,6 +76,8 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['gls-ar1', 'estimator', [{ estimator: 'reml' }, { estimator: 'prais-winsten' }]],
   ['gls-ar1', 'estimator', [{ estimator: 'cochrane-orcutt' }, { estimator: 'ml' }]],
   ['gls-ar1', 'intercept', [{ intercept: false }, { intercept: true }]],
+  ['gls-arma11', 'intercept', [{ intercept: false }, { intercept: true }]],
+  ['gls-arma11', 'years', [{ years: withGapAt(5) }, { years: withGapAt(15) }]],
   ['huber', 'k', [{ k: 0.8 }, { k: 1.1 }]],
   ['huber', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['york', 'sx', [{ sx: 0.2 }, { sx: x.map((_, t) => 0.1 + t / 100) }]],
@@ -93,7 +97,7 @@ it.each(parameters)('compute %s uses %s', async (method, _, [one, other]) => {
   expect(answers[0]?.value).not.toEqual(answers[1]?.value);
 });
 
-const line = ['residual-tests', 'gls-ar1', 'huber'] as const;
+const line = ['residual-tests', 'gls-ar1', 'gls-arma11', 'huber'] as const;
 const short = { x: [1, 2], y: [1, 3] };
 const bad: [Method, string, object, Partial<ErrorAnswer>][] = [
   ...line.map((method): [Method, string, object, Partial<ErrorAnswer>] => [

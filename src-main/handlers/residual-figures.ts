@@ -60,9 +60,9 @@ function autocorrelationPlot({ years, leftOut, window, regression: { residuals }
   const hasGap = leftOut.some(({ year }) => year > window.start && year < window.end);
   return {
     title: 'Autocorrelation of the residuals',
-    caption: `Likeness of residuals k years apart. Of unrelated residuals 95 % lie within ±1.96/√n = ±${formatNumber(bound, { decimals: 2 })}, one lag at a time.${hasGap ? ' Years apart are those of the calendar; pairs with a missing year are left out.' : ''}`,
-    xLabel: 'Years apart, k',
-    yLabel: 'Autocorrelation r_k',
+    caption: `Likeness of residuals some years apart. Of unrelated residuals 95 % lie within ±1.96/√n = ±${formatNumber(bound, { decimals: 2 })}, one lag at a time.${hasGap ? ' Years apart are those of the calendar; pairs with a missing year are left out.' : ''}`,
+    xLabel: 'Years apart',
+    yLabel: 'Autocorrelation',
     marks: [
       {
         label: '±1.96/√n',
@@ -72,7 +72,14 @@ function autocorrelationPlot({ years, leftOut, window, regression: { residuals }
         y2: lags.map(() => bound),
         role: 'data',
       },
-      { label: 'r_k', mark: 'points', x: lags, y: autocorrelations(residuals, years, maxLag), y2: null, role: 'data' },
+      {
+        label: 'residuals',
+        mark: 'points',
+        x: lags,
+        y: autocorrelations(residuals, years, maxLag),
+        y2: null,
+        role: 'data',
+      },
     ],
   };
 }
@@ -83,13 +90,13 @@ function quantilePlot({ regression: { residuals } }: Fit): Drawn {
   return {
     title: 'Residuals beside a normal sample',
     caption:
-      'Residuals by size against standard normal quantiles. Points along the line mean errors close to normal; ends that leave it mean more, or fewer, large residuals.',
+      'Residuals by size against standard normal quantiles. Points along the line mean errors close to normal; ends that leave it mean more, or fewer, large ones. The line goes through the quartiles.',
     xLabel: 'Standard normal quantile',
     yLabel: 'Residual (K)',
     marks: [
       { label: 'years', mark: 'points', x: normal, y: values, y2: null, role: 'data' },
       {
-        label: 'through the quartiles',
+        label: 'quartile line',
         mark: 'line',
         x: ends,
         y: ends.map((end) => line.intercept + line.slope * end),

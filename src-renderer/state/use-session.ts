@@ -75,6 +75,7 @@ export function createSession(): SessionStore {
     'claim.recompute': refresh,
     'claim.testAssumptions': refresh,
     'claim.sweep': refresh,
+    'claim.compareEstimators': refresh,
     'claim.mark': refresh,
     'note.add': refresh,
     'note.remove': refresh,

@@ -100,7 +100,7 @@ describe('the comparison of estimators of a claim', () => {
     await compare();
     const { report, html } = await test.ask('report.render', {});
     expect(report.claims[0]?.estimators?.estimates.map(({ id }) => id)).toContain('gls-ar1-reml');
-    expect(html).toContain('AR(1) errors, Prais–Winsten');
+    expect(html).toContain('AR(1), Prais–Winsten');
     expect(html).toContain('Calendar distance is not used');
   });
 

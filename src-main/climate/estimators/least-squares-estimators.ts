@@ -30,13 +30,13 @@ const classical = covarianceWords({ kind: 'classical' });
 export const leastSquaresEstimators: readonly Estimator[] = [
   {
     id: 'ols-classical',
-    label: 'Least squares, classical errors',
+    label: 'Least squares, classical',
     usesOrder: false,
     estimate: (line) => leastSquaresSlope(line, line.intercept, { kind: 'classical' }, classical),
   },
   {
     id: 'ols-hc3',
-    label: 'Least squares, HC3 errors',
+    label: 'Least squares, HC3',
     usesOrder: false,
     estimate: (line) =>
       leastSquaresSlope(
@@ -48,7 +48,7 @@ export const leastSquaresEstimators: readonly Estimator[] = [
   },
   {
     id: 'ols-newey-west',
-    label: 'Least squares, Newey–West errors',
+    label: 'Least squares, Newey–West',
     usesOrder: true,
     estimate(line) {
       const { procedure, serialCovariance } = line;

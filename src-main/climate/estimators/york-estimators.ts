@@ -54,7 +54,7 @@ function yorkLine(line: ComparedLine) {
 export const yorkEstimators: readonly Estimator[] = [
   {
     id: 'york',
-    label: 'York, stated errors alone',
+    label: 'York, limits alone',
     usesOrder: false,
     estimate(line) {
       const { fit, words, caveats } = yorkLine(line);
@@ -78,7 +78,7 @@ export const yorkEstimators: readonly Estimator[] = [
   },
   {
     id: 'york-scaled',
-    label: 'York, errors scaled to the scatter',
+    label: 'York, scaled to the scatter',
     usesOrder: false,
     estimate(line) {
       const { fit, words, caveats } = yorkLine(line);

@@ -16,6 +16,7 @@ import {
   yorkValue,
 } from './line-estimators.ts';
 import { year } from './primitives.ts';
+import { blockBootstrapInput, blockBootstrapValue } from './resampling.ts';
 import {
   assumptionsAnswer,
   claimSweep,
@@ -112,6 +113,7 @@ export const computeMethods = {
   adf: { input: adfInput, value: adfValue },
   kpss: { input: kpssInput, value: kpssValue },
   'engle-granger': { input: engleGrangerInput, value: engleGrangerValue },
+  'block-bootstrap': { input: blockBootstrapInput, value: blockBootstrapValue },
   'window-sweep': { input: windowSweepRequest, value: windowSweep },
   'energy-budget': { input: energyBudgetRequest, value: energyBudgetAnswer },
   derivation: { input: derivationRequest, value: derivationAnswer },

@@ -12,6 +12,7 @@ import { engleGranger } from '../statistics/engle-granger.ts';
 import { glsArma11 } from '../statistics/gls-arma11.ts';
 import { huber } from '../statistics/huber.ts';
 import { kpss } from '../statistics/kpss.ts';
+import { movingBlockBootstrap } from '../statistics/moving-block-bootstrap.ts';
 import { regression } from '../statistics/regression.ts';
 import { residualTests } from '../statistics/residual-tests.ts';
 import { theilSen } from '../statistics/theil-sen.ts';
@@ -35,6 +36,7 @@ export const methods: Methods = {
   adf: (input) => adf(input),
   kpss: (input) => kpss(input),
   'engle-granger': (input) => engleGranger(input),
+  'block-bootstrap': (input, onProgress) => movingBlockBootstrap(input, onProgress),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
   'energy-budget': (input, onProgress) => energyBudget(input, onProgress),
   derivation: ({ lines }) => evaluateDerivation(lines),

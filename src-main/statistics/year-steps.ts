@@ -18,8 +18,9 @@ export function yearSteps(caller: string, years: ArrayLike<number> | undefined, 
   checked.forEach((year, t) => {
     finiteNumber(caller, `years[${t}]`, year, { isWhole: true });
     if (t === 0) return;
-    steps[t] = year - checked[t - 1]!;
-    if (steps[t]! > 0) return;
+    const step = year - checked[t - 1]!;
+    steps[t] = step;
+    if (step > 0) return;
     throw new InputError({
       code: 'unordered-years',
       where: `${caller}, years[${t}]`,

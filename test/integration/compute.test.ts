@@ -36,6 +36,7 @@ const valid = {
   york: { x, y, sx: 0.05, sy: 0.1 },
   adf: { y, lags: 1, deterministic: 'trend' },
   kpss: { y, lags: 2, deterministic: 'constant' },
+  'block-bootstrap': { x, y, intercept: true, blockLength: 3, draws: 1000, seed: 5 },
   'engle-granger': { x, y, lags: 1, deterministic: 'constant' },
 } as const;
 type Method = keyof typeof valid;
@@ -78,6 +79,12 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['gls-ar1', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['gls-arma11', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['gls-arma11', 'years', [{ years: withGapAt(5) }, { years: withGapAt(15) }]],
+  ['block-bootstrap', 'blockLength', [{ blockLength: 2 }, { blockLength: 4 }]],
+  ['block-bootstrap', 'draws', [{ draws: 500 }, { draws: 2000 }]],
+  ['block-bootstrap', 'seed', [{ seed: 6 }, { seed: 7 }]],
+  ['block-bootstrap', 'intercept', [{ intercept: false }, { intercept: true }]],
+  ['block-bootstrap', 'resample', [{ resample: 'pairs' }, { resample: 'residuals' }]],
+  ['block-bootstrap', 'years', [{ years: withGapAt(5) }, {}]],
   ['huber', 'k', [{ k: 0.8 }, { k: 1.1 }]],
   ['huber', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['york', 'sx', [{ sx: 0.2 }, { sx: x.map((_, t) => 0.1 + t / 100) }]],

@@ -92,7 +92,13 @@ describe('re-basing a series', () => {
     expect(rebased.offset).toBeCloseTo(0.6, 15);
     const after = await test.ask('series.get', { seriesId: rebased.seriesId });
     expect(after.series).toMatchObject({ name: 'short-vs-1993-1994', baseline: { start: 1993, end: 1994 } });
-    expect(after.values.values.map((value) => value && Number(value.toFixed(12)))).toEqual([-0.5, -0.3, null, 0.2, -0.2]);
+    expect(after.values.values.map((value) => value && Number(value.toFixed(12)))).toEqual([
+      -0.5,
+      -0.3,
+      null,
+      0.2,
+      -0.2,
+    ]);
     expect((await test.ask('series.get', { seriesId: seriesIds[0] ?? 0 })).series).toEqual(before.series);
 
     const refused = await test.core.handle('series.rebase', {

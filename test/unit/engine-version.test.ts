@@ -3,6 +3,8 @@ import { expect, it } from 'vitest';
 import { engineVersion } from '../../src-main/engine-version.ts';
 
 it('is the version of the package', () => {
-  const { version } = JSON.parse(readFileSync(new URL('../../package.json', import.meta.url), 'utf8')) as { version: string };
+  const { version } = JSON.parse(readFileSync(new URL('../../package.json', import.meta.url), 'utf8')) as {
+    version: string;
+  };
   expect(engineVersion).toBe(version);
 });

@@ -59,7 +59,12 @@ export function claimView(project: Project, claimId: number): ClaimView {
     catalogue: [...catalogueEntries],
     published,
     publishedBudget,
-    fillIns: fillIns(claim, recomputation, results.assumptions?.answer ?? null, sweep),
+    fillIns: fillIns(claim, {
+      recomputation,
+      assumptions: results.assumptions?.answer ?? null,
+      sweep,
+      estimators: results.estimators?.answer ?? null,
+    }),
     trail: project.trailLines({ claimId, limit: 40 }),
     isFrozen: findings.at(-1)?.isSigned ?? false,
   };

@@ -1,13 +1,19 @@
 import type { Claim } from '../contract/claim.ts';
+import type { EstimatorComparison } from '../contract/estimator-comparison.ts';
 import type { AssumptionsAnswer, ClaimSweep, Recomputation } from '../contract/result.ts';
 import { formatInterval, formatNumber, formatWithUncertainty } from '../quantities/notation.ts';
+
+interface Answers {
+  recomputation: Recomputation | null;
+  assumptions: AssumptionsAnswer | null;
+  sweep: ClaimSweep | null;
+  estimators: EstimatorComparison | null;
+}
 
 /** Figures that the words of a finding can name in braces. Each carries its unit. */
 export function fillIns(
   { statement }: Claim,
-  recomputation: Recomputation | null,
-  assumptions: AssumptionsAnswer | null,
-  sweep: ClaimSweep | null,
+  { recomputation, assumptions, sweep, estimators }: Answers,
 ): Record<string, string> {
   const figures: Record<string, string> = { stated: `${statement.value} ${statement.unit}` };
   if (recomputation) {
@@ -38,6 +44,11 @@ export function fillIns(
   if (sweep) {
     figures['windows-range'] =
       `${formatNumber(sweep.valueQuantiles.min, { decimals: 2 })} to ${formatNumber(sweep.valueQuantiles.max, { decimals: 2 })} ${sweep.unit}`;
+  }
+  if (estimators) {
+    const numbers = estimators.estimates.map(({ value }) => value);
+    figures['estimators-range'] =
+      `${formatNumber(Math.min(...numbers), { decimals: 2 })} to ${formatNumber(Math.max(...numbers), { decimals: 2 })} ${estimators.unit}`;
   }
   return figures;
 }

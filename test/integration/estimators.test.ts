@@ -96,8 +96,9 @@ describe('the comparison of estimators of a claim', () => {
     });
   });
 
-  it('stands in the report', async () => {
-    await compare();
+  it('stands in the report, and in the words of a finding', async () => {
+    const { fillIns } = await compare();
+    expect(fillIns['estimators-range']).toMatch(/^0\.\d\d to 0\.\d\d K per decade$/);
     const { report, html } = await test.ask('report.render', {});
     expect(report.claims[0]?.estimators?.estimates.map(({ id }) => id)).toContain('gls-ar1-reml');
     expect(html).toContain('AR(1), Prais–Winsten');

@@ -8,8 +8,12 @@ export function estimatorsLines({ claim, estimators }: ClaimView): string[] {
   const { unit, nObs, window, stated, estimates, notComputed, gaps, residualTests, testsMissing, caveats } =
     estimators.answer;
   const { bound, value: printed } = claim.statement;
+  // The smallest error decides how many digits all rows show.
+  const decimals = Math.max(
+    1,
+    ...estimates.map(({ standardError }) => (standardError ? decimalsFor(standardError) : 0)),
+  );
   const rows = estimates.map(({ label, value, standardError, interval95, isOwn }) => {
-    const decimals = standardError === null ? 2 : Math.max(2, decimalsFor(standardError));
     const number = (figure: number | null, withSign = false) =>
       figure === null ? 'unbounded' : formatNumber(figure, { decimals, withSign });
     return [

@@ -17,6 +17,11 @@ export function estimatorsPart({ claim, estimators }: ReportClaim): Html {
 
 function content(comparison: EstimatorComparison, stated: string): HtmlValue {
   const { unit, window, nObs, estimates, notComputed, gaps, caveats } = comparison;
+  // The smallest error decides how many digits all rows show.
+  const decimals = Math.max(
+    1,
+    ...estimates.map(({ standardError }) => (standardError ? decimalsFor(standardError) : 0)),
+  );
   return [
     html`<p>
       The same ${nObs} rows, ${formatYears(window)}, under other ways to fit the line and to count its error, turned
@@ -32,23 +37,22 @@ function content(comparison: EstimatorComparison, stated: string): HtmlValue {
         { heading: '95 % interval', isNumber: true },
         { heading: 'Minus stated', isNumber: true },
       ],
-      estimates.map((estimate) => estimateRow(estimate, comparison.stated.value)),
+      estimates.map((estimate) => estimateRow(estimate, comparison.stated.value, decimals)),
       'wordy',
     ),
     notComputed.map(({ labels, reason }) => html`<p class="quiet">No number by ${labels.join(' and ')}: ${reason}</p>`),
   ];
 }
 
-function estimateRow(estimate: EstimatorEstimate, stated: number): HtmlValue[] {
+function estimateRow(estimate: EstimatorEstimate, stated: number, decimals: number): HtmlValue[] {
   const { label, value, standardError, interval95, convention, parameters, isOwn, caveats } = estimate;
-  const decimals = standardError === null ? 2 : decimalsFor(standardError);
   const found = parameters.map(({ symbol, value: figure }) => `; ${symbol} = ${formatNumber(figure)}`).join('');
   return [
     html`${label}${isOwn ? ': the procedure’s own' : null}<br /><span class="quiet">${convention}${found}</span
       >${caveatsPart(caveats)}`,
     formatNumber(value, { decimals }),
     standardError === null ? 'none of its own' : formatNumber(standardError, { decimals }),
-    interval95 ? formatInterval(interval95) : 'none',
+    interval95 ? formatInterval(interval95, '', decimals) : 'none',
     formatNumber(value - stated, { decimals, withSign: true }),
   ];
 }

@@ -28,8 +28,14 @@ const papers = [
  * Violations of every rule that axe knows, best practices included, as one line each. Of a table of data, rows after the
  * twelfth are like those before, and there can be a thousand.
  */
-async function violations(page: Page, where: string): Promise<string[]> {
-  const { violations: found } = await new AxeBuilder({ page }).exclude('tbody > tr:nth-child(n + 13)').analyze();
+async function violations(page: Page, where: string, rulesLeftOut: string[] = []): Promise<string[]> {
+  const { violations: found } = await new AxeBuilder({ page })
+    .disableRules(rulesLeftOut)
+    .exclude('tbody > tr:nth-child(n + 13)')
+    .options({ resultTypes: ['violations'] })
+    // In one go, not frame by frame: there are no frames.
+    .setLegacyMode()
+    .analyze();
   return found.flatMap(({ id, help, nodes }) =>
     nodes.map(({ html, failureSummary }) => `${where}: ${id}, ${help}: ${html.slice(0, 160)} ${failureSummary ?? ''}`),
   );
@@ -46,33 +52,37 @@ describe('Everybody can use it', () => {
   it.each(papers)('axe finds nothing on $paper paper at $width × $height', async ({ paper, width, height }) => {
     const { page } = await openBrowserStage({ width, height });
     await page.emulateMedia({ colorScheme: paper });
-    const found = await violations(page, 'the very first start');
+    // Colours do not depend on the width, and comparing them takes most of the time.
+    const rulesLeftOut = width < 1440 ? ['color-contrast'] : [];
+    const found: string[] = [];
+    const look = async (where: string) => void found.push(...(await violations(page, where, rulesLeftOut)));
+    await look('the very first start');
     await introduceReviewer(page, 'Ada Brandvold', 'reviewer');
     await page.getByText('No project in this folder yet.').waitFor();
-    found.push(...(await violations(page, 'the start')));
+    await look('the start');
     await page.getByRole('button', { name: 'Open the worked example' }).click();
     await page.getByRole('heading', { name: 'Claims', level: 1 }).waitFor();
     await expect(page.locator('html').getAttribute('data-theme')).resolves.toBe(paper);
 
     for (const { name, hash } of places) {
       await goTo(page, hash);
-      found.push(...(await violations(page, name)));
+      await look(name);
     }
 
     await openEverything(page);
-    found.push(...(await violations(page, 'the sheet with everything opened')));
+    await look('the sheet with everything opened');
 
     await page.keyboard.press('Control+k');
     await page.getByRole('dialog', { name: 'Commands' }).waitFor();
-    found.push(...(await violations(page, 'the commands')));
+    await look('the commands');
     await page.keyboard.press('Escape');
     await page.getByRole('button', { name: /^Reviewer:/ }).click();
     await page.getByRole('dialog', { name: 'Who is reviewing' }).waitFor();
-    found.push(...(await violations(page, 'who is reviewing')));
+    await look('who is reviewing');
     await page.keyboard.press('Escape');
 
     await lookAtAnImport(page);
-    found.push(...(await violations(page, 'an import with bad rows')));
+    await look('an import with bad rows');
     expect(found).toEqual([]);
   });
 
@@ -117,11 +127,12 @@ describe('Everybody can use it', () => {
   });
 });
 
-/** Every fold, every row of the ledger and every explanation of the sheet. */
+/** Every fold, every row of the ledger and every explanation of the sheet; not the table of the sweep, a thousand rows of one kind. */
 async function openEverything(page: Page): Promise<void> {
   await goTo(page, '#/claims/1');
   await page.evaluate(() => {
-    for (const fold of document.querySelectorAll<HTMLDetailsElement>('main details')) fold.open = true;
+    for (const fold of document.querySelectorAll<HTMLDetailsElement>('main details'))
+      fold.open = !fold.closest('#section-robustness');
     for (const opener of document.querySelectorAll<HTMLElement>('main [aria-expanded="false"]')) opener.click();
   });
   await page.getByLabel('Your note on this mark').first().waitFor();

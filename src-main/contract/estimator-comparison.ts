@@ -11,6 +11,8 @@ export const estimatorId = z.enum([
   'gls-ar1-reml',
   'prais-winsten',
   'cochrane-orcutt',
+  'gls-arma11',
+  'block-bootstrap',
   'theil-sen',
   'huber',
   'york',
@@ -31,6 +33,10 @@ export const estimatorEstimate = z.object({
   convention: z.string(),
   /** What is estimated beside the line: ρ, σ, a scale. */
   parameters: z.array(z.object({ symbol: z.string(), value: z.number() })),
+  /** What it takes for a step of time: nothing, the next row whatever its year, or a year of the calendar. */
+  order: z.enum(['not used', 'rows', 'calendar']),
+  /** Where random numbers were drawn; null elsewhere. */
+  random: z.object({ generator: z.string(), seed: z.int(), nDraws: z.int() }).nullable(),
   /** True for what the claim's own procedure does. */
   isOwn: z.boolean(),
   caveats: z.array(caveat),
@@ -60,8 +66,8 @@ export const estimatorComparison = z.object({
   estimates: z.array(estimatorEstimate),
   /** Estimators that have no answer here, each with the reason and the way out. */
   notComputed: z.array(z.object({ ids: z.array(estimatorId), labels: z.array(z.string()), reason: z.string() })),
-  /** Whether years without a value are counted as steps of time. */
-  gaps: z.object({ years: z.array(year), usesCalendarDistance: z.boolean(), sentence: z.string() }),
+  /** Years inside the window without a value, and which estimators count them as steps of time. */
+  gaps: z.object({ years: z.array(year), sentence: z.string() }),
   residualTests: z.array(residualTest),
   /** Why there are no tests of the residuals; null when there are. */
   testsMissing: z.string().nullable(),

@@ -35,7 +35,7 @@ export async function runClaimMethod(
     const answerDigest = change.addContent(answerBytes);
     const latest = latestAnswer(project, claimId, method);
     if (latest?.result.requestDigest === digest && latest.result.answerDigest === answerDigest) return;
-    const seed = method === 'assumptions' ? claim.seed : null;
+    const seed = method === 'assumptions' || method === 'estimators' ? claim.seed : null;
     change.add('result', {
       claimId,
       method,

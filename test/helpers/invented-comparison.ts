@@ -14,6 +14,8 @@ const estimate = (
   interval95: { low: value - 2 * (standardError ?? 0.1), high: value + 2 * (standardError ?? 0.1), levelPercent: 95 },
   convention: `as ${id} has it`,
   parameters: [],
+  order: 'not used',
+  random: null,
   isOwn: false,
   caveats: [],
   ...more,
@@ -37,6 +39,9 @@ export const inventedComparison: EstimatorComparison = {
         { symbol: 'σ', value: 0.093 },
       ],
     }),
+    estimate('block-bootstrap', 'Least squares, block bootstrap', 1.88, 0.09, {
+      random: { generator: 'invented', seed: 7, nDraws: 500 },
+    }),
     estimate('theil-sen', 'Theil–Sen', 2.21, null, {
       caveats: [{ code: 'free-intercept', detail: 'This estimator always fits an intercept.' }],
     }),
@@ -50,8 +55,7 @@ export const inventedComparison: EstimatorComparison = {
   ],
   gaps: {
     years: [1963, 1970],
-    usesCalendarDistance: false,
-    sentence: 'No value in 1963, 1970. Calendar distance is not used.',
+    sentence: 'No value in 1963, 1970. Taking the years on either side for neighbours: Newey–West.',
   },
   residualTests: [
     {

@@ -35,27 +35,27 @@ export const ar1Estimators: readonly Estimator[] = [
   {
     id: 'gls-ar1-ml',
     label: 'AR(1), maximum likelihood',
-    usesOrder: true,
+    order: 'rows',
     estimate: (line) => ar1Slope(line, 'ml', 'exact normal likelihood of all rows at its highest point'),
   },
   {
     id: 'gls-ar1-reml',
     label: 'AR(1), restricted likelihood',
-    usesOrder: true,
+    order: 'rows',
     estimate: (line) =>
       ar1Slope(line, 'reml', 'exact restricted normal likelihood (REML), which allows for the fitted coefficients'),
   },
   {
     id: 'prais-winsten',
     label: 'AR(1), Prais–Winsten',
-    usesOrder: true,
+    order: 'rows',
     estimate: (line) =>
       ar1Slope(line, 'prais-winsten', `least squares on rows freed from ρ, the first kept; ${shareWords}`),
   },
   {
     id: 'cochrane-orcutt',
     label: 'AR(1), Cochrane–Orcutt',
-    usesOrder: true,
+    order: 'rows',
     estimate: (line) =>
       ar1Slope(line, 'cochrane-orcutt', `least squares on rows freed from ρ, the first left out; ${shareWords}`),
   },

@@ -7,6 +7,8 @@ import { statedInterval, statedValue } from '../../quantities/stated-number.ts';
 import { fittedLine } from '../procedures/fitted-line.ts';
 import { recompute } from '../procedures/recompute.ts';
 import { ar1Estimators } from './ar1-estimators.ts';
+import { arma11Estimators } from './arma11-estimators.ts';
+import { bootstrapEstimators } from './bootstrap-estimators.ts';
 import type { ComparedLine, Estimator } from './estimator.ts';
 import { leastSquaresEstimators } from './least-squares-estimators.ts';
 import { residualTestLines } from './residual-test-lines.ts';
@@ -16,7 +18,9 @@ import { yorkEstimators } from './york-estimators.ts';
 /** In the order in which they are shown. */
 const estimators: readonly Estimator[] = [
   ...leastSquaresEstimators,
+  ...bootstrapEstimators,
   ...ar1Estimators,
+  ...arma11Estimators,
   ...robustEstimators,
   ...yorkEstimators,
 ];
@@ -25,8 +29,8 @@ const estimators: readonly Estimator[] = [
  * The claim's number under every estimator, on the very rows of its recomputation and turned into its unit by the same
  * factor: how far does it hang on the way the line is fitted, and on the way its error is counted?
  *
- * Assumes  one row a year. No estimator uses the calendar distance: years on either side of a gap count as neighbours,
- *          which `gaps` and a caveat on each estimator that looks at the order say
+ * Assumes  at most one row a year. Estimators that take the rows on either side of a gap for neighbours say so in a
+ *          caveat; ARMA(1,1) predicts across a gap
  *
  * @returns  one estimate for each estimator, or in `notComputed` the reason why it has none; tests of the residuals of
  *           the least-squares line
@@ -61,7 +65,7 @@ export function compareEstimators(computation: ClaimComputation): EstimatorCompa
     stated: { value: statedValue(value), interval: statedInterval(value) },
     estimates,
     notComputed: byReason(refused),
-    gaps: { years: gapYears, usesCalendarDistance: false, sentence: gapSentence(gapYears) },
+    gaps: { years: gapYears, sentence: gapSentence(gapYears, estimates) },
     residualTests:
       typeof tests === 'string' ? [] : tests.map((test) => ({ ...test, caveats: [...test.caveats, ...gapCaveats] })),
     testsMissing: typeof tests === 'string' ? tests : null,
@@ -73,11 +77,11 @@ export function compareEstimators(computation: ClaimComputation): EstimatorCompa
 const aboutRows = ['unit-differs', 'incomplete-year-means', 'part-year', 'anchor-row'];
 
 function estimateOf(
-  { id, label, usesOrder, estimate }: Estimator,
+  { id, label, order, estimate }: Estimator,
   line: ComparedLine,
   gapCaveats: Caveat[],
 ): EstimatorEstimate {
-  const { slope, standardError, interval95, convention, parameters = [], caveats = [] } = estimate(line);
+  const { slope, standardError, interval95, convention, parameters = [], random = null, caveats = [] } = estimate(line);
   const { factor, procedure } = line;
   return {
     id,
@@ -87,8 +91,10 @@ function estimateOf(
     interval95: interval95 && { low: interval95.low * factor, high: interval95.high * factor, levelPercent: 95 },
     convention,
     parameters,
+    order,
+    random,
     isOwn: id === (procedure.covariance.kind === 'classical' ? 'ols-classical' : 'ols-newey-west'),
-    caveats: usesOrder ? [...caveats, ...gapCaveats] : caveats,
+    caveats: order === 'rows' ? [...caveats, ...gapCaveats] : caveats,
   };
 }
 
@@ -118,7 +124,12 @@ function gapCaveat(years: number[]): Caveat {
   };
 }
 
-function gapSentence(years: number[]): string {
+function gapSentence(years: number[], estimates: readonly EstimatorEstimate[]): string {
   if (years.length === 0) return 'Every year of the window has a value, so that rows are one year apart.';
-  return `No value in ${formatYearList(years)}. Calendar distance is not used: whatever looks at the order of years (Newey–West, AR(1), tests of serial correlation) takes those on either side of a gap for neighbours. The other estimators do not look at the order.`;
+  const labels = (order: EstimatorEstimate['order']) =>
+    estimates.filter((estimate) => estimate.order === order).map(({ label }) => label);
+  const closed = [...labels('rows'), 'the tests of the residuals'].join('; ');
+  const calendar = labels('calendar');
+  const counted = calendar.length > 0 ? ` The calendar distance is used by ${calendar.join('; ')}.` : '';
+  return `No value in ${formatYearList(years)}. Taking the years on either side of a gap for neighbours, without the calendar distance: ${closed}.${counted} The other estimators do not look at the order of years.`;
 }

@@ -16,6 +16,8 @@ export interface SlopeEstimate {
   interval95: { low: number; high: number } | null;
   convention: string;
   parameters?: EstimatorEstimate['parameters'];
+  /** Where random numbers were drawn. */
+  random?: EstimatorEstimate['random'];
   caveats?: Caveat[];
 }
 
@@ -23,8 +25,8 @@ export interface SlopeEstimate {
 export interface Estimator {
   id: EstimatorId;
   label: string;
-  /** Takes neighbouring rows for neighbouring years, so that a gap bears on it. */
-  usesOrder: boolean;
+  /** What it takes for a step of time: nothing, the next row whatever its year, or a year of the calendar. */
+  order: EstimatorEstimate['order'];
   /** Does the comparison with this line need it? Always, unless given. */
   applies?: (line: ComparedLine) => boolean;
   /** @throws InputError and NumericError of the estimator */

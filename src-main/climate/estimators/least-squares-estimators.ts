@@ -31,13 +31,13 @@ export const leastSquaresEstimators: readonly Estimator[] = [
   {
     id: 'ols-classical',
     label: 'Least squares, classical',
-    usesOrder: false,
+    order: 'not used',
     estimate: (line) => leastSquaresSlope(line, line.intercept, { kind: 'classical' }, classical),
   },
   {
     id: 'ols-hc3',
     label: 'Least squares, HC3',
-    usesOrder: false,
+    order: 'not used',
     estimate: (line) =>
       leastSquaresSlope(
         line,
@@ -49,7 +49,7 @@ export const leastSquaresEstimators: readonly Estimator[] = [
   {
     id: 'ols-newey-west',
     label: 'Least squares, Newey–West',
-    usesOrder: true,
+    order: 'rows',
     estimate(line) {
       const { procedure, serialCovariance } = line;
       const origin =
@@ -67,7 +67,7 @@ export const leastSquaresEstimators: readonly Estimator[] = [
   {
     id: 'ols-free-intercept',
     label: 'Least squares, free intercept',
-    usesOrder: false,
+    order: 'not used',
     applies: ({ intercept }) => !intercept,
     estimate: (line) =>
       leastSquaresSlope(line, true, { kind: 'classical' }, `${classical}; the line need not pass through the anchor`),

@@ -10,7 +10,7 @@ export const robustEstimators: readonly Estimator[] = [
   {
     id: 'theil-sen',
     label: 'Theil–Sen',
-    usesOrder: false,
+    order: 'not used',
     estimate(line) {
       const { slope, confidence, caveats } = theilSen({ x: line.fit.x, y: line.fit.y });
       return {
@@ -26,7 +26,7 @@ export const robustEstimators: readonly Estimator[] = [
   {
     id: 'huber',
     label: 'Huber',
-    usesOrder: false,
+    order: 'not used',
     estimate({ fit: { x, y }, intercept }) {
       const { coefficients, standardErrors, scale, caveats } = huber({ x, y, intercept, k });
       const place = intercept ? 1 : 0;

@@ -55,7 +55,7 @@ export const yorkEstimators: readonly Estimator[] = [
   {
     id: 'york',
     label: 'York, limits alone',
-    usesOrder: false,
+    order: 'not used',
     estimate(line) {
       const { fit, words, caveats } = yorkLine(line);
       const { slope, slopeStandardError: standardError, goodness } = fit;
@@ -79,7 +79,7 @@ export const yorkEstimators: readonly Estimator[] = [
   {
     id: 'york-scaled',
     label: 'York, scaled to the scatter',
-    usesOrder: false,
+    order: 'not used',
     estimate(line) {
       const { fit, words, caveats } = yorkLine(line);
       const { slope, scaledSlopeStandardError: standardError, goodness } = fit;

@@ -40,6 +40,13 @@ function content(comparison: EstimatorComparison, stated: string): HtmlValue {
       estimates.map((estimate) => estimateRow(estimate, comparison.stated.value, decimals)),
       'wordy',
     ),
+    estimates.map(({ label, random }) =>
+      random
+        ? html`<p class="quiet">
+            Random numbers of ${label}: ${random.generator}, seed ${random.seed}, ${random.nDraws} draws.
+          </p>`
+        : null,
+    ),
     notComputed.map(({ labels, reason }) => html`<p class="quiet">No number by ${labels.join(' and ')}: ${reason}</p>`),
   ];
 }

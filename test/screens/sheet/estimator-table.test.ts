@@ -24,7 +24,7 @@ describe('EstimatorTable', () => {
       '1.79 – 1.96',
       '−0.03',
     ]);
-    expect(cells(rows[4]!)).toEqual(['Theil–Sen', '', '2.21', '', '2.01 – 2.41', '+0.31']);
+    expect(cells(rows[5]!)).toEqual(['Theil–Sen', '', '2.21', '', '2.01 – 2.41', '+0.31']);
   });
 
   it('keeps the full precision within reach', () => {

@@ -53,7 +53,7 @@ describe('OtherEstimators', () => {
     expect(screen.findAll('table')).toHaveLength(2);
     for (const said of [
       'at most 1.9',
-      'Calendar distance is not used.',
+      'Taking the years on either side for neighbours',
       'No number by York, stated errors alone and York, errors scaled to the scatter: series',
       'The anchor year is itself a row',
     ])

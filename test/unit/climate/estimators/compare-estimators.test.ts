@@ -6,6 +6,7 @@ import { fittedLine } from '../../../../src-main/climate/procedures/fitted-line.
 import { recompute } from '../../../../src-main/climate/procedures/recompute.ts';
 import type { ClaimComputation } from '../../../../src-main/contract/compute.ts';
 import { estimatorComparison, type EstimatorId } from '../../../../src-main/contract/estimator-comparison.ts';
+import { movingBlockBootstrap } from '../../../../src-main/statistics/moving-block-bootstrap.ts';
 import { residualTests } from '../../../../src-main/statistics/residual-tests.ts';
 import { computationOf } from '../../../helpers/claim-computation.ts';
 import { ar1Noise, inventedCo2, logRegressionClaim } from '../../../helpers/log-regression-claim.ts';
@@ -105,7 +106,7 @@ describe('compareEstimators', () => {
     const { notComputed, estimates } = compareEstimators(logRegressionClaim(record));
     expect(notComputed.map(({ ids }) => ids)).toEqual([['york', 'york-scaled']]);
     expect(notComputed[0]?.reason).toContain('series air: expected annual values with limits');
-    expect(estimates).toHaveLength(10);
+    expect(estimates).toHaveLength(12);
   });
 
   it('has neither likelihoods nor tests for an exact line, and says so', () => {
@@ -144,11 +145,13 @@ describe('compareEstimators', () => {
       temperatureK: temperatureK.filter((_, row) => row !== 20 && row !== 21),
     });
     const { gaps, estimates, residualTests: tests } = compareEstimators(gapped);
-    expect(gaps).toMatchObject({ years: [1970, 1971], usesCalendarDistance: false });
-    expect(gaps.sentence).toContain('Calendar distance is not used');
+    expect(gaps.years).toEqual([1970, 1971]);
+    expect(gaps.sentence).toMatch(/No value in 1970–1971\. Taking .* without the calendar distance: .*Newey–West/);
+    expect(gaps.sentence).toContain('The calendar distance is used by ARMA(1,1)');
     const warned = estimates.filter(({ caveats }) => caveats.some(({ code }) => code === 'gap-in-window'));
     expect(warned.map(({ id }) => id)).toEqual([
       'ols-newey-west',
+      'block-bootstrap',
       'gls-ar1-ml',
       'gls-ar1-reml',
       'prais-winsten',
@@ -156,6 +159,27 @@ describe('compareEstimators', () => {
     ]);
     expect(tests.every(({ caveats }) => caveats.some(({ code }) => code === 'gap-in-window'))).toBe(true);
     expect(compareEstimators(logRegressionClaim(record)).gaps).toMatchObject({ years: [] });
+  });
+
+  it('the block bootstrap draws from the claim’s seed, and says what it drew', () => {
+    const computation = logRegressionClaim({ ...record, seed: 11 });
+    const { fit } = recompute(computation);
+    const { random, value, standardError, interval95, convention } = of(computation, 'block-bootstrap');
+    expect(random).toMatchObject({ seed: 11, nDraws: 2000 });
+    const [, length] = /blocks of (\d+) years/.exec(convention) ?? [];
+    const { slope, quantiles, ...drawn } = movingBlockBootstrap({
+      x: fit?.x ?? [],
+      y: fit?.y ?? [],
+      intercept: false,
+      blockLength: Number(length),
+      draws: 2000,
+      seed: 11,
+      resample: 'residuals',
+    });
+    expect(value).toBe(slope * Math.LN2);
+    expect(standardError).toBe(drawn.standardError * Math.LN2);
+    expect(interval95).toMatchObject({ low: quantiles.q025 * Math.LN2, high: quantiles.q975 * Math.LN2 });
+    expect(of(logRegressionClaim({ ...record, seed: 12 }), 'block-bootstrap').standardError).not.toBe(standardError);
   });
 
   it('works on a trend, whose years are exact', () => {

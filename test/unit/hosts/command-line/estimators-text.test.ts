@@ -24,7 +24,7 @@ describe('estimatorsLines', () => {
       'note: This estimator always fits an intercept.',
       'no number by York, stated errors alone and York, errors scaled to the scatter: series',
       'Breusch–Godfrey 16.20, 3 df, p = 0.001',
-      'Calendar distance is not used.',
+      'Taking the years on either side for neighbours',
     ])
       expect(text).toContain(said);
   });

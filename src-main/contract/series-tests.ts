@@ -23,6 +23,10 @@ export const residualTestsValue = z.object({
   /** n (1 − r)/(1 + r). */
   nEff: z.number(),
   durbinWatson: z.number(),
+  /** Exact for this design, one-sided against likeness, with the bounds of the 5 % test; null beyond 400 rows. */
+  durbinWatsonTest: z
+    .object({ p: z.number(), bounds5Percent: z.object({ lower: z.number(), upper: z.number() }) })
+    .nullable(),
   breuschGodfrey: chiSquared,
   ljungBox: chiSquared,
   caveats,

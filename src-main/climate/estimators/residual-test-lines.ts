@@ -1,4 +1,5 @@
 import type { ResidualTest } from '../../contract/estimator-comparison.ts';
+import { formatNumber } from '../../quantities/notation.ts';
 import { residualTests } from '../../statistics/residual-tests.ts';
 import type { FittedLine } from '../procedures/fitted-line.ts';
 
@@ -12,7 +13,13 @@ import type { FittedLine } from '../procedures/fitted-line.ts';
 export function residualTestLines({ fit: { x, y }, intercept, serialCovariance }: FittedLine): ResidualTest[] {
   const nCoefficients = intercept ? 2 : 1;
   const lags = Math.max(1, Math.min(serialCovariance.lag, y.length - nCoefficients - 1));
-  const { durbinWatson, breuschGodfrey, ljungBox, caveats } = residualTests({ x, y, intercept, lags });
+  const {
+    durbinWatson,
+    durbinWatsonTest: exact,
+    breuschGodfrey,
+    ljungBox,
+    caveats,
+  } = residualTests({ x, y, intercept, lags });
   const lagWords = lags === 1 ? 'one lag' : `${lags} lags`;
   const bearing = (...codes: string[]) => caveats.filter(({ code }) => codes.includes(code));
   return [
@@ -22,9 +29,9 @@ export function residualTestLines({ fit: { x, y }, intercept, serialCovariance }
       asks: 'neighbouring residuals are unrelated (about 2; towards 0 when they are alike)',
       statistic: durbinWatson,
       df: null,
-      p: null,
-      convention: 'Σ(e_t − e_(t−1))²/Σe_t², in order of year',
-      caveats: bearing('no-intercept'),
+      p: exact?.p ?? null,
+      convention: `Σ(e_t − e_(t−1))²/Σe_t², in order of year${exact ? boundsWords(exact.bounds5Percent, intercept) : ''}`,
+      caveats: bearing('no-intercept', 'no-exact-p'),
     },
     {
       id: 'breusch-godfrey',
@@ -43,4 +50,9 @@ export function residualTestLines({ fit: { x, y }, intercept, serialCovariance }
       caveats: bearing('lags-against-length'),
     },
   ];
+}
+
+function boundsWords({ lower, upper }: { lower: number; upper: number }, intercept: boolean): string {
+  const line = intercept ? 'a line with an intercept' : 'a line through the origin';
+  return `; p exact for these years, one-sided towards likeness; 5 % bounds for ${line} ${formatNumber(lower, 2)} and ${formatNumber(upper, 2)}`;
 }

@@ -8,7 +8,10 @@ import { co2AndTemperature } from '../../helpers/real-series.ts';
 
 let r: RSession;
 beforeAll(async () => {
-  r = await startR(new URL('./serial-correlation.R', import.meta.url));
+  r = await startR(
+    new URL('./serial-correlation.R', import.meta.url),
+    new URL('./durbin-watson-test.R', import.meta.url),
+  );
 });
 afterAll(() => r.close());
 
@@ -46,7 +49,19 @@ describe('residualTests', () => {
         reference,
         near,
       );
+      const exact = await r.numbers('dw_test(x, y, intercept)', { x, y, intercept });
+      const { p = NaN } = found.durbinWatsonTest ?? {};
+      expectClose([p], exact['p'], { rel: 1e-7, abs: 1e-10, why: 'R’s integrate works to an absolute error' });
     }
+  });
+
+  it('has no exact Durbin–Watson p beyond 400 rows, and says so', () => {
+    const long = Array.from({ length: 401 }, (_, t) => t);
+    const wild = long.map((t) => Math.sin(t * t));
+    const at = (n: number) => residualTests({ x: long.slice(0, n), y: wild.slice(0, n), intercept: true, lags: 2 });
+    expect(at(401).durbinWatsonTest).toBeNull();
+    expect(at(401).caveats.map(({ code }) => code)).toEqual(['no-exact-p']);
+    expect(at(400).durbinWatsonTest?.bounds5Percent.lower).toBeGreaterThan(1.8);
   });
 
   it('takes several predictors', () => {

@@ -207,14 +207,14 @@ describe('residualTestLines', () => {
   it('has the figures of residualTests, at the lag of the serial errors', () => {
     const computation = logRegressionClaim(record);
     const line = fittedLine({ computation, recomputation: recompute(computation) });
-    const { durbinWatson, breuschGodfrey, ljungBox } = residualTests({
+    const { durbinWatson, durbinWatsonTest, breuschGodfrey, ljungBox } = residualTests({
       x: line.fit.x,
       y: line.fit.y,
       intercept: false,
       lags: 3,
     });
     expect(residualTestLines(line)).toMatchObject([
-      { id: 'durbin-watson', statistic: durbinWatson, p: null, caveats: [{ code: 'no-intercept' }] },
+      { id: 'durbin-watson', statistic: durbinWatson, p: durbinWatsonTest?.p, caveats: [{ code: 'no-intercept' }] },
       { id: 'breusch-godfrey', ...breuschGodfrey },
       { id: 'ljung-box', ...ljungBox },
     ]);

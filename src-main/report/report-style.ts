@@ -81,6 +81,7 @@ td .quiet { white-space: normal }
 .small, .quantiles { width: auto; min-width: 55% }
 .small th, .small td, .quantiles th, .quantiles td { padding-right: 24px }
 .halves th[scope='row'] { width: 58% }
+.pair { display: grid; grid-template-columns: 1fr 1fr; gap: 0 20px }
 .ledger th[scope='row'] { width: 42% }
 .ledger td:last-child { white-space: nowrap }
 .published th[scope='row'] { width: 24% }

@@ -33,12 +33,12 @@ function content(comparison: EstimatorComparison, stated: string): HtmlValue {
       [
         { heading: 'Estimator' },
         { heading: 'Number', isNumber: true },
-        { heading: '± 1 standard error', isNumber: true },
+        { heading: '± 1 s.e.', isNumber: true },
         { heading: '95 % interval', isNumber: true },
         { heading: 'Minus stated', isNumber: true },
       ],
       estimates.map((estimate) => estimateRow(estimate, comparison.stated.value, decimals)),
-      'wordy',
+      'halves',
     ),
     estimates.map(({ label, random }) =>
       random

@@ -6,7 +6,7 @@ import { svgText } from '../../figures/svg-text.ts';
 import { shortDigest } from '../../quantities/notation.ts';
 import { Html, html, joined } from '../html.ts';
 
-const widthPx = 700;
+const pageWidthPx = 700;
 
 type Place = 'recomputation' | 'residuals' | 'windows';
 
@@ -19,8 +19,8 @@ function placeOf(name: string): Place {
   return name.endsWith('-windows') ? 'windows' : name.includes('-residual-') ? 'residuals' : 'recomputation';
 }
 
-/** A figure with what it shows and the digests of its data. */
-export function figurePart(figure: Figure): Html {
+/** A figure with what it shows and the digests of its data, drawn for the width of the page unless another is given. */
+export function figurePart(figure: Figure, widthPx = pageWidthPx): Html {
   const drawing = new Html(svgText(figureDrawing(figure, printPalette, widthPx)));
   const digests = figure.digests.map((digest) => html`<code title="${digest}">${shortDigest(digest)}</code>`);
   const data = digests.length === 0 ? null : html` <span class="digests">From data ${joined(digests, ', ')}.</span>`;

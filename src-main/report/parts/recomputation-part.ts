@@ -45,7 +45,7 @@ export function recomputationPart(claim: ReportClaim): Html {
     ])}
     ${fit ? fitPart(fit, claim.claim.procedure?.kind === 'trend' ? 'K per year' : 'K per e-folding') : nothing('This procedure has no regression, so there are no diagnostics of a fit.')}
     ${caveatsPart([...recomputation.caveats, ...(fit?.regression.caveats ?? [])])}
-    ${figuresOf(claim, 'recomputation').map(figurePart)}`;
+    ${figuresOf(claim, 'recomputation').map((figure) => figurePart(figure))}`;
 }
 
 function fitPart(fit: Fit, slopeUnit: string): HtmlValue {

@@ -5,10 +5,13 @@ import { html, nothing, table, type Html, type HtmlValue } from '../html.ts';
 import { caveatsPart } from './caveats-part.ts';
 import { figurePart, figuresOf } from './figure-part.ts';
 
+const halfWidthPx = 340;
+
 /** What the residuals of the line say about its errors: in tests, and in figures. */
 export function residualsPart(claim: ReportClaim): Html {
   return html`<h2>Residuals</h2>
-    ${tests(claim.estimators)} ${figuresOf(claim, 'residuals').map(figurePart)}`;
+    ${tests(claim.estimators)}
+    <div class="pair">${figuresOf(claim, 'residuals').map((figure) => figurePart(figure, halfWidthPx))}</div>`;
 }
 
 function tests(comparison: ReportClaim['estimators']): HtmlValue {
@@ -24,7 +27,7 @@ function tests(comparison: ReportClaim['estimators']): HtmlValue {
       { heading: 'p', isNumber: true },
     ],
     residualTests.map(testRow),
-    'wordy',
+    'halves',
   );
 }
 

@@ -6,7 +6,7 @@ import { figurePart, figuresOf } from './figure-part.ts';
 
 /** The same procedure over every start and end year. */
 export function windowsPart(claim: ReportClaim): Html {
-  const figures = figuresOf(claim, 'windows').map(figurePart);
+  const figures = figuresOf(claim, 'windows').map((figure) => figurePart(figure));
   return html`<h2>Other windows</h2>
     ${content(claim.sweep)}${figures}`;
 }

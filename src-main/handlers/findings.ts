@@ -35,17 +35,13 @@ export const findingHandlers: Handlers<'finding.save' | 'finding.sign' | 'findin
     const project = workspace.open();
     const finding = latestFinding(project, claimId);
     if (!finding) throw notReady(claimId, 'a finding', 'none yet');
-    if (!finding.isSigned) {
+    // Whatever can be refused is refused before anything is written.
+    const signer = workspace.identity.unlock(passphrase);
+    if (!finding.isSigned && meaning === 'sign-off') {
       refuseUnready(claimView(project, claimId), finding);
       citeNewestResults(context, finding);
     }
-    signFinding(project, {
-      ...workspace.signed(),
-      findingId: finding.id,
-      meaning,
-      remark,
-      signer: workspace.identity.unlock(passphrase),
-    });
+    signFinding(project, { ...workspace.signed(), findingId: finding.id, meaning, remark, signer });
     return claimView(project, claimId);
   },
 

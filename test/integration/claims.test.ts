@@ -158,8 +158,14 @@ describe('signing a finding', () => {
     expect(await sign()).toMatchObject({ ok: false, error: { expected: 'results of the claim as it is now' } });
   });
 
-  it('is refused with another passphrase, and leaves the finding open', async () => {
+  it('is refused with another passphrase, or before the reviewer’s own, and leaves everything as it was', async () => {
+    // A newer result, which a signature would cite.
+    await test.ask('claim.sweep', { claimId: 1, minYears: 30 });
+    const { head } = await test.ask('project.view', {});
     expect(await sign('not this one')).toMatchObject({ ok: false, error: { code: 'wrong-passphrase' } });
+    const input = { claimId: 1, passphrase: 'long enough', meaning: 'counter-signature', remark: '' };
+    expect(await test.core.handle('finding.sign', input)).toMatchObject({ error: { code: 'not-ready-to-sign' } });
+    expect((await test.ask('project.view', {})).head).toEqual(head);
     expect((await test.ask('claim.view', { claimId: 1 })).isFrozen).toBe(false);
   });
 

@@ -36,11 +36,10 @@ export const findingHandlers: Handlers<'finding.save' | 'finding.sign' | 'findin
     const finding = latestFinding(project, claimId);
     if (!finding) throw notReady(claimId, 'a finding', 'none yet');
     // Whatever can be refused is refused before anything is written.
+    const isFirst = !finding.isSigned && meaning === 'sign-off';
+    if (isFirst) refuseUnready(claimView(project, claimId), finding);
     const signer = workspace.identity.unlock(passphrase);
-    if (!finding.isSigned && meaning === 'sign-off') {
-      refuseUnready(claimView(project, claimId), finding);
-      citeNewestResults(context, finding);
-    }
+    if (isFirst) citeNewestResults(context, finding);
     signFinding(project, { ...workspace.signed(), findingId: finding.id, meaning, remark, signer });
     return claimView(project, claimId);
   },

@@ -8,6 +8,9 @@ export const predictors = z.union([column, z.array(column).min(1).max(100)]);
 const oneOrEach = z.union([z.number(), column]);
 const caveats = z.array(caveat);
 
+/** Years of the rows, for a method that can say what a gap does to it, or predict across one. */
+export const rowYears = z.array(year).min(1).max(1_000_000);
+
 /** Coefficients of a line with their standard errors, the intercept first when there is one. */
 const line = z.object({ coefficients: z.array(z.number()), standardErrors: z.array(z.number()) });
 
@@ -16,6 +19,8 @@ export const glsAr1Input = z.object({
   y: column,
   intercept: z.boolean(),
   estimator: z.enum(['ml', 'reml', 'prais-winsten', 'cochrane-orcutt']),
+  /** ml and reml then count calendar distances, the others say that they do not; without it rows are consecutive. */
+  years: rowYears.optional(),
 });
 export type GlsAr1Input = z.infer<typeof glsAr1Input>;
 
@@ -29,9 +34,6 @@ export const glsAr1Value = line.extend({
   caveats,
 });
 export type GlsAr1Value = z.infer<typeof glsAr1Value>;
-
-/** Years of the rows, for a method that can say what a gap does to it, or predict across one. */
-export const rowYears = z.array(year).min(1).max(1_000_000);
 
 export const glsArma11Input = z.object({
   x: predictors,

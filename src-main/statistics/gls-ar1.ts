@@ -1,17 +1,21 @@
 import type { Caveat } from '../contract/primitives.ts';
 import { InputError, NumericError } from '../errors.ts';
-import { ar1Rows } from './ar1-rows.ts';
+import { ar1GapHeight } from './ar1-log-likelihood.ts';
+import { ar1GapVariance, ar1Rows } from './ar1-rows.ts';
 import { designColumns } from './design-columns.ts';
 import { refuseExactFit } from './exact-fit.ts';
 import { finiteValues } from './finite-values.ts';
 import { leastSquares, type LeastSquaresFit } from './least-squares.ts';
-import { sum, sumOfProducts } from './summation.ts';
+import { sumOfProducts } from './summation.ts';
+import { yearSteps } from './year-steps.ts';
 
 export interface GlsAr1Request {
   x: ArrayLike<number> | readonly ArrayLike<number>[];
   y: ArrayLike<number>;
   intercept: boolean;
   estimator: 'ml' | 'reml';
+  /** [nObs] whole, increasing: the calendar distance of the rows then counts. Without them rows are consecutive. */
+  years?: ArrayLike<number> | undefined;
 }
 
 export interface GlsAr1Fit {
@@ -42,17 +46,17 @@ const STARTS = Array.from({ length: 121 }, (_, i) => Math.tanh((i - 60) / 8));
  * error carries over a share ρ of the one before.
  *
  * Model    y = Xb + e, e_t = ρ e_{t−1} + u_t, u normal with standard deviation σ, e_1 from the stationary distribution.
- *          ml    maximises −n/2 log 2πσ² + ½ log(1 − ρ²) − RSS*(b, ρ)/2σ², with σ² = RSS* /n
+ *          ml    maximises −n/2 log 2πσ² + ½ log(1 − ρ²) − ½ Σ log F_t − RSS*(b, ρ)/2σ², with σ² = RSS* /n
  *          reml  the same with n − k in place of n, less ½ log |X*′X*|, with σ² = RSS* /(n − k)
- *          where * marks rows freed from ρ. Every maximum over ρ is found as a zero of the exact derivative; the
+ *          where * marks rows freed from ρ as by `ar1Rows`, F_t is 1 but behind a gap. Every maximum over ρ is found as a zero of the exact derivative; the
  *          highest is taken
- * Assumes  rows in order of time, equally spaced, without gaps
+ * Assumes  rows in order of time; equally spaced unless `years` says where rows are missing
  *
  * @param x  [nObs], or columns; y [nObs]; finite
  * @returns  standardErrors from (X*′X*)⁻¹ RSS* /(n − k) for both estimators: they take ρ for known, so they are too
  *           small in short series; caveats several-maxima, near-unit-root
- * @throws   InputError and NumericError as `leastSquares`; InputError too-few-observations;
- *           NumericError not-stationary when the likelihood grows up to |ρ| = 1, exact-fit
+ * @throws   InputError and NumericError as `leastSquares`; InputError too-few-observations,
+ *           unordered-years; NumericError not-stationary when the likelihood grows up to |ρ| = 1, exact-fit
  *
  * Differs  nlme::gls gives the marginal σ/√(1 − ρ²) as its sigma; R's arima divides by n for standard errors; the
  *          restricted likelihood of Harville 1974 has ½ log |X′X| more
@@ -60,7 +64,7 @@ const STARTS = Array.from({ length: 121 }, (_, i) => Math.tanh((i - 60) / 8));
  *          545–554 (restricted)
  * Checked  test/reference/statistics/gls-ar1.test.ts (B: dense covariance matrices in base R; R's arima)
  */
-export function glsAr1({ x, y, intercept, estimator }: GlsAr1Request): GlsAr1Fit {
+export function glsAr1({ x, y, intercept, estimator, years }: GlsAr1Request): GlsAr1Fit {
   const response = finiteValues('glsAr1', 'y', y);
   const columns = designColumns('glsAr1', x, response.length, intercept);
   const n = response.length;
@@ -75,7 +79,8 @@ export function glsAr1({ x, y, intercept, estimator }: GlsAr1Request): GlsAr1Fit
     });
   }
   const degrees = estimator === 'ml' ? n : n - k;
-  const trial = (rho: number) => tryRho(columns, response, rho, estimator);
+  const steps = yearSteps('glsAr1', years, n);
+  const trial = (rho: number) => tryRho(columns, response, { rho, steps, estimator });
 
   const starts = STARTS.map(trial);
   const maxima: Trial[] = [];
@@ -85,6 +90,7 @@ export function glsAr1({ x, y, intercept, estimator }: GlsAr1Request): GlsAr1Fit
   const logLikelihood = ({ rho, fit, variance }: Trial) =>
     -0.5 * degrees * (Math.log(2 * Math.PI * variance) + 1) +
     0.5 * Math.log((1 - rho) * (1 + rho)) -
+    ar1GapHeight(rho, steps).height -
     (estimator === 'ml' ? 0 : 0.5 * fit.logDeterminant);
   const edges = [starts[0]!, starts.at(-1)!].filter(({ rho, slope }) => rho * slope > 0);
   const best = maxima.reduce<Trial | null>((a, b) => (a && logLikelihood(a) >= logLikelihood(b) ? a : b), null);
@@ -101,32 +107,40 @@ export function glsAr1({ x, y, intercept, estimator }: GlsAr1Request): GlsAr1Fit
   };
 }
 
-function tryRho(columns: readonly Float64Array[], y: Float64Array, rho: number, estimator: 'ml' | 'reml'): Trial {
-  const fit = leastSquares({ columns: columns.map((c) => ar1Rows(c, rho)), y: ar1Rows(y, rho), caller: 'glsAr1' });
+function tryRho(
+  columns: readonly Float64Array[],
+  y: Float64Array,
+  { rho, steps, estimator }: { rho: number; steps: Float64Array; estimator: 'ml' | 'reml' },
+): Trial {
+  const freed = (column: Float64Array) => ar1Rows(column, rho, steps);
+  const fit = leastSquares({ columns: columns.map(freed), y: freed(y), caller: 'glsAr1' });
   const { nObs: n, nCoefficients: k, coefficients } = fit;
   const variance = fit.residualSumOfSquares / (estimator === 'ml' ? n : n - k);
   refuseExactFit('glsAr1', fit.residualSumOfSquares, sumOfProducts(fit.y, fit.y));
   const errors = y.map((value, t) => value - columns.reduce((fitted, c, j) => fitted + coefficients[j]! * c[t]!, 0));
   // ½ d RSS*/dρ at fixed b: by the envelope theorem b's own change does not count at the optimum.
-  const halfRssSlope = halfSlope(errors, fit.residuals, errors, fit.residuals, rho);
-  let slope = -rho / ((1 - rho) * (1 + rho)) - halfRssSlope / variance;
+  const halfRssSlope = sumOfProducts(fit.residuals, freedSlope(errors, fit.residuals, rho, steps));
+  let slope = -rho / ((1 - rho) * (1 + rho)) - ar1GapHeight(rho, steps).slope - halfRssSlope / variance;
   if (estimator === 'reml') {
-    // ½ d log|X*′X*|/dρ = ½ trace[(X*′X*)⁻¹ d(X*′X*)/dρ]
+    // ½ d log|X*′X*|/dρ = trace[(X*′X*)⁻¹ X*′(dX*/dρ)]
+    const slopes = columns.map((column, j) => freedSlope(column, fit.columns[j]!, rho, steps));
     for (let i = 0; i < k; i++) {
-      for (let j = 0; j < k; j++) {
-        const crossSlope = halfSlope(columns[i]!, fit.columns[i]!, columns[j]!, fit.columns[j]!, rho);
-        slope -= fit.unscaledCovariance[i * k + j]! * crossSlope;
-      }
+      for (let j = 0; j < k; j++)
+        slope -= fit.unscaledCovariance[i * k + j]! * sumOfProducts(fit.columns[i]!, slopes[j]!);
     }
   }
   return { rho, fit, variance, slope };
 }
 
-/** Half the derivative by ρ of Σ a*_t b*_t: −ρ a_1 b_1 − ½ Σ (a_{t−1} b*_t + a*_t b_{t−1}). */
-function halfSlope(a: Float64Array, aFreed: Float64Array, b: Float64Array, bFreed: Float64Array, rho: number): number {
-  return sum(
-    a.map((value, t) => (t === 0 ? -rho * value * b[0]! : -0.5 * (a[t - 1]! * bFreed[t]! + aFreed[t]! * b[t - 1]!))),
-  );
+/** Derivative by ρ of a column's freed rows. */
+function freedSlope(column: Float64Array, freed: Float64Array, rho: number, steps: Float64Array): Float64Array {
+  return column.map((value, t) => {
+    if (t === 0) return (-rho * value) / Math.sqrt((1 - rho) * (1 + rho));
+    const step = steps[t]!;
+    if (step === 1) return -column[t - 1]!;
+    const { variance, slope } = ar1GapVariance(rho, step);
+    return (-step * rho ** (step - 1) * column[t - 1]!) / Math.sqrt(variance) - (0.5 * freed[t]! * slope) / variance;
+  });
 }
 
 /** Bisection on the derivative: a maximum itself is flat, its derivative is not. */

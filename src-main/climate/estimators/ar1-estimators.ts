@@ -7,11 +7,12 @@ const errorWords = 'its error takes ρ for known';
 const shareWords = 'ρ = Σ e_t e_(t−1)/Σ e²_(t−1), repeated until ρ stands still';
 
 function ar1Slope(
-  { fit: { x, y }, intercept }: ComparedLine,
+  { fit: { x, y, years }, intercept }: ComparedLine,
   estimator: GlsAr1Input['estimator'],
   words: string,
 ): SlopeEstimate {
-  const line = ar1Line({ x, y, intercept, estimator });
+  const isByCalendar = estimator === 'ml' || estimator === 'reml';
+  const line = ar1Line({ x, y, intercept, estimator, ...(isByCalendar ? { years } : {}) });
   const place = intercept ? 1 : 0;
   const slope = line.coefficients[place] ?? NaN;
   const standardError = line.standardErrors[place] ?? NaN;
@@ -35,13 +36,13 @@ export const ar1Estimators: readonly Estimator[] = [
   {
     id: 'gls-ar1-ml',
     label: 'AR(1), maximum likelihood',
-    order: 'rows',
+    order: 'calendar',
     estimate: (line) => ar1Slope(line, 'ml', 'exact normal likelihood of all rows at its highest point'),
   },
   {
     id: 'gls-ar1-reml',
     label: 'AR(1), restricted likelihood',
-    order: 'rows',
+    order: 'calendar',
     estimate: (line) =>
       ar1Slope(line, 'reml', 'exact restricted normal likelihood (REML), which allows for the fitted coefficients'),
   },

@@ -3,7 +3,7 @@
 # huber.R, theil-sen.R). Everything is in the slope's own unit.
 slope_of <- function(estimate, se, df) c(estimate, se, estimate - qt(0.975, df) * se, estimate + qt(0.975, df) * se)
 
-estimators_in_r <- function(x, y, intercept, lag, small) {
+estimators_in_r <- function(x, y, intercept, lag, small, times) {
   n <- length(y)
   fit <- if (intercept) lm(y ~ x) else lm(y ~ x - 1)
   free <- lm(y ~ x)
@@ -17,7 +17,7 @@ estimators_in_r <- function(x, y, intercept, lag, small) {
   kernel <- toeplitz(pmax(0, 1 - (0:(n - 1)) / (lag + 1)))
   b <- coef(fit)[place]
   ar1 <- function(reml) {
-    best <- gls_at(x, y, intercept, gls_best(x, y, intercept, reml)$rho, reml)
+    best <- gls_at(x, y, intercept, gls_best(x, y, intercept, reml, times)$rho, reml, times)
     c(slope_of(best$coefficients[place], best$standardErrors[place], df), best$rho)
   }
   pw <- prais_winsten(x, y, intercept)

@@ -94,12 +94,13 @@ describe('the number under every estimator, against R', () => {
         covariance: { kind: 'newey-west', lag, smallSample: small },
       },
     );
-    const reference = await r.numbers('estimators_in_r(x, y, intercept, lag, small)', {
+    const reference = await r.numbers('estimators_in_r(x, y, intercept, lag, small, times)', {
       x: fit.x,
       y: fit.y,
       intercept,
       lag,
       small,
+      times: fit.years,
     });
     if (intercept) delete reference['ols-free-intercept'];
     expectClose(figures(comparison, Math.LN2), reference, near);
@@ -119,8 +120,8 @@ describe('the number under every estimator, against R', () => {
       },
     );
     // floor(4 (47/100)^(2/9)) = 3
-    const variables = { x: fit.x, y: fit.y, intercept: true, lag: 3, small: false };
-    const reference = await r.numbers('estimators_in_r(x, y, intercept, lag, small)', variables);
+    const variables = { x: fit.x, y: fit.y, intercept: true, lag: 3, small: false, times: fit.years };
+    const reference = await r.numbers('estimators_in_r(x, y, intercept, lag, small, times)', variables);
     delete reference['ols-free-intercept'];
     expectClose(figures(comparison, 10), reference, near);
   });

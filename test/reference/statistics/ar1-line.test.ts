@@ -16,7 +16,7 @@ beforeAll(async () => {
 afterAll(() => r.close());
 
 const near = { rel: 1e-9, abs: 0, why: 'two double-precision programs; rho stands still to 1e-12 in each' };
-const { co2Ppm, temperatureK } = co2AndTemperature();
+const { co2Ppm, temperatureK, years } = co2AndTemperature();
 const x = co2Ppm.map((value) => Math.log(value / (co2Ppm[0] ?? NaN)));
 const y = temperatureK.map((value) => value - (temperatureK[0] ?? NaN));
 
@@ -38,8 +38,28 @@ describe('ar1Line', () => {
     }
   });
 
-  it.each(['ml', 'reml'] as const)('%s is glsAr1', (estimator) => {
-    expect(ar1Line({ x, y, intercept: true, estimator })).toEqual(glsAr1({ x, y, intercept: true, estimator }));
+  it.each(['ml', 'reml'] as const)('%s is glsAr1, in years of the calendar where they are given', (estimator) => {
+    const request = { x, y, intercept: true, estimator };
+    expect(ar1Line(request)).toEqual(glsAr1(request));
+    expect(ar1Line({ ...request, years })).toEqual(glsAr1({ ...request, years }));
+    expect(ar1Line({ ...request, years }).rho).not.toBe(ar1Line(request).rho);
+  });
+
+  // 1964 is missing in the record.
+  it.each(['prais-winsten', 'cochrane-orcutt'] as const)('%s closes gaps up, and says so', async (estimator) => {
+    const request = { x, y, intercept: false, estimator };
+    const { caveats, logLikelihood, ...fit } = ar1Line({ ...request, years });
+    const { caveats: none, logLikelihood: closedUp, ...same } = ar1Line(request);
+    expect(fit).toEqual(same);
+    expect(none).toEqual([]);
+    expect(caveats.map(({ code }) => code)).toEqual(['gaps-closed-up']);
+    // The likelihood counts the calendar, so that it can be held against that of ml.
+    const e = y.map((value, t) => value - (fit.coefficients[0] ?? NaN) * (x[t] ?? NaN));
+    const variables = { e, rho: fit.rho, times: years };
+    const likelihood = await r.numbers('ar1_likelihood(e, rho, times)', variables);
+    expectClose({ logLikelihood: [logLikelihood] }, likelihood, near);
+    expect(logLikelihood).not.toBe(closedUp);
+    expect(logLikelihood).toBeLessThan(ar1Line({ ...request, estimator: 'ml', years }).logLikelihood);
   });
 });
 

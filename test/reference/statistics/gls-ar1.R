@@ -1,10 +1,10 @@
 # AR(1) GLS with the full n x n covariance of the errors: shares no step with an estimator that frees rows from rho.
-gls_at <- function(x, y, intercept, rho, reml) {
+gls_at <- function(x, y, intercept, rho, reml, times = seq_along(y)) {
   n <- length(y)
   X <- matrix(x, n)
   if (intercept) X <- cbind(1, X)
   k <- ncol(X)
-  V <- toeplitz(rho^(0:(n - 1))) / (1 - rho^2)
+  V <- rho^abs(outer(times, times, "-")) / (1 - rho^2)
   L <- t(chol(V))
   Xs <- forwardsolve(L, X)
   fit <- lm.fit(Xs, forwardsolve(L, y))
@@ -20,8 +20,8 @@ gls_at <- function(x, y, intercept, rho, reml) {
 }
 
 # The highest likelihood over a grid of rho, refined.
-gls_best <- function(x, y, intercept, reml) {
-  value <- function(rho) gls_at(x, y, intercept, rho, reml)$logLikelihood
+gls_best <- function(x, y, intercept, reml, times = seq_along(y)) {
+  value <- function(rho) gls_at(x, y, intercept, rho, reml, times)$logLikelihood
   grid <- seq(-0.9, 0.9, by = 0.1)
   top <- grid[which.max(sapply(grid, value))]
   best <- optimize(value, c(top - 0.1, top + 0.099999), maximum = TRUE, tol = 1e-10)

@@ -53,6 +53,26 @@ describe('glsAr1 against R', () => {
     }
   });
 
+  it('missing years: the calendar distance counts, in ml and reml', async () => {
+    const lake = await lakeHuron();
+    const isKept = (_: number, t: number) => ![20, 21, 22, 47, 60].includes(t) && t % 9 !== 4;
+    const times = lake.x.filter(isKept).map((value) => value + 1923);
+    const [x, y] = [lake.x.filter(isKept), lake.y.filter(isKept)];
+    for (const estimator of ['ml', 'reml'] as const) {
+      for (const intercept of [true, false]) {
+        const fit = glsAr1({ x, y, intercept, estimator, years: times });
+        const variables = { x, y, intercept, rho: fit.rho, reml: estimator === 'reml', times };
+        expectClose(figures(fit), await r.numbers('gls_at(x, y, intercept, rho, reml, times)', variables), near);
+        const best = await r.numbers('gls_best(x, y, intercept, reml, times)', variables);
+        expectClose([fit.rho], best['rho'], flat);
+        expect(Math.abs(glsAr1({ x, y, intercept, estimator }).rho - fit.rho)).toBeGreaterThan(0.01);
+      }
+    }
+    const consecutive = { ...record, intercept: true, estimator: 'ml' } as const;
+    expect(glsAr1({ ...consecutive, years: record.x.map((_, t) => 1900 + t) })).toEqual(glsAr1(consecutive));
+    expect(() => glsAr1({ ...consecutive, years: record.x.map((_, t) => 1900 - t) })).toThrow('glsAr1, years[1]');
+  });
+
   it('two predictors', async () => {
     const x = [record.x, years.map((year) => (year - 1985) / 10)];
     const fit = glsAr1({ x, y: record.y, intercept: true, estimator: 'ml' });

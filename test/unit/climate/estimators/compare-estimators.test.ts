@@ -147,13 +147,11 @@ describe('compareEstimators', () => {
     const { gaps, estimates, residualTests: tests } = compareEstimators(gapped);
     expect(gaps.years).toEqual([1970, 1971]);
     expect(gaps.sentence).toMatch(/No value in 1970–1971\. Taking .* without the calendar distance: .*Newey–West/);
-    expect(gaps.sentence).toContain('The calendar distance is used by ARMA(1,1)');
+    expect(gaps.sentence).toMatch(/The calendar distance is used by AR\(1\), .*likelihood; ARMA\(1,1\)/);
     const warned = estimates.filter(({ caveats }) => caveats.some(({ code }) => code === 'gap-in-window'));
     expect(warned.map(({ id }) => id)).toEqual([
       'ols-newey-west',
       'block-bootstrap',
-      'gls-ar1-ml',
-      'gls-ar1-reml',
       'prais-winsten',
       'cochrane-orcutt',
     ]);
@@ -207,7 +205,7 @@ describe('residualTestLines', () => {
   it('has the figures of residualTests, at the lag of the serial errors', () => {
     const computation = logRegressionClaim(record);
     const line = fittedLine({ computation, recomputation: recompute(computation) });
-    const { durbinWatson, durbinWatsonTest, breuschGodfrey, ljungBox } = residualTests({
+    const { durbinWatson, durbinWatsonTest, breuschGodfrey, ljungBox, ...others } = residualTests({
       x: line.fit.x,
       y: line.fit.y,
       intercept: false,
@@ -217,6 +215,8 @@ describe('residualTestLines', () => {
       { id: 'durbin-watson', statistic: durbinWatson, p: durbinWatsonTest?.p, caveats: [{ code: 'no-intercept' }] },
       { id: 'breusch-godfrey', ...breuschGodfrey },
       { id: 'ljung-box', ...ljungBox },
+      { id: 'breusch-pagan', p: others.breuschPagan.p },
+      { id: 'jarque-bera', p: others.jarqueBera.p, caveats: [{ code: 'short-for-normality' }] },
     ]);
   });
 });

@@ -45,7 +45,7 @@ export type EstimatorEstimate = z.infer<typeof estimatorEstimate>;
 
 /** One test of the residuals of the least-squares line. */
 export const residualTest = z.object({
-  id: z.enum(['durbin-watson', 'breusch-godfrey', 'ljung-box']),
+  id: z.enum(['durbin-watson', 'breusch-godfrey', 'ljung-box', 'breusch-pagan', 'jarque-bera']),
   label: z.string(),
   /** What a small p speaks against. */
   asks: z.string(),

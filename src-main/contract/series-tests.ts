@@ -14,6 +14,8 @@ export const residualTestsInput = z.object({
   lags: z.int().min(1),
   /** Fitted ARMA coefficients that Ljung–Box takes off its degrees of freedom; 0 unless given. */
   fitdf: lags.optional(),
+  /** Koenker's studentised Breusch–Pagan test unless the original one is asked for. */
+  breuschPaganKind: z.enum(['studentised', 'original']).optional(),
 });
 export type ResidualTestsInput = z.infer<typeof residualTestsInput>;
 
@@ -29,6 +31,8 @@ export const residualTestsValue = z.object({
     .nullable(),
   breuschGodfrey: chiSquared,
   ljungBox: chiSquared,
+  jarqueBera: chiSquared.extend({ skewness: z.number(), kurtosis: z.number() }),
+  breuschPagan: chiSquared.extend({ kind: z.enum(['studentised', 'original']) }),
   caveats,
 });
 export type ResidualTestsValue = z.infer<typeof residualTestsValue>;

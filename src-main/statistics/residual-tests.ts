@@ -1,11 +1,13 @@
 import type { Caveat } from '../contract/primitives.ts';
 import type { ResidualTestsInput, ResidualTestsValue } from '../contract/series-tests.ts';
 import { breuschGodfrey } from './breusch-godfrey.ts';
+import { breuschPagan } from './breusch-pagan.ts';
 import { designColumns } from './design-columns.ts';
 import { durbinWatsonTest } from './durbin-watson-test.ts';
 import { durbinWatson } from './durbin-watson.ts';
 import { effectiveSampleSize } from './effective-sample-size.ts';
 import { refuseExactFit } from './exact-fit.ts';
+import { jarqueBera } from './jarque-bera.ts';
 import { lagOneAutocorrelation } from './lag-one-autocorrelation.ts';
 import { leastSquares } from './least-squares.ts';
 import { ljungBox } from './ljung-box.ts';
@@ -20,7 +22,7 @@ const noExactP: Caveat = {
 };
 
 /**
- * What the residuals of a least-squares line say about its errors: are they correlated in time?
+ * What the residuals of a least-squares line say about its errors: are they correlated in time, of one variance, normal?
  *
  * Model    the fit of y on x by least squares; each test as its own function says
  * Assumes  rows in order of time, equally spaced, without gaps
@@ -28,12 +30,14 @@ const noExactP: Caveat = {
  * @param x      [nObs], or columns; y [nObs]; finite
  * @param lags   how far back Breusch–Godfrey and Ljung–Box look, 1 … n − k − 1
  * @param fitdf  fitted ARMA coefficients; 0 unless given
+ * @param breuschPaganKind  studentised unless given
  * @returns  durbinWatsonTest null beyond 400 rows, with a caveat; caveats no-intercept, no-exact-p, lags-against-length
  * @throws   InputError and NumericError as `leastSquares`; NumericError exact-fit; InputError out-of-range
  *
  * Checked  test/reference/statistics/residual-tests.test.ts (B: base R)
  */
-export function residualTests({ x, y, intercept, lags, fitdf = 0 }: ResidualTestsInput): ResidualTestsValue {
+export function residualTests(input: ResidualTestsInput): ResidualTestsValue {
+  const { x, y, intercept, lags, fitdf = 0, breuschPaganKind: kind = 'studentised' } = input;
   const columns = designColumns('residualTests', x, y.length, intercept);
   const fit = leastSquares({ columns, y, caller: 'residualTests' });
   refuseExactFit('residualTests', fit.residualSumOfSquares, sumOfProducts(fit.y, fit.y));
@@ -47,6 +51,8 @@ export function residualTests({ x, y, intercept, lags, fitdf = 0 }: ResidualTest
     durbinWatsonTest: exact && { p: exact.p, bounds5Percent: exact.bounds5Percent },
     breuschGodfrey: breuschGodfrey(fit, lags),
     ljungBox: ljungBox(residuals, lags, fitdf),
+    jarqueBera: jarqueBera(residuals),
+    breuschPagan: { ...breuschPagan(fit, intercept, kind), kind },
     caveats: [...(exact ? exact.caveats : [noExactP]), ...lagCaveats(fit.nObs, lags)],
   };
 }

@@ -72,10 +72,12 @@ describe.each(methods)('compute %s', (method) => {
 /** Each parameter away from its plain value, twice: the answer moves, so the parameter arrives. */
 const parameters: [Method, string, readonly [object, object]][] = [
   ['residual-tests', 'lags', [{ lags: 2 }, { lags: 5 }]],
+  ['residual-tests', 'breuschPaganKind', [{ breuschPaganKind: 'original' }, { breuschPaganKind: 'studentised' }]],
   ['residual-tests', 'fitdf', [{ fitdf: 1 }, { fitdf: 2 }]],
   ['residual-tests', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['gls-ar1', 'estimator', [{ estimator: 'reml' }, { estimator: 'prais-winsten' }]],
   ['gls-ar1', 'estimator', [{ estimator: 'cochrane-orcutt' }, { estimator: 'ml' }]],
+  ['gls-ar1', 'years', [{ years: withGapAt(5) }, { years: withGapAt(15) }]],
   ['gls-ar1', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['gls-arma11', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['gls-arma11', 'years', [{ years: withGapAt(5) }, { years: withGapAt(15) }]],

@@ -8,10 +8,8 @@ import { co2AndTemperature } from '../../helpers/real-series.ts';
 
 let r: RSession;
 beforeAll(async () => {
-  r = await startR(
-    new URL('./serial-correlation.R', import.meta.url),
-    new URL('./durbin-watson-test.R', import.meta.url),
-  );
+  const files = ['serial-correlation.R', 'durbin-watson-test.R', 'residual-distribution.R'];
+  r = await startR(...files.map((name) => new URL(name, import.meta.url)));
 });
 afterAll(() => r.close());
 
@@ -22,12 +20,19 @@ const y = temperatureK.map((value) => value - (temperatureK[0] ?? NaN));
 
 describe('residualTests', () => {
   it('are those of R on lm’s residuals: two numbers of lags, with and without intercept and fitted coefficients', async () => {
-    for (const [intercept, lags, fitdf] of [
-      [true, 3, undefined],
-      [true, 5, 1],
-      [false, 4, 2],
+    for (const [intercept, lags, fitdf, kind] of [
+      [true, 3, undefined, undefined],
+      [true, 5, 1, 'original'],
+      [false, 4, 2, 'studentised'],
     ] as const) {
-      const found = residualTests({ x, y, intercept, lags, ...(fitdf === undefined ? {} : { fitdf }) });
+      const found = residualTests({
+        x,
+        y,
+        intercept,
+        lags,
+        ...(fitdf === undefined ? {} : { fitdf }),
+        ...(kind === undefined ? {} : { breuschPaganKind: kind }),
+      });
       const reference = await r.numbers(
         `fit <- if (intercept) lm(y ~ x) else lm(y ~ x - 1)
          e <- residuals(fit)
@@ -35,9 +40,12 @@ describe('residualTests', () => {
          bg <- breusch_godfrey(fit, lags)
          r1 <- lag_one(e)
          list(lag1 = r1, nEff = length(e) * (1 - r1) / (1 + r1), durbinWatson = sum(diff(e)^2) / sum(e^2),
-              lb = unlist(lb), bg = unlist(bg))`,
-        { x, y, intercept, lags, fitdf: fitdf ?? 0 },
+              lb = unlist(lb), bg = unlist(bg), jb = unlist(jarque_bera(e)),
+              bp = unlist(breusch_pagan(x, y, intercept, kind)))`,
+        { x, y, intercept, lags, fitdf: fitdf ?? 0, kind: kind ?? 'studentised' },
       );
+      const { jarqueBera: jb, breuschPagan: bp } = found;
+      expect(bp.kind).toBe(kind ?? 'studentised');
       expectClose(
         {
           lag1: [found.lag1],
@@ -45,6 +53,8 @@ describe('residualTests', () => {
           durbinWatson: [found.durbinWatson],
           lb: [found.ljungBox.statistic, found.ljungBox.df, found.ljungBox.p],
           bg: [found.breuschGodfrey.statistic, found.breuschGodfrey.df, found.breuschGodfrey.p],
+          jb: [jb.statistic, jb.df, jb.p, jb.skewness, jb.kurtosis],
+          bp: [bp.statistic, bp.df, bp.p],
         },
         reference,
         near,

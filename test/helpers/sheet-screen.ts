@@ -1,5 +1,4 @@
 import { defineComponent, h, type Component } from 'vue';
-import type { Claim } from '../../src-main/contract/claim.ts';
 import type { ClaimView, Session } from '../../src-main/contract/project.ts';
 import { statementQuestions } from '../../src-main/quantities/statement-questions.ts';
 import { provideClaimSheet } from '../../src-renderer/sheet/use-claim-sheet.ts';
@@ -89,7 +88,7 @@ export function mountOnSheet(part: Component, options: SheetOptions = {}): Promi
     stubs: ['FigurePanel'],
     prepare(host) {
       host.reply('claim.view', () => view);
-      host.reply('claim.update', ({ change }) => (view = { ...view, claim: { ...view.claim, ...change } as Claim }));
+      host.reply('claim.update', ({ change }) => (view = { ...view, claim: { ...view.claim, ...change } }));
       options.prepare?.(host);
     },
   });

@@ -17,8 +17,9 @@ export type BreuschPaganKind = 'studentised' | 'original';
  * Assumes  uncorrelated errors; normal ones for original
  *
  * @param fit  columns and residuals of an unweighted least-squares fit
- * @param hasIntercept  whether the first column is one of ones; without it one is added to the auxiliary regression, since
- *             a constant variance is what is tested
+ * @param hasIntercept  whether the first column is one of ones; without a constant column one is added to the auxiliary
+ *             regression, since a constant variance is what is tested
+ * @returns  statistic 0 and p 1 with no degree of freedom when there is no predictor along which it could change
  * @throws   InputError wrong-length, not-finite, too-few-observations; NumericError exact-fit, rank-deficient
  *
  * Differs  lmtest::bptest is studentised unless told otherwise, Stata's estat hettest is original; for a line through the
@@ -36,11 +37,17 @@ export function breuschPagan(
   const variance = mean(squares);
   refuseExactFit('breuschPagan', variance);
   const g = squares.map((value) => value / variance);
-  const columns = hasIntercept ? fit.columns : [g.map(() => 1), ...fit.columns];
+  const hasConstant = hasIntercept || fit.columns.some(isConstant);
+  const columns = hasConstant ? fit.columns : [g.map(() => 1), ...fit.columns];
   const df = columns.length - 1;
+  if (df === 0) return { statistic: 0, df, p: 1 };
   const auxiliary = leastSquares({ columns, y: g, caller: 'breuschPagan' });
   const explained = sum(auxiliary.fitted.map((value) => (value - 1) ** 2));
   const total = sum(g.map((value) => (value - 1) ** 2));
   const statistic = kind === 'original' ? explained / 2 : total === 0 ? 0 : (e.length * explained) / total;
   return { statistic, df, p: upperTailChiSquared(statistic, df) };
+}
+
+function isConstant(column: ArrayLike<number>): boolean {
+  return column[0] !== 0 && Array.from(column).every((value) => value === column[0]);
 }

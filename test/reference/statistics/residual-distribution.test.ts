@@ -56,6 +56,26 @@ describe('breuschPagan', () => {
     }
   });
 
+  it('a constant among the predictors serves as the intercept; alone it leaves nothing to follow', () => {
+    const wiggle = years.map((year) => Math.sin(year / 3));
+    const asIntercept = leastSquares({ columns: designColumns('test', wiggle, y.length, true), y });
+    const asPredictor = leastSquares({
+      columns: designColumns('test', [years.map(() => 5), wiggle], y.length, false),
+      y,
+    });
+    expectClose(breuschPagan(asPredictor, false, 'original'), breuschPagan(asIntercept, true, 'original'), near);
+    const level = leastSquares({
+      columns: designColumns(
+        'test',
+        years.map(() => 5),
+        y.length,
+        false,
+      ),
+      y,
+    });
+    expect(breuschPagan(level, false, 'studentised')).toEqual({ statistic: 0, df: 0, p: 1 });
+  });
+
   it('residuals all of one size: nothing changes along x', () => {
     const fit = {
       columns: [

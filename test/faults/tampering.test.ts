@@ -1,12 +1,13 @@
 import { createHash } from 'node:crypto';
 import { readFileSync, truncateSync, writeFileSync } from 'node:fs';
-import Database from 'better-sqlite3';
+import type Database from 'better-sqlite3';
 import { describe, expect, it } from 'vitest';
 import { recordKind, type VerifyReport } from '../../src-main/contract/trail.ts';
 import { ProjectError } from '../../src-main/errors.ts';
 import { openProject } from '../../src-main/project/open-project.ts';
 import { readProjectTitle } from '../../src-main/project/read-project-title.ts';
 import { verifyProject } from '../../src-main/project/verify-project.ts';
+import { editFile, editPastTriggers } from '../helpers/edit-past-triggers.ts';
 import { holder, signedProject } from '../helpers/sample-project.ts';
 
 /** A closed, sound project of nine entries: source, data, claim, result, mark, note, finding, sign-off. */
@@ -14,28 +15,6 @@ function closedProject(): string {
   const project = signedProject();
   project.close();
   return project.path;
-}
-
-/** What somebody with a database program at hand would do. */
-function edit(path: string, work: (db: Database.Database) => void): void {
-  const db = new Database(path);
-  db.pragma('foreign_keys = OFF');
-  work(db);
-  db.close();
-}
-
-/** Somebody careful: takes the triggers of a table away, works, and puts them back as they were. */
-function editPastTriggers(path: string, table: string, work: (db: Database.Database) => void): void {
-  edit(path, (db) => {
-    const triggers = db
-      .prepare<[string], { name: string; sql: string }>(
-        `SELECT name, sql FROM sqlite_schema WHERE type = 'trigger' AND tbl_name = ?`,
-      )
-      .all(table);
-    for (const { name } of triggers) db.exec(`DROP TRIGGER ${name}`);
-    work(db);
-    for (const { sql } of triggers) db.exec(sql);
-  });
 }
 
 /** Changes one byte of the file where `text` stands in it. */
@@ -157,7 +136,7 @@ describe('a changed trail', () => {
     ['no row', 'DELETE FROM head', 'head-mismatch @ head'],
   ])('names a head with %s', (_, sql, expected) => {
     const path = closedProject();
-    edit(path, (db) => db.exec(sql));
+    editFile(path, (db) => db.exec(sql));
     expect(found(verifyProject(path))).toEqual([expected]);
   });
 
@@ -206,7 +185,7 @@ describe('a changed number', () => {
 
   it.each(recordKind.options)('is named with its place in table %s', (kind) => {
     const path = closedProject();
-    edit(path, (db) => db.exec(`UPDATE ${kind} SET body = ${numbers[kind]}`));
+    editFile(path, (db) => db.exec(`UPDATE ${kind} SET body = ${numbers[kind]}`));
     const report = verifyProject(path);
     expect(found(report)).toContain(`record-altered @ ${kind} 1`);
     const isUnderSignature = ['claim', 'result', 'mark', 'finding', 'signature'].includes(kind);
@@ -215,7 +194,7 @@ describe('a changed number', () => {
 
   it('is told with both values and the entry that says otherwise', () => {
     const path = closedProject();
-    edit(path, (db) => db.exec(`UPDATE claim SET body = ${numbers.claim}`));
+    editFile(path, (db) => db.exec(`UPDATE claim SET body = ${numbers.claim}`));
     expect(verifyProject(path).problems[0]).toEqual({
       code: 'record-altered',
       where: 'claim 1',
@@ -225,13 +204,13 @@ describe('a changed number', () => {
 
   it('is named in the numbering of records', () => {
     const path = closedProject();
-    edit(path, (db) => db.exec(`UPDATE sqlite_sequence SET seq = 5 WHERE name = 'note'`));
+    editFile(path, (db) => db.exec(`UPDATE sqlite_sequence SET seq = 5 WHERE name = 'note'`));
     expect(found(verifyProject(path))).toEqual(['record-altered @ numbering of note']);
   });
 
   it('names records that were put in, taken out, or made unreadable by hand', () => {
     const path = closedProject();
-    edit(path, (db) => {
+    editFile(path, (db) => {
       db.exec(`INSERT INTO note (id, body) VALUES (2, '{"id":2,"claimId":1,"text":"","author":"","writtenAt":""}')`);
       db.exec('DELETE FROM mark');
       db.pragma('ignore_check_constraints = ON');
@@ -246,7 +225,7 @@ describe('a changed number', () => {
 
   it('reads a record that no longer is one as an error, not as a record', () => {
     const path = closedProject();
-    edit(path, (db) => db.exec(`UPDATE series SET body = json_set(body, '$.endYear', 'soon')`));
+    editFile(path, (db) => db.exec(`UPDATE series SET body = json_set(body, '$.endYear', 'soon')`));
     const project = openProject(path, { readOnly: true, holder });
     expect(() => project.list('series')).toThrow(/Verify the project/);
     project.close();
@@ -303,7 +282,7 @@ describe('a changed file', () => {
     ],
   ])('with %s is refused, and verified all the same', (_, sql, difference) => {
     const path = closedProject();
-    edit(path, (db) => {
+    editFile(path, (db) => {
       db.exec(sql);
       db.exec(`UPDATE claim SET body = json_set(body, '$.seed', 2)`);
     });
@@ -316,28 +295,28 @@ describe('a changed file', () => {
 
   it('with another application id is refused, and verified all the same', () => {
     const path = closedProject();
-    edit(path, (db) => db.pragma('application_id = 1'));
+    editFile(path, (db) => db.pragma('application_id = 1'));
     expect(codeOnOpening(path)).toBe('other-application');
     expect(found(verifyProject(path))).toEqual(['schema @ file header']);
   });
 
   it('switched to another journal is refused, and verified all the same', () => {
     const path = closedProject();
-    edit(path, (db) => db.pragma('journal_mode = WAL'));
+    editFile(path, (db) => db.pragma('journal_mode = WAL'));
     expect(codeOnOpening(path)).toBe('other-application');
     expect(found(verifyProject(path))).toEqual(['schema @ file header']);
   });
 
   it('of a newer version is refused in words that say so', () => {
     const path = closedProject();
-    edit(path, (db) => db.pragma('user_version = 2'));
+    editFile(path, (db) => db.pragma('user_version = 2'));
     expect(codeOnOpening(path)).toBe('newer-version');
     expect(() => verifyProject(path)).toThrow(/newer Footing/);
   });
 
   it('of a version that never was is refused', () => {
     const path = closedProject();
-    edit(path, (db) => db.pragma('user_version = 0'));
+    editFile(path, (db) => db.pragma('user_version = 0'));
     expect(codeOnOpening(path)).toBe('unknown-version');
     expect(found(verifyProject(path))).toEqual(['schema @ file header']);
   });

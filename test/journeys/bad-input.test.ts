@@ -6,7 +6,7 @@ import type { Page } from 'playwright-core';
 import { describe, expect, it } from 'vitest';
 import { freshFolder, openBrowserStage } from '../helpers/browser.ts';
 import { footingCommand } from '../helpers/footing-command.ts';
-import { chooseFiles, createProject, goTo, introduceReviewer, section, stored } from './flows/steps.ts';
+import { chooseFiles, createProject, goTo, introduceReviewer, openClaim, section, stored } from './flows/steps.ts';
 
 const nEntries = (page: Page) =>
   page
@@ -92,7 +92,7 @@ describe('A wrong passphrase', () => {
     const { page } = await openBrowserStage({ home });
     await introduceReviewer(page, 'Ada Brandvold', 'reviewer');
     await page.getByRole('button', { name: 'Open the worked example' }).click();
-    await page.getByRole('link', { name: '0.19 °C in ten years since 1970' }).first().click();
+    await openClaim(page, '0.19 °C in ten years since 1970');
     const finding = section(page, 'Finding');
     const signFinding = finding.getByRole('button', { name: 'Sign the finding' });
     await finding.getByLabel('Passphrase for your new signing key').fill('seventeen wet herons');
@@ -103,7 +103,7 @@ describe('A wrong passphrase', () => {
     await stored(page, () => signFinding.click());
     await finding.getByText('The signature holds.').waitFor();
 
-    await page.getByRole('link', { name: 'At most 1.9 °C per doubling' }).first().click();
+    await openClaim(page, 'At most 1.9 °C per doubling');
     const passphrase = finding.getByLabel('Passphrase of your signing key');
     await finding.getByLabel('Remark, signed with it').fill('Read twice.');
     await passphrase.fill('not the right one');

@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { freshFolder, openBrowserStage } from '../helpers/browser.ts';
 import { footingCommand } from '../helpers/footing-command.ts';
-import { section, stored } from './flows/steps.ts';
+import { openClaim, section, stored } from './flows/steps.ts';
 
 /** From the click to the sheet that says so, on a machine with other work to do. The core itself stops within 200 ms. */
 const cancelledWithinMs = 3000;
@@ -50,7 +50,7 @@ describe('Long work', () => {
   it('says how far it is, can be cancelled, and leaves nothing behind', async () => {
     const home = freshFolder('home');
     const { page } = await openBrowserStage({ home, projectPath: projectWithLongRecord(home) });
-    await page.getByRole('link', { name: 'A slow rise' }).first().click();
+    await openClaim(page, 'A slow rise');
     const robustness = section(page, 'Robustness');
     const trail = page.getByRole('navigation', { name: 'Project' }).getByRole('link', { name: /^Trail/ });
     const before = await trail.innerText();

@@ -9,7 +9,7 @@ import { browser, freshFolder } from '../../helpers/browser.ts';
 import { footingCommand } from '../../helpers/footing-command.ts';
 import { watchPage, type OpenStage } from '../../helpers/stage.ts';
 import { inventedForcingTable, lineThroughFirstYear } from './record.ts';
-import { chooseFiles, createProject, goTo, introduceReviewer, section, stored } from './steps.ts';
+import { chooseFiles, createProject, goTo, introduceReviewer, openClaim, section, stored } from './steps.ts';
 
 const real = (name: string) =>
   fileURLToPath(new URL(`../../../node_modules/vega-datasets/data/${name}`, import.meta.url));
@@ -320,7 +320,7 @@ async function counterSign(open: OpenStage, project: string): Promise<void> {
   await introduceReviewer(page, 'Tove Marchetti', 'second reviewer');
   await page.getByLabel('Or the path of a project file').fill(project);
   await page.getByRole('button', { name: 'Open', exact: true }).click();
-  await page.getByRole('link', { name: title }).first().click();
+  await openClaim(page, title);
   const finding = section(page, 'Finding');
   await finding.getByRole('radio', { name: /^Counter-sign/ }).check();
   await finding.getByLabel('Passphrase for your new signing key').fill(secondPassphrase);
@@ -333,7 +333,7 @@ async function counterSign(open: OpenStage, project: string): Promise<void> {
 
 async function revise(open: OpenStage, home: string, project: string): Promise<void> {
   const { page } = await open({ home, projectPath: project });
-  await page.getByRole('link', { name: title }).first().click();
+  await openClaim(page, title);
   const finding = section(page, 'Finding');
   await finding
     .getByLabel('Start a new revision: what changes, and why')

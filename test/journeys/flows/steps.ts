@@ -21,6 +21,14 @@ export async function goTo(page: Page, shelf: 'Sources' | 'Series' | 'Claims' | 
   await page.getByRole('heading', { name: shelf, level: 1 }).or(page.locator('.page')).first().waitFor();
 }
 
+/** Opens the sheet of a claim, and waits until that sheet has taken the place of any other. */
+export async function openClaim(page: Page, title: string): Promise<void> {
+  const link = page.getByRole('link', { name: title }).first();
+  const claimId = /#\/claims\/(\d+)/.exec((await link.getAttribute('href')) ?? '')?.[1];
+  await link.click();
+  await page.getByText(`Claim ${claimId} ·`).waitFor();
+}
+
 /** Paths, or content made here, given to the file chooser that a button opens. */
 export async function chooseFiles(
   page: Page,

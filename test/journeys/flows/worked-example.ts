@@ -3,7 +3,7 @@ import type { Locator, Page } from 'playwright-core';
 import { expect } from 'vitest';
 import { browser } from '../../helpers/browser.ts';
 import { watchPage, type OpenStage } from '../../helpers/stage.ts';
-import { introduceReviewer, section } from './steps.ts';
+import { introduceReviewer, openClaim, section } from './steps.ts';
 
 /** From an empty start to the worked example, read down its stem, and its figures kept as files. */
 export async function workedExample(open: OpenStage): Promise<void> {
@@ -13,7 +13,7 @@ export async function workedExample(open: OpenStage): Promise<void> {
   await page.getByRole('button', { name: 'Open the worked example' }).click();
   await page.getByRole('heading', { name: 'Claims', level: 1 }).waitFor();
   await page.getByText('Invented data', { exact: true }).waitFor();
-  await page.getByRole('link', { name: 'At most 1.9 °C per doubling' }).first().click();
+  await openClaim(page, 'At most 1.9 °C per doubling');
   await page.getByText('Invented data: a worked example, no real record.').waitFor();
 
   const figures = page.getByRole('figure');

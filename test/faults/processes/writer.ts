@@ -136,9 +136,10 @@ function fill(project: Project): void {
 
 const open = () => openProject(path, { holder });
 if (mode === 'hold') {
-  open();
+  // Kept in use: what nobody refers to any more is closed, and its lock let go.
+  const held = open();
   tell('open');
-  setInterval(() => undefined, 1000);
+  setInterval(() => held.head(), 1000);
 } else if (mode === 'work') work(open(), Number(parameter));
 else if (mode === 'take-turns') await takeTurns(Number(parameter));
 else if (mode === 'die-inside') dieInside(open());

@@ -1,22 +1,9 @@
 import { z } from 'zod';
 import { anchor, evidence, procedure, slopeCovariance, statement, tolerance } from './claim.ts';
 import { estimatorComparison } from './estimator-comparison.ts';
-import {
-  column,
-  glsAr1Input,
-  glsAr1Value,
-  glsArma11Input,
-  glsArma11Value,
-  huberInput,
-  huberValue,
-  predictors,
-  theilSenInput,
-  theilSenValue,
-  yorkInput,
-  yorkValue,
-} from './line-estimators.ts';
+import { column, lineMethods, predictors } from './line-estimators.ts';
 import { year } from './primitives.ts';
-import { blockBootstrapInput, blockBootstrapValue } from './resampling.ts';
+import { resamplingMethods } from './resampling.ts';
 import {
   assumptionsAnswer,
   claimSweep,
@@ -27,16 +14,8 @@ import {
   windowSweep,
 } from './result.ts';
 import { seriesData } from './series.ts';
-import {
-  adfInput,
-  adfValue,
-  engleGrangerInput,
-  engleGrangerValue,
-  kpssInput,
-  kpssValue,
-  residualTestsInput,
-  residualTestsValue,
-} from './series-tests.ts';
+import { seriesTestMethods } from './series-tests.ts';
+import { specificationTestMethods } from './specification-tests.ts';
 
 const covariance = z.object({
   kind: z.enum(['classical', 'hc0', 'hc1', 'hc2', 'hc3', 'newey-west']),
@@ -104,16 +83,10 @@ export type ClaimSweepRequest = z.infer<typeof claimSweepRequest>;
 /** Every method that `footing compute` and the stored results can name. */
 export const computeMethods = {
   regression: { input: regressionRequest, value: regressionAnswer },
-  'residual-tests': { input: residualTestsInput, value: residualTestsValue },
-  'gls-ar1': { input: glsAr1Input, value: glsAr1Value },
-  'gls-arma11': { input: glsArma11Input, value: glsArma11Value },
-  'theil-sen': { input: theilSenInput, value: theilSenValue },
-  huber: { input: huberInput, value: huberValue },
-  york: { input: yorkInput, value: yorkValue },
-  adf: { input: adfInput, value: adfValue },
-  kpss: { input: kpssInput, value: kpssValue },
-  'engle-granger': { input: engleGrangerInput, value: engleGrangerValue },
-  'block-bootstrap': { input: blockBootstrapInput, value: blockBootstrapValue },
+  ...lineMethods,
+  ...seriesTestMethods,
+  ...specificationTestMethods,
+  ...resamplingMethods,
   'window-sweep': { input: windowSweepRequest, value: windowSweep },
   'energy-budget': { input: energyBudgetRequest, value: energyBudgetAnswer },
   derivation: { input: derivationRequest, value: derivationAnswer },

@@ -14,7 +14,7 @@ export const rowYears = z.array(year).min(1).max(1_000_000);
 /** Coefficients of a line with their standard errors, the intercept first when there is one. */
 const line = z.object({ coefficients: z.array(z.number()), standardErrors: z.array(z.number()) });
 
-export const glsAr1Input = z.object({
+const glsAr1Input = z.object({
   x: predictors,
   y: column,
   intercept: z.boolean(),
@@ -24,7 +24,7 @@ export const glsAr1Input = z.object({
 });
 export type GlsAr1Input = z.infer<typeof glsAr1Input>;
 
-export const glsAr1Value = line.extend({
+const glsAr1Value = line.extend({
   /** Lag-one coefficient of the errors. */
   rho: z.number(),
   /** Standard deviation of the innovations: RSS* over n for ml, over n − k otherwise. */
@@ -35,7 +35,7 @@ export const glsAr1Value = line.extend({
 });
 export type GlsAr1Value = z.infer<typeof glsAr1Value>;
 
-export const glsArma11Input = z.object({
+const glsArma11Input = z.object({
   x: predictors,
   y: column,
   intercept: z.boolean(),
@@ -45,7 +45,7 @@ export const glsArma11Input = z.object({
 });
 export type GlsArma11Input = z.infer<typeof glsArma11Input>;
 
-export const glsArma11Value = line.extend({
+const glsArma11Value = line.extend({
   /** Of the error one step before. */
   phi: z.number(),
   /** Of the innovation one step before; the sign is that of e_t = φ e_(t−1) + u_t + θ u_(t−1). */
@@ -56,9 +56,9 @@ export const glsArma11Value = line.extend({
   caveats,
 });
 
-export const theilSenInput = z.object({ x: column, y: column });
+const theilSenInput = z.object({ x: column, y: column });
 
-export const theilSenValue = z.object({
+const theilSenValue = z.object({
   slope: z.number(),
   /** Median of y less slope times median of x. */
   intercept: z.number(),
@@ -67,7 +67,7 @@ export const theilSenValue = z.object({
   caveats,
 });
 
-export const huberInput = z.object({
+const huberInput = z.object({
   x: predictors,
   y: column,
   intercept: z.boolean(),
@@ -75,7 +75,7 @@ export const huberInput = z.object({
   k: z.number(),
 });
 
-export const huberValue = line.extend({
+const huberValue = line.extend({
   /** Median of |residual| over 0.6745. */
   scale: z.number(),
   /** By row: 1 where it counts in full. */
@@ -84,7 +84,7 @@ export const huberValue = line.extend({
   caveats,
 });
 
-export const yorkInput = z.object({
+const yorkInput = z.object({
   x: column,
   y: column,
   /** Standard deviations of the errors, one for all rows or one for each. */
@@ -94,7 +94,7 @@ export const yorkInput = z.object({
   r: oneOrEach.optional(),
 });
 
-export const yorkValue = z.object({
+const yorkValue = z.object({
   slope: z.number(),
   intercept: z.number(),
   /** From the stated errors alone, at the adjusted points (York et al. 2004). */
@@ -109,3 +109,47 @@ export const yorkValue = z.object({
   scaledSlopeStandardError: z.number(),
   scaledInterceptStandardError: z.number(),
 });
+
+const demingInput = z.object({
+  x: column,
+  y: column,
+  /** Variance of the errors of y over that of the errors of x; 1 gives the major axis. */
+  delta: z.number(),
+});
+
+const demingValue = z.object({
+  slope: z.number(),
+  intercept: z.number(),
+  /** By jackknife. */
+  slopeStandardError: z.number(),
+  interceptStandardError: z.number(),
+  caveats,
+});
+
+const attenuationInput = z.object({
+  x: column,
+  y: column,
+  /** Standard deviation of the errors of x, in the unit of x. */
+  xErrorStandardDeviation: z.number(),
+});
+
+const attenuationValue = z.object({
+  slope: z.number(),
+  /** The share of the variance of x that is not error. */
+  reliability: z.number(),
+  correctedSlope: z.number(),
+  /** The two regressions: y on x, and x on y turned round; null when x and y are uncorrelated. */
+  bounds: z.object({ direct: z.number(), reverse: z.number().nullable() }),
+  caveats,
+});
+
+/** Lines other than that of least squares. */
+export const lineMethods = {
+  'gls-ar1': { input: glsAr1Input, value: glsAr1Value },
+  'gls-arma11': { input: glsArma11Input, value: glsArma11Value },
+  'theil-sen': { input: theilSenInput, value: theilSenValue },
+  huber: { input: huberInput, value: huberValue },
+  york: { input: yorkInput, value: yorkValue },
+  deming: { input: demingInput, value: demingValue },
+  attenuation: { input: attenuationInput, value: attenuationValue },
+} as const;

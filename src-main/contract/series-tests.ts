@@ -6,7 +6,7 @@ const lags = z.int().min(0);
 const chiSquared = z.object({ statistic: z.number(), df: z.int(), p: z.number() });
 const caveats = z.array(caveat);
 
-export const residualTestsInput = z.object({
+const residualTestsInput = z.object({
   x: predictors,
   y: column,
   intercept: z.boolean(),
@@ -19,7 +19,7 @@ export const residualTestsInput = z.object({
 });
 export type ResidualTestsInput = z.infer<typeof residualTestsInput>;
 
-export const residualTestsValue = z.object({
+const residualTestsValue = z.object({
   /** Lag-one correlation of the residuals, demeaned. */
   lag1: z.number(),
   /** n (1 − r)/(1 + r). */
@@ -37,9 +37,9 @@ export const residualTestsValue = z.object({
 });
 export type ResidualTestsValue = z.infer<typeof residualTestsValue>;
 
-export const adfInput = z.object({ y: column, lags, deterministic: z.enum(['none', 'constant', 'trend']) });
+const adfInput = z.object({ y: column, lags, deterministic: z.enum(['none', 'constant', 'trend']) });
 
-export const adfValue = z.object({
+const adfValue = z.object({
   statistic: z.number(),
   /** After MacKinnon 1994, asymptotic. */
   p: z.number(),
@@ -49,24 +49,32 @@ export const adfValue = z.object({
   critical: z.object({ '1%': z.number(), '5%': z.number(), '10%': z.number() }),
 });
 
-export const engleGrangerInput = z.object({
+const engleGrangerInput = z.object({
   y: column,
   x: predictors,
   lags,
   deterministic: z.enum(['constant', 'trend']),
 });
 
-export const engleGrangerValue = adfValue.extend({
+const engleGrangerValue = adfValue.extend({
   /** Series taken together, y among them. */
   nSeries: z.int(),
 });
 
-export const kpssInput = z.object({ y: column, lags, deterministic: z.enum(['constant', 'trend']) });
+const kpssInput = z.object({ y: column, lags, deterministic: z.enum(['constant', 'trend']) });
 
-export const kpssValue = z.object({
+const kpssValue = z.object({
   statistic: z.number(),
   /** Between 0.01 and 0.10; the nearer end outside the published table, with a caveat. */
   p: z.number(),
   critical: z.object({ '10%': z.number(), '5%': z.number(), '2.5%': z.number(), '1%': z.number() }),
   caveats,
 });
+
+/** Tests of a series in time, and of what a line leaves over. */
+export const seriesTestMethods = {
+  'residual-tests': { input: residualTestsInput, value: residualTestsValue },
+  adf: { input: adfInput, value: adfValue },
+  kpss: { input: kpssInput, value: kpssValue },
+  'engle-granger': { input: engleGrangerInput, value: engleGrangerValue },
+} as const;

@@ -2,18 +2,35 @@ import { testAssumptions } from '../assumptions/test-assumptions.ts';
 import { energyBudget } from '../climate/energy-budget.ts';
 import { compareEstimators } from '../climate/estimators/compare-estimators.ts';
 import { recompute } from '../climate/procedures/recompute.ts';
+import type {
+  LeaveOneOutInput,
+  LeaveOneOutValue,
+  PhaseSurrogatesInput,
+  PhaseSurrogatesValue,
+} from '../contract/resampling.ts';
 import type { ComputeInput, ComputeMethod, ComputeValue } from '../contract/compute.ts';
 import { claimSweep } from '../robustness/claim-sweep.ts';
 import { windowSweep } from '../robustness/window-sweep.ts';
 import { evaluateDerivation } from '../sources/derivation.ts';
 import { adf } from '../statistics/adf.ts';
 import { ar1Line } from '../statistics/ar1-line.ts';
+import { attenuation } from '../statistics/attenuation.ts';
+import { chowTest } from '../statistics/chow-test.ts';
+import { cusum } from '../statistics/cusum.ts';
+import { deming } from '../statistics/deming.ts';
+import { designColumns } from '../statistics/design-columns.ts';
+import { deviations } from '../statistics/deviations.ts';
 import { engleGranger } from '../statistics/engle-granger.ts';
 import { glsArma11 } from '../statistics/gls-arma11.ts';
 import { huber } from '../statistics/huber.ts';
 import { kpss } from '../statistics/kpss.ts';
+import { leastSquares } from '../statistics/least-squares.ts';
+import { leaveOneOut } from '../statistics/leave-one-out.ts';
 import { movingBlockBootstrap } from '../statistics/moving-block-bootstrap.ts';
+import { phaseSurrogates } from '../statistics/phase-surrogates.ts';
+import { generatorId } from '../statistics/random-stream.ts';
 import { regression } from '../statistics/regression.ts';
+import { resetTest } from '../statistics/reset-test.ts';
 import { residualTests } from '../statistics/residual-tests.ts';
 import { theilSen } from '../statistics/theil-sen.ts';
 import { york } from '../statistics/york.ts';
@@ -33,22 +50,41 @@ export const methods: Methods = {
   'theil-sen': (input) => theilSenAt95(input),
   huber: (input) => huber(input),
   york: ({ r = 0, ...input }) => york({ ...input, r }),
+  deming: (input) => deming(input),
+  attenuation: (input) => attenuation(input),
   adf: (input) => adf(input),
   kpss: (input) => kpss(input),
   'engle-granger': (input) => engleGranger(input),
   'block-bootstrap': (input, onProgress) => movingBlockBootstrap(input, onProgress),
+  'leave-one-out': (input) => leaveOneOutOf(input),
+  'phase-surrogates': (input, onProgress) => surrogatesOf(input, onProgress),
+  reset: (input) => resetTest(input),
+  chow: (input) => chowTest(input),
+  cusum: (input) => cusum(input),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
   'energy-budget': (input, onProgress) => energyBudget(input, onProgress),
   derivation: ({ lines }) => evaluateDerivation(lines),
   recomputation: (input) => recompute(input),
   assumptions: (input, onProgress) => testAssumptions(input, onProgress),
   'claim-sweep': (input, onProgress) => claimSweep(input, onProgress),
-  estimators: (input) => compareEstimators(input),
+  estimators: (input, onProgress) => compareEstimators(input, onProgress),
 };
 
 function theilSenAt95(input: ComputeInput<'theil-sen'>): ComputeValue<'theil-sen'> {
+  // Where all y are tied, every pair slope is 0 and the interval would claim to know that exactly.
+  deviations('theilSen', 'y', input.y, { atLeast: 3 });
   const { confidence: confidence95, ...fit } = theilSen({ ...input, levelPercent: 95 });
   return { ...fit, confidence95 };
+}
+
+function leaveOneOutOf({ x, y, intercept, weights, place }: LeaveOneOutInput): LeaveOneOutValue {
+  const columns = designColumns('leaveOneOut', x, y.length, intercept);
+  return leaveOneOut(leastSquares({ columns, y, weights, caller: 'leaveOneOut' }), place);
+}
+
+function surrogatesOf(input: PhaseSurrogatesInput, onProgress: ReportProgress): PhaseSurrogatesValue {
+  const surrogates = phaseSurrogates(input, onProgress).map((values) => [...values]);
+  return { surrogates, random: { generator: generatorId, seed: input.seed, nDraws: input.draws } };
 }
 
 /** Runs a method by its name; the input has been checked against the method's schema before. */

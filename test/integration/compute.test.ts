@@ -12,6 +12,8 @@ const y = x.map((value, t) =>
 const same = <Value>(value: Value, length = x.length): Value[] => Array.from({ length }, () => value);
 const without = (at: number) => y.map((value, t) => (t === at ? null : value));
 const withGapAt = (at: number) => x.map((_, t) => 1960 + t + (t < at ? 0 : 2));
+/** A bend that a line cannot follow: the cumulated sum crosses its bound. */
+const withBend = y.map((value, t) => value + Math.max(0, t - 8));
 const onALine = x.map((value) => 2 * value);
 
 let test: TestCore;
@@ -38,6 +40,13 @@ const valid = {
   kpss: { y, lags: 2, deterministic: 'constant' },
   'block-bootstrap': { x, y, intercept: true, blockLength: 3, draws: 1000, seed: 5 },
   'engle-granger': { x, y, lags: 1, deterministic: 'constant' },
+  deming: { x, y, delta: 2 },
+  attenuation: { x, y, xErrorStandardDeviation: 0.1 },
+  reset: { x, y, intercept: true, powers: [2, 3] },
+  chow: { x, y, intercept: true, breakRow: 12 },
+  cusum: { x, y: withBend, intercept: true, levelPercent: 5 },
+  'leave-one-out': { x, y, intercept: true, place: 1 },
+  'phase-surrogates': { values: y, draws: 3, seed: 5 },
 } as const;
 type Method = keyof typeof valid;
 const methods = Object.keys(valid) as Method[];
@@ -63,8 +72,9 @@ describe.each(methods)('compute %s', (method) => {
   });
 
   it('refuses a missing value, and says how one is left out', async () => {
-    const { error } = await compute(method, { ...valid[method], y: without(5) });
-    expect(error).toMatchObject({ code: 'input-form', where: `${method}.y[5]`, received: 'null' });
+    const column = method === 'phase-surrogates' ? 'values' : 'y';
+    const { error } = await compute(method, { ...valid[method], [column]: without(5) });
+    expect(error).toMatchObject({ code: 'input-form', where: `${method}.${column}[5]`, received: 'null' });
     expect(error?.hint).toContain('Leave a row with a missing value out');
   });
 });
@@ -96,6 +106,19 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['adf', 'deterministic', [{ deterministic: 'none' }, { deterministic: 'constant' }]],
   ['engle-granger', 'lags', [{ lags: 0 }, { lags: 3 }]],
   ['engle-granger', 'deterministic', [{ x: y.toReversed() }, { x: y.toReversed(), deterministic: 'trend' }]],
+  ['deming', 'delta', [{ delta: 0.5 }, { delta: 4 }]],
+  ['attenuation', 'xErrorStandardDeviation', [{ xErrorStandardDeviation: 0.2 }, { xErrorStandardDeviation: 0.3 }]],
+  ['reset', 'powers', [{ powers: [2] }, { powers: [3, 4] }]],
+  ['reset', 'intercept', [{ intercept: false }, { intercept: true }]],
+  ['chow', 'breakRow', [{ breakRow: 8 }, { breakRow: 15 }]],
+  ['chow', 'intercept', [{ intercept: false }, { intercept: true }]],
+  ['cusum', 'levelPercent', [{ levelPercent: 1 }, { levelPercent: 10 }]],
+  ['cusum', 'intercept', [{ intercept: false }, { intercept: true }]],
+  ['leave-one-out', 'place', [{ place: 0 }, { place: 1 }]],
+  ['leave-one-out', 'intercept', [{ intercept: false, place: 0 }, { place: 0 }]],
+  ['leave-one-out', 'weights', [{ weights: x.map((_, t) => 1 + t) }, { weights: x.map((_, t) => 30 - t) }]],
+  ['phase-surrogates', 'draws', [{ draws: 1 }, { draws: 2 }]],
+  ['phase-surrogates', 'seed', [{ seed: 6 }, { seed: 7 }]],
   ['kpss', 'lags', [{ lags: 0 }, { lags: 4 }]],
   ['kpss', 'deterministic', [{ deterministic: 'trend' }, { deterministic: 'constant' }]],
 ];
@@ -107,6 +130,7 @@ it.each(parameters)('compute %s uses %s', async (method, _, [one, other]) => {
 });
 
 const line = ['residual-tests', 'gls-ar1', 'gls-arma11', 'huber'] as const;
+const atOnce = ['deming', 'attenuation'] as const;
 const short = { x: [1, 2], y: [1, 3] };
 const bad: [Method, string, object, Partial<ErrorAnswer>][] = [
   ...line.map((method): [Method, string, object, Partial<ErrorAnswer>] => [
@@ -141,6 +165,7 @@ const bad: [Method, string, object, Partial<ErrorAnswer>][] = [
   ],
   ['theil-sen', 'two rows', short, { code: 'too-few-values' }],
   ['theil-sen', 'a constant predictor', { x: same(3) }, { code: 'constant', where: 'theilSen, x' }],
+  ['theil-sen', 'nothing but ties', { y: same(3) }, { code: 'constant', where: 'theilSen, y' }],
   [
     'huber',
     'a line through half of the rows',
@@ -157,6 +182,28 @@ const bad: [Method, string, object, Partial<ErrorAnswer>][] = [
   ['adf', 'as many lags as rows', { lags: 24 }, { code: 'out-of-range', where: 'adf, lags' }],
   ['adf', 'a constant series', { y: same(3) }, { kind: 'NumericError' }],
   ['adf', 'another word', { deterministic: 'drift' }, { code: 'input-form', where: 'adf.deterministic' }],
+  ...atOnce.flatMap((method): [Method, string, object, Partial<ErrorAnswer>][] => [
+    [method, 'two rows', short, { code: 'too-few-values' }],
+    [method, 'a constant predictor', { x: same(3) }, { code: 'constant' }],
+    [method, 'nothing but ties', { y: same(3) }, { code: 'constant' }],
+    [method, 'columns of different lengths', { x: x.slice(1) }, { code: 'wrong-length' }],
+  ]),
+  ['deming', 'errors of no ratio', { delta: 0 }, { code: 'out-of-range', where: 'deming, delta' }],
+  ['attenuation', 'a negative error', { xErrorStandardDeviation: -0.1 }, { code: 'out-of-range' }],
+  ['attenuation', 'errors as large as the spread', { xErrorStandardDeviation: 5 }, { code: 'no-signal' }],
+  ['reset', 'a power of one', { powers: [1] }, { code: 'out-of-range' }],
+  ['reset', 'fewer rows than coefficients', short, { code: 'too-few-observations' }],
+  ['reset', 'an exact line', { y: onALine }, { code: 'exact-fit' }],
+  ['chow', 'a break that leaves too few rows', { breakRow: 1 }, { code: 'out-of-range', where: 'chowTest, breakRow' }],
+  ['chow', 'an exact line', { y: onALine }, { code: 'exact-fit' }],
+  ['cusum', 'fewer rows than it needs', { x: [1, 2, 4], y: [1, 3, 2] }, { code: 'too-few-observations' }],
+  ['cusum', 'an exact line', { y: onALine }, { code: 'exact-fit' }],
+  ['cusum', 'another level', { levelPercent: 7 }, { code: 'input-form' }],
+  ['leave-one-out', 'a coefficient that is not there', { place: 2 }, { code: 'out-of-range' }],
+  ['leave-one-out', 'a weight of zero', { weights: x.map((_, t) => t) }, { code: 'not-positive' }],
+  ['leave-one-out', 'fewer rows than coefficients', { x: [1], y: [2] }, { code: 'too-few-observations' }],
+  ['phase-surrogates', 'a constant', { values: same(3) }, { code: 'constant' }],
+  ['phase-surrogates', 'three values', { values: [1, 2, 4] }, { code: 'too-few-values' }],
   ['kpss', 'as many lags as rows', { lags: 24 }, { code: 'out-of-range', where: 'kpss, lags' }],
   ['kpss', 'a constant series', { y: same(3) }, { code: 'exact-fit' }],
 ];

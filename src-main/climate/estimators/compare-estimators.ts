@@ -30,7 +30,7 @@ const estimators: readonly Estimator[] = [
  * factor: how far does it hang on the way the line is fitted, and on the way its error is counted?
  *
  * Assumes  at most one row a year. Estimators that take the rows on either side of a gap for neighbours say so in a
- *          caveat; ARMA(1,1) predicts across a gap
+ *          caveat; those by likelihood count the calendar
  *
  * @returns  one estimate for each estimator, or in `notComputed` the reason why it has none; tests of the residuals of
  *           the least-squares line
@@ -38,7 +38,10 @@ const estimators: readonly Estimator[] = [
  *
  * Checked   test/reference/climate/compare-estimators.test.ts (B: R on the real record)
  */
-export function compareEstimators(computation: ClaimComputation): EstimatorComparison {
+export function compareEstimators(
+  computation: ClaimComputation,
+  onProgress?: (shareDone: number) => void,
+): EstimatorComparison {
   const recomputation = recompute(computation);
   const line: ComparedLine = { ...fittedLine({ computation, recomputation }), computation };
   const { fit } = line;
@@ -49,11 +52,13 @@ export function compareEstimators(computation: ClaimComputation): EstimatorCompa
 
   const estimates: EstimatorEstimate[] = [];
   const refused: { id: EstimatorId; label: string; reason: string }[] = [];
-  for (const estimator of estimators.filter(({ applies }) => applies?.(line) ?? true)) {
+  const asked = estimators.filter(({ applies }) => applies?.(line) ?? true);
+  for (const [place, estimator] of asked.entries()) {
     const { id, label } = estimator;
     const estimate = orReason(() => estimateOf(estimator, line, gapCaveats));
     if (typeof estimate === 'string') refused.push({ id, label, reason: estimate });
     else estimates.push(estimate);
+    onProgress?.((place + 1) / asked.length);
   }
   const tests = orReason(() => residualTestLines(line));
   const { value } = computation.statement;

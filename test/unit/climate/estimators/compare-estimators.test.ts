@@ -191,6 +191,13 @@ describe('compareEstimators', () => {
     expect(of(trend, 'york').convention).toContain('years exact');
   });
 
+  it('tells how far it is, up to the end', () => {
+    const told: number[] = [];
+    compareEstimators(logRegressionClaim(record), (share) => told.push(share));
+    expect(told).toEqual([...told].sort((a, b) => a - b));
+    expect(told.at(-1)).toBe(1);
+  });
+
   it('refuses a ratio', () => {
     const ratio = computationOf(
       { kind: 'ratio', numerator: { value: '3.7', unit: 'W/m²' }, denominator: { value: '2', unit: 'W/m²' } },

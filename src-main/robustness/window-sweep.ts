@@ -1,9 +1,12 @@
 import type { Anchor, SlopeCovariance } from '../contract/claim.ts';
 import type { WindowSweepRequest } from '../contract/compute.ts';
+import type { Caveat } from '../contract/primitives.ts';
 import type { WindowSweep } from '../contract/result.ts';
 import { InputError, NumericError } from '../errors.ts';
 import { finiteNumber, finiteValues } from '../statistics/finite-values.ts';
+import { growingLine } from '../statistics/growing-line.ts';
 import { quantileOfSorted } from '../statistics/quantile.ts';
+import { gapsClosedUp } from '../statistics/year-steps.ts';
 
 type SweepWindow = WindowSweep['windows'][number];
 
@@ -24,11 +27,12 @@ type SweepWindow = WindowSweep['windows'][number];
  * @param y         [nYears]
  * @param minYears  3 … nYears, at least the anchor's years, above the Newey–West lag
  * @returns  windows by start year, then end year; quantiles (type 7) of their slopes, in y per x.
- *           Caveat `windows-without-spread` counts windows in which x does not vary
+ *           Caveat `windows-without-spread` counts windows in which x does not vary; `gaps-closed-up` says
+ *           that Newey–West errors do not count the calendar
  * @throws   InputError wrong-length, not-finite, not-positive, unordered-years, out-of-range, no-window;
  *           NumericError no-spread when x varies in no window
  *
- * Source   least squares in closed form; covariance as in statistics/newey-west.ts (Newey & West 1987), Bartlett
+ * Source   least squares in closed form, from running sums (`growingLine`); covariance as in statistics/newey-west.ts (Newey & West 1987), Bartlett
  *          weights, no prewhitening, factor n/(n − k) when `smallSample`
  * Checked  test/unit/robustness/window-sweep.test.ts (C: closed forms); test/reference/robustness (B: R's lm, each window)
  */
@@ -38,14 +42,17 @@ export function windowSweep(request: WindowSweepRequest, onProgress?: (shareDone
   const nYears = years.length;
   const nWindows = ((nYears - minYears + 1) * (nYears - minYears + 2)) / 2;
   const windows: SweepWindow[] = [];
-  const slopeOf = slopeFitter(record, intercept, covariance);
+  const fitterFrom = slopeFitter(record, intercept, covariance);
   const anchorOf = anchorFinder(record, anchor);
   let nDone = 0;
   for (let first = 0; first + minYears <= nYears; first++) {
-    const { x0, y0 } = anchorOf(first);
+    const fitTo = fitterFrom(first, anchorOf(first));
     for (let last = first + minYears - 1; last < nYears; last++) {
-      const fit = slopeOf(first, last, x0, y0);
-      if (fit) windows.push({ start: years[first]!, end: years[last]!, n: last - first + 1, ...fit });
+      const fit = fitTo(last);
+      if (fit) {
+        const { slope, standardError } = fit;
+        windows.push({ start: years[first]!, end: years[last]!, n: last - first + 1, slope, standardError });
+      }
       nDone++;
     }
     onProgress?.(nDone / nWindows);
@@ -62,21 +69,23 @@ export function windowSweep(request: WindowSweepRequest, onProgress?: (shareDone
   return {
     windows,
     quantiles: spreadOf(windows.map(({ slope }) => slope)),
-    caveats:
-      nLeftOut === 0
-        ? []
-        : [
-            {
-              code: 'windows-without-spread',
-              detail: `${nLeftOut} of ${nWindows} windows are left out: the predictor does not vary in them.`,
-            },
-          ],
+    caveats: [
+      ...(nLeftOut === 0 ? [] : [withoutSpread(nLeftOut, nWindows)]),
+      ...(covariance.kind === 'newey-west' ? gapsClosedUp('windowSweep', years, nYears, 'Newey–West errors') : []),
+    ],
+  };
+}
+
+function withoutSpread(nLeftOut: number, nWindows: number): Caveat {
+  return {
+    code: 'windows-without-spread',
+    detail: `${nLeftOut} of ${nWindows} windows are left out: the predictor does not vary in them.`,
   };
 }
 
 /** Minimum, 5 %, median, 95 % and maximum (quantiles of type 7). */
 export function spreadOf(values: readonly number[]): WindowSweep['quantiles'] {
-  const sorted = Float64Array.from(values).sort();
+  const sorted = new Float64Array(values).sort();
   const at = (probability: number) => quantileOfSorted(sorted, probability);
   return { min: at(0), q05: at(0.05), q50: at(0.5), q95: at(0.95), max: at(1) };
 }
@@ -147,49 +156,34 @@ function anchorFinder({ y, anchored }: SweepRecord, anchor: Anchor): (first: num
   };
 }
 
-/** Slope and standard error over rows first … last, counted from (x0, y0); null where x does not vary. */
+/** For a first row and its anchor: slope and standard error up to a last row; null where x does not vary. */
 function slopeFitter({ x, y, smallestSpread }: SweepRecord, intercept: boolean, covariance: SlopeCovariance) {
+  const lineFrom = growingLine(x, y);
   const scores = new Float64Array(x.length);
   const nCoefficients = intercept ? 2 : 1;
-  return (first: number, last: number, x0: number, y0: number): Pick<SweepWindow, 'slope' | 'standardError'> | null => {
-    const n = last - first + 1;
-    let xCentre = x0;
-    let yCentre = y0;
-    if (intercept) {
-      let xSum = 0;
-      let ySum = 0;
-      for (let row = first; row <= last; row++) {
-        xSum += x[row]! - x0;
-        ySum += y[row]! - y0;
+  return (first: number, anchor: { x0: number; y0: number }) => {
+    const lineTo = lineFrom(first, anchor, intercept);
+    return (last: number): Pick<SweepWindow, 'slope' | 'standardError'> | null => {
+      const n = last - first + 1;
+      const { slope, spread, squares, xCentre, yCentre } = lineTo(last);
+      if (!(spread > n * smallestSpread ** 2)) return null;
+      if (covariance.kind === 'classical') {
+        return { slope, standardError: Math.sqrt(squares / (n - nCoefficients) / spread) };
       }
-      xCentre += xSum / n;
-      yCentre += ySum / n;
-    }
-    let xx = 0;
-    let xy = 0;
-    for (let row = first; row <= last; row++) {
-      const dx = x[row]! - xCentre;
-      xx += dx * dx;
-      xy += dx * (y[row]! - yCentre);
-    }
-    if (xx <= n * smallestSpread ** 2) return null;
-    const slope = xy / xx;
-    let squares = 0;
-    for (let row = first; row <= last; row++) {
-      const dx = x[row]! - xCentre;
-      const residual = y[row]! - yCentre - slope * dx;
-      squares += residual * residual;
-      scores[row] = dx * residual;
-    }
-    if (covariance.kind === 'classical') return { slope, standardError: Math.sqrt(squares / (n - nCoefficients) / xx) };
-    let meat = 0;
-    for (let row = first; row <= last; row++) meat += scores[row]! ** 2;
-    for (let lag = 1; lag <= covariance.lag; lag++) {
-      let product = 0;
-      for (let row = first + lag; row <= last; row++) product += scores[row]! * scores[row - lag]!;
-      meat += 2 * (1 - lag / (covariance.lag + 1)) * product;
-    }
-    const factor = covariance.smallSample ? n / (n - nCoefficients) : 1;
-    return { slope, standardError: Math.sqrt(factor * Math.max(0, meat)) / xx };
+      let meat = 0;
+      for (let row = first; row <= last; row++) {
+        const dx = x[row]! - xCentre;
+        const score = dx * (y[row]! - yCentre - slope * dx);
+        scores[row] = score;
+        meat += score * score;
+      }
+      for (let lag = 1; lag <= covariance.lag; lag++) {
+        let product = 0;
+        for (let row = first + lag; row <= last; row++) product += scores[row]! * scores[row - lag]!;
+        meat += 2 * (1 - lag / (covariance.lag + 1)) * product;
+      }
+      const factor = covariance.smallSample ? n / (n - nCoefficients) : 1;
+      return { slope, standardError: Math.sqrt(factor * Math.max(0, meat)) / spread };
+    };
   };
 }

@@ -141,6 +141,18 @@ describe('windowSweep', () => {
     expect(() => windowSweep({ ...request, x: [7, 7, 7, 7, 7] })).toThrow(/a predictor that varies/);
   });
 
+  it('says of Newey–West errors that they close gaps up', () => {
+    const years = record.years.map((year) => (year < 1960 ? year : year + 2));
+    const codes = (change: Partial<WindowSweepRequest>) =>
+      windowSweep({ ...record, minYears: 20, intercept: true, anchor: { kind: 'first-year' }, ...change }).caveats.map(
+        ({ code }) => code,
+      );
+    const neweyWest = { kind: 'newey-west', lag: 2, smallSample: false } as const;
+    expect(codes({ years, covariance: neweyWest })).toEqual(['gaps-closed-up']);
+    expect(codes({ years })).toEqual([]);
+    expect(codes({ covariance: neweyWest })).toEqual([]);
+  });
+
   it('reports the share of windows done, up to all of them', () => {
     const shares: number[] = [];
     windowSweep({ ...record, minYears: 30, intercept: true, anchor: { kind: 'first-year' } }, (share) =>

@@ -1,7 +1,7 @@
 import type { Claim } from '../contract/claim.ts';
 import type { EstimatorComparison } from '../contract/estimator-comparison.ts';
 import type { AssumptionsAnswer, ClaimSweep, Recomputation } from '../contract/result.ts';
-import { formatInterval, formatNumber, formatWithUncertainty } from '../quantities/notation.ts';
+import { decimalsFor, formatInterval, formatNumber, formatWithUncertainty } from '../quantities/notation.ts';
 
 interface Answers {
   recomputation: Recomputation | null;
@@ -16,6 +16,8 @@ export function fillIns(
   { recomputation, assumptions, sweep, estimators }: Answers,
 ): Record<string, string> {
   const figures: Record<string, string> = { stated: `${statement.value} ${statement.unit}` };
+  // All numbers in the claim's unit show as many digits as the recomputed one can.
+  const decimals = recomputation?.standardError ? decimalsFor(recomputation.standardError) : 2;
   if (recomputation) {
     const { value, standardError, interval95, unit, fit } = recomputation;
     figures['recomputed'] = formatWithUncertainty(value, standardError, unit);
@@ -34,21 +36,21 @@ export function fillIns(
   for (const { id, alternative } of assumptions?.outcomes ?? []) {
     if (!alternative) continue;
     const range = alternative.interval ? ` (${formatInterval(alternative.interval, '')})` : '';
-    figures[id] = `${formatNumber(alternative.value, { decimals: 2 })} ${alternative.unit}${range}`;
+    figures[id] = `${formatNumber(alternative.value, decimals)} ${alternative.unit}${range}`;
   }
   const last = assumptions?.ladder?.rungs.at(-1);
   if (last && assumptions?.ladder) {
     figures['on-this-footing'] =
-      `${formatNumber(last.value, { decimals: 2 })} ${assumptions.ladder.unit} (${formatInterval(last.interval90, '')})`;
+      `${formatNumber(last.value, decimals)} ${assumptions.ladder.unit} (${formatInterval(last.interval90, '')})`;
   }
   if (sweep) {
     figures['windows-range'] =
-      `${formatNumber(sweep.valueQuantiles.min, { decimals: 2 })} to ${formatNumber(sweep.valueQuantiles.max, { decimals: 2 })} ${sweep.unit}`;
+      `${formatNumber(sweep.valueQuantiles.min, decimals)} to ${formatNumber(sweep.valueQuantiles.max, decimals)} ${sweep.unit}`;
   }
   if (estimators) {
     const numbers = estimators.estimates.map(({ value }) => value);
     figures['estimators-range'] =
-      `${formatNumber(Math.min(...numbers), { decimals: 2 })} to ${formatNumber(Math.max(...numbers), { decimals: 2 })} ${estimators.unit}`;
+      `${formatNumber(Math.min(...numbers), decimals)} to ${formatNumber(Math.max(...numbers), decimals)} ${estimators.unit}`;
   }
   return figures;
 }

@@ -20,7 +20,7 @@ describe('the ledger', () => {
     const { screen } = await mounted();
     expect(screen.get('h2').text()).toBe('Assumptions 3 apply · 2 tested · 1 need data');
     const heat = screen.findAll('tbody').find((row) => row.find('.opener').exists());
-    expect(heat!.text()).toMatch(/Energy budget, N = 0\.79.*2\.71.*1\.9 – 4\.4.*decisive/s);
+    expect(heat!.text()).toMatch(/Energy budget, N = 0\.79.*2\.71.*1\.90 – 4\.41.*decisive/s);
     expect(heat!.get('select').element.value).toBe('not met');
     expect(screen.text()).toContain('no series of total forcing is in the project.');
     expect(screen.text()).toMatch(/The ladder.*20000.*seed.*20261/s);

@@ -108,7 +108,10 @@ export function identityStore(folder: string): IdentityStore {
     setReviewer: ({ name, role }) => write({ version: 1, name, role, key: read()?.key ?? null }),
     createKey(passphrase) {
       const identity = read();
-      if (!identity) throw identityError('no-reviewer', 'the name of the reviewer before a key is made', 'none');
+      if (!identity) {
+        const hint = 'Give your name first: on the start page, or with --reviewer on the command line.';
+        throw identityError('no-reviewer', 'the name of the reviewer before a key is made', 'none', hint);
+      }
       if (identity.key) {
         throw identityError(
           'key-exists',

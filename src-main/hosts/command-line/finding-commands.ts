@@ -1,7 +1,7 @@
 import { cautions } from '../../contract/cautions.ts';
 import { conclusion, signatureMeaning } from '../../contract/finding.ts';
 import { fillIn } from '../../handlers/fill-in.ts';
-import { badUsage, claimNumber, claimOption, oneOf, type Command } from './command.ts';
+import { badUsage, claimNumber, claimOption, CommandFailure, oneOf, type Command } from './command.ts';
 
 const formats = ['html', 'json'] as const;
 
@@ -59,19 +59,20 @@ export const findingCommands: Command[] = [
       const meaning = oneOf(args, 'meaning', signatureMeaning.options) ?? 'sign-off';
       await tools.ask('project.open', { path: args.positionals[0] ?? '' });
       const claimId = await claimNumber(args, tools);
+      const request = { claimId, meaning, remark: args.option('remark') ?? '' };
       const { reviewer } = await tools.ask('session.get', {});
       const isNew = !reviewer?.publicKey;
+      if (isNew) {
+        // A finding that cannot be signed is refused before a key is made for it.
+        const answer = await tools.tryAsk('finding.sign', { ...request, passphrase: '' });
+        if (!answer.ok && answer.error.code !== 'no-key') throw new CommandFailure(answer.error);
+      }
       const passphrase = await tools.passphrase(isNew);
       if (isNew) {
         const made = await tools.ask('identity.create', { passphrase });
         tools.tell(`Made a signing key: ${made.fingerprint ?? ''}`);
       }
-      const view = await tools.ask('finding.sign', {
-        claimId,
-        passphrase,
-        meaning,
-        remark: args.option('remark') ?? '',
-      });
+      const view = await tools.ask('finding.sign', { ...request, passphrase });
       const signature = view.signatures.at(-1);
       const check = view.signatureChecks.at(-1);
       return {

@@ -27,7 +27,7 @@ export const projectCommands: Command[] = [
     name: 'demo',
     usage: 'DIR',
     summary: 'unpacks the worked example (invented data) and runs it whole, to a signed report',
-    examples: ['demo /tmp/footing-demo'],
+    examples: ['demo footing-demo'],
     nPositionals: { min: 1, max: 1 },
     options: {},
     home: ({ positionals: [directory = ''] }) => directory,

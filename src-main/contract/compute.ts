@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { anchor, evidence, procedure, slopeCovariance, statement, tolerance } from './claim.ts';
 import { estimatorComparison } from './estimator-comparison.ts';
-import { column, lineMethods, predictors } from './line-estimators.ts';
+import { column, lineMethods, predictors, rowYears } from './line-estimators.ts';
 import { year } from './primitives.ts';
 import { resamplingMethods } from './resampling.ts';
 import {
@@ -31,6 +31,7 @@ export const regressionRequest = z.object({
   intercept: z.boolean(),
   weights: column.optional(),
   covariance,
+  years: rowYears.optional(),
 });
 export type RegressionRequest = z.infer<typeof regressionRequest>;
 

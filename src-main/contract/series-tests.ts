@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { column, predictors } from './line-estimators.ts';
+import { column, predictors, rowYears } from './line-estimators.ts';
 import { caveat } from './primitives.ts';
 
 const lags = z.int().min(0);
@@ -16,6 +16,7 @@ const residualTestsInput = z.object({
   fitdf: lags.optional(),
   /** Koenker's studentised Breusch–Pagan test unless the original one is asked for. */
   breuschPaganKind: z.enum(['studentised', 'original']).optional(),
+  years: rowYears.optional(),
 });
 export type ResidualTestsInput = z.infer<typeof residualTestsInput>;
 
@@ -47,6 +48,7 @@ const adfValue = z.object({
   nObs: z.int(),
   /** After MacKinnon 2010, at these rows. */
   critical: z.object({ '1%': z.number(), '5%': z.number(), '10%': z.number() }),
+  caveats,
 });
 
 const engleGrangerInput = z.object({
@@ -54,6 +56,7 @@ const engleGrangerInput = z.object({
   x: predictors,
   lags,
   deterministic: z.enum(['constant', 'trend']),
+  years: rowYears.optional(),
 });
 
 const engleGrangerValue = adfValue.extend({

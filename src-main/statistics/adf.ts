@@ -1,13 +1,17 @@
+import type { Caveat } from '../contract/primitives.ts';
 import { dickeyFullerT } from './dickey-fuller-t.ts';
 import { finiteValues } from './finite-values.ts';
 import type { Deterministic } from './mackinnon-tables.ts';
 import { mackinnonCritical, mackinnonP, type CriticalValues } from './mackinnon.ts';
+import { gapsClosedUp } from './year-steps.ts';
 
 export interface AdfRequest {
   y: ArrayLike<number>;
   /** Lagged differences that soak up serial correlation. */
   lags: number;
   deterministic: Deterministic;
+  /** [nObs] whole, increasing: with a gap among them, a caveat. Without them rows are consecutive. */
+  years?: ArrayLike<number> | undefined;
 }
 
 export interface AdfTest {
@@ -17,6 +21,7 @@ export interface AdfTest {
   /** Rows of the test regression. */
   nObs: number;
   critical: CriticalValues;
+  caveats: Caveat[];
 }
 
 /**
@@ -29,16 +34,23 @@ export interface AdfTest {
  *
  * @param y     [nObs] finite
  * @param lags  L, 0 or more; every lag costs a row
- * @returns  p after MacKinnon 1994 (asymptotic); critical values after MacKinnon 2010 at the rows used
- * @throws   InputError too-few-values, not-finite, out-of-range; NumericError rank-deficient, exact-fit
+ * @returns  p after MacKinnon 1994 (asymptotic); critical values after MacKinnon 2010 at the rows used;
+ *           caveat gaps-closed-up
+ * @throws   InputError too-few-values, not-finite, out-of-range, unordered-years; NumericError rank-deficient, exact-fit
  *
  * Differs  R's tseries::adf.test always has a trend and interpolates p in a table; statsmodels' adfuller chooses the lags
  *          itself unless autolag=None
  * Source   Dickey & Fuller 1979, J. Am. Stat. Assoc. 74, 427–431; Said & Dickey 1984, Biometrika 71, 599–607
  * Checked  test/reference/statistics/unit-root.test.ts (B: base R)
  */
-export function adf({ y, lags, deterministic }: AdfRequest): AdfTest {
+export function adf({ y, lags, deterministic, years }: AdfRequest): AdfTest {
   const series = finiteValues('adf', 'y', y, { atLeast: 6 });
   const { statistic, nObs } = dickeyFullerT('adf', series, lags, deterministic);
-  return { statistic, p: mackinnonP(statistic, deterministic), nObs, critical: mackinnonCritical(deterministic, nObs) };
+  return {
+    statistic,
+    p: mackinnonP(statistic, deterministic),
+    nObs,
+    critical: mackinnonCritical(deterministic, nObs),
+    caveats: gapsClosedUp('adf', years, series.length, 'The differences'),
+  };
 }

@@ -1,3 +1,4 @@
+import type { Caveat } from '../contract/primitives.ts';
 import { InputError } from '../errors.ts';
 import { designColumns } from './design-columns.ts';
 import { dickeyFullerT } from './dickey-fuller-t.ts';
@@ -6,6 +7,7 @@ import { finiteValues } from './finite-values.ts';
 import { leastSquares } from './least-squares.ts';
 import { mackinnonCritical, mackinnonP, type CriticalValues } from './mackinnon.ts';
 import { sumOfProducts } from './summation.ts';
+import { gapsClosedUp } from './year-steps.ts';
 
 export interface EngleGrangerRequest {
   /** [nObs], or at most five columns. */
@@ -15,6 +17,8 @@ export interface EngleGrangerRequest {
   lags: number;
   /** What the line has besides x: a constant, or a constant and a linear trend. */
   deterministic: 'constant' | 'trend';
+  /** [nObs] whole, increasing: with a gap among them, a caveat. Without them rows are consecutive. */
+  years?: ArrayLike<number> | undefined;
 }
 
 export interface EngleGrangerTest {
@@ -26,6 +30,7 @@ export interface EngleGrangerTest {
   /** Series taken together, y among them: the distribution depends on it. */
   nSeries: number;
   critical: CriticalValues;
+  caveats: Caveat[];
 }
 
 /** MacKinnon's 1994 surfaces end at six series. */
@@ -41,8 +46,10 @@ const MOST_PREDICTORS = 5;
  * Assumes  rows in order of time, equally spaced, without gaps; every series wanders (see `adf` and `kpss`)
  *
  * @param lags  L, 0 or more; every lag costs a row
- * @returns  p after MacKinnon 1994 (asymptotic); critical values after MacKinnon 2010 at the rows of the test regression
- * @throws   InputError wrong-length, too-few-values, not-finite, out-of-range, too-many-predictors, too-few-observations;
+ * @returns  p after MacKinnon 1994 (asymptotic); critical values after MacKinnon 2010 at the rows of the test
+ *           regression; caveat gaps-closed-up
+ * @throws   InputError wrong-length, too-few-values, not-finite, out-of-range, too-many-predictors, too-few-observations,
+ *           unordered-years;
  *           NumericError rank-deficient, exact-fit
  *
  * Differs  the answer depends on which series is y. statsmodels' coint takes the critical values at nObs − 1 whatever the
@@ -50,7 +57,7 @@ const MOST_PREDICTORS = 5;
  * Source   Engle & Granger 1987, Econometrica 55, 251–276; MacKinnon 1994 and 2010, as in `mackinnonP`
  * Checked  test/reference/statistics/unit-root.test.ts (B: base R; A: tables)
  */
-export function engleGranger({ x, y, lags, deterministic }: EngleGrangerRequest): EngleGrangerTest {
+export function engleGranger({ x, y, lags, deterministic, years }: EngleGrangerRequest): EngleGrangerTest {
   const response = finiteValues('engleGranger', 'y', y, { atLeast: 6 });
   const columns = designColumns('engleGranger', x, response.length, true);
   const nSeries = columns.length;
@@ -73,5 +80,6 @@ export function engleGranger({ x, y, lags, deterministic }: EngleGrangerRequest)
     nObs,
     nSeries,
     critical: mackinnonCritical(deterministic, nObs, nSeries),
+    caveats: gapsClosedUp('engleGranger', years, response.length, 'The differences of the residuals'),
   };
 }

@@ -3,6 +3,7 @@ import { refuseExactFit } from './exact-fit.ts';
 import { finiteNumber, finiteValues } from './finite-values.ts';
 import { leastSquares } from './least-squares.ts';
 import { sum, sumOfProducts } from './summation.ts';
+import { gapsClosedUp } from './year-steps.ts';
 
 export interface KpssRequest {
   y: ArrayLike<number>;
@@ -10,6 +11,8 @@ export interface KpssRequest {
   lags: number;
   /** What the series returns to under the null hypothesis: a level or a linear trend. */
   deterministic: 'constant' | 'trend';
+  /** [nObs] whole, increasing: with a gap among them, a caveat. Without them rows are consecutive. */
+  years?: ArrayLike<number> | undefined;
 }
 
 export interface KpssTest {
@@ -36,14 +39,15 @@ const CRITICAL = {
  *
  * @param y     [nObs] finite
  * @param lags  L, 0 … n − 1; with strongly correlated data too few lags reject too often, too many too seldom
- * @returns  p interpolated linearly between the four published critical values
- * @throws   InputError too-few-values, not-finite, out-of-range; NumericError exact-fit
+ * @returns  p interpolated linearly between the four published critical values; caveats p-outside-table,
+ *           gaps-closed-up
+ * @throws   InputError too-few-values, not-finite, out-of-range, unordered-years; NumericError exact-fit
  *
  * Differs  R's tseries::kpss.test: same statistic, lags by a rule of its own; statsmodels' "auto" lags by Hobijn et al.
  * Source   Kwiatkowski, Phillips, Schmidt & Shin 1992, J. Econometrics 54, 159–178, equations 11 and 13, table 1
  * Checked  test/reference/statistics/unit-root.test.ts (B: base R; A: table 1; a figure printed by statsmodels)
  */
-export function kpss({ y, lags, deterministic }: KpssRequest): KpssTest {
+export function kpss({ y, lags, deterministic, years }: KpssRequest): KpssTest {
   const series = finiteValues('kpss', 'y', y, { atLeast: 4 });
   const n = series.length;
   finiteNumber('kpss', 'lags', lags, { isWhole: true, atLeast: 0, atMost: n - 1 });
@@ -58,7 +62,9 @@ export function kpss({ y, lags, deterministic }: KpssRequest): KpssTest {
   const squares = e.map((value) => (partial += value) ** 2);
   const statistic = sum(squares) / (n * longRun);
   const critical = CRITICAL[deterministic];
-  return { statistic, critical, ...interpolatedP(statistic, critical) };
+  const { p, caveats } = interpolatedP(statistic, critical);
+  const closedUp = gapsClosedUp('kpss', years, n, 'The partial sums and lags');
+  return { statistic, critical, p, caveats: [...caveats, ...closedUp] };
 }
 
 function interpolatedP(statistic: number, critical: KpssTest['critical']): Pick<KpssTest, 'p' | 'caveats'> {

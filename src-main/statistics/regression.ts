@@ -12,6 +12,7 @@ import { regressionCaveats } from './regression-caveats.ts';
 import { sum, sumOfProducts } from './summation.ts';
 import { twoSidedP } from './two-sided-p.ts';
 import { upperTailF } from './upper-tail-f.ts';
+import { gapsClosedUp } from './year-steps.ts';
 
 /**
  * Linear regression: the line (or plane) closest to y in squared distance, with its uncertainty and diagnostics.
@@ -22,6 +23,7 @@ import { upperTailF } from './upper-tail-f.ts';
  * @param x        [nObs] or nPredictors × [nObs], finite, any unit
  * @param y        [nObs] finite
  * @param weights  [nObs] above 0; inverse error variances up to a common factor
+ * @param years    [nObs] whole, increasing: with a gap among them, the caveat gaps-closed-up
  * @param covariance  of the coefficients; lag is required for newey-west; smallSample (false unless given) multiplies
  *                 the newey-west covariance by n/(n − k)
  * @returns  arrays in the order intercept, predictors. With k coefficients:
@@ -41,7 +43,7 @@ import { upperTailF } from './upper-tail-f.ts';
  *          Cook 1977, Technometrics 19, 15–18
  * Checked  test/reference/statistics/nist-regression.test.ts (A: certified values), lm-live.test.ts (B: R)
  */
-export function regression({ x, y, intercept, weights, covariance }: RegressionRequest): RegressionAnswer {
+export function regression({ x, y, intercept, weights, covariance, years }: RegressionRequest): RegressionAnswer {
   const fit = leastSquares({
     columns: designColumns('regression', x, y.length, intercept),
     y,
@@ -104,8 +106,16 @@ export function regression({ x, y, intercept, weights, covariance }: RegressionR
     fitted: [...fit.fitted],
     leverage: [...fit.leverage],
     cooksDistance: isExact ? Array<null>(nObs).fill(null) : cooksDistance(fit, residualSumOfSquares / degreesOfFreedom),
-    caveats: regressionCaveats({ fit, hasIntercept: intercept, covariance, isExact, isConstant }),
+    caveats: [
+      ...regressionCaveats({ fit, hasIntercept: intercept, covariance, isExact, isConstant }),
+      ...gapsClosedUp('regression', years, nObs, orderedFigures(covariance.kind)),
+    ],
   };
+}
+
+/** Those that take a row's neighbours for the years beside it. */
+function orderedFigures(kind: RegressionRequest['covariance']['kind']): string {
+  return kind === 'newey-west' ? 'Newey–West errors and Durbin–Watson' : 'Terms of Durbin–Watson';
 }
 
 /** Σ w·y² and Σ w·(y − ȳ)², ȳ the weighted mean. */

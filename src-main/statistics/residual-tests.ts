@@ -12,6 +12,7 @@ import { lagOneAutocorrelation } from './lag-one-autocorrelation.ts';
 import { leastSquares } from './least-squares.ts';
 import { ljungBox } from './ljung-box.ts';
 import { sumOfProducts } from './summation.ts';
+import { gapsClosedUp } from './year-steps.ts';
 
 /** The exact distribution takes the eigenvalues of a matrix of this size: a second or so. */
 const MOST_ROWS_FOR_EXACT_P = 400;
@@ -31,19 +32,22 @@ const noExactP: Caveat = {
  * @param lags   how far back Breusch–Godfrey and Ljung–Box look, 1 … n − k − 1
  * @param fitdf  fitted ARMA coefficients; 0 unless given
  * @param breuschPaganKind  studentised unless given
- * @returns  durbinWatsonTest null beyond 400 rows, with a caveat; caveats no-intercept, no-exact-p, lags-against-length
+ * @returns  durbinWatsonTest null beyond 400 rows, with a caveat; caveats no-intercept, no-exact-p, lags-against-length,
+ *           gaps-closed-up
  * @throws   InputError and NumericError as `leastSquares`; NumericError exact-fit; InputError out-of-range
  *
  * Checked  test/reference/statistics/residual-tests.test.ts (B: base R)
  */
 export function residualTests(input: ResidualTestsInput): ResidualTestsValue {
-  const { x, y, intercept, lags, fitdf = 0, breuschPaganKind: kind = 'studentised' } = input;
+  const { x, y, intercept, lags, fitdf = 0, breuschPaganKind: kind = 'studentised', years } = input;
   const columns = designColumns('residualTests', x, y.length, intercept);
   const fit = leastSquares({ columns, y, caller: 'residualTests' });
   refuseExactFit('residualTests', fit.residualSumOfSquares, sumOfProducts(fit.y, fit.y));
   const { residuals } = fit;
   const lag1 = lagOneAutocorrelation(residuals);
   const exact = fit.nObs <= MOST_ROWS_FOR_EXACT_P ? durbinWatsonTest(fit, intercept) : null;
+  const figures = 'Lag-one correlation, Durbin–Watson, Breusch–Godfrey and Ljung–Box';
+  const closedUp = gapsClosedUp('residualTests', years, fit.nObs, figures);
   return {
     lag1,
     nEff: effectiveSampleSize(fit.nObs, lag1),
@@ -53,7 +57,7 @@ export function residualTests(input: ResidualTestsInput): ResidualTestsValue {
     ljungBox: ljungBox(residuals, lags, fitdf),
     jarqueBera: jarqueBera(residuals),
     breuschPagan: { ...breuschPagan(fit, intercept, kind), kind },
-    caveats: [...(exact ? exact.caveats : [noExactP]), ...lagCaveats(fit.nObs, lags)],
+    caveats: [...(exact ? exact.caveats : [noExactP]), ...lagCaveats(fit.nObs, lags), ...closedUp],
   };
 }
 

@@ -88,6 +88,13 @@ describe('residualTests', () => {
     expect(codes(false, 20)).toEqual(['no-intercept', 'lags-against-length']);
   });
 
+  it('closes gaps up, and says so', () => {
+    const codes = (given: number[]) =>
+      residualTests({ x, y, intercept: true, lags: 4, years: given }).caveats.map(({ code }) => code);
+    expect(codes(years.map((_, t) => 1900 + t))).toEqual([]);
+    expect(codes(years)).toEqual(['gaps-closed-up']);
+  });
+
   it('refuses an exact fit', () => {
     expect(() => residualTests({ x, y: x.map((value) => 3 * value), intercept: false, lags: 1 })).toThrow(
       'an exact fit',

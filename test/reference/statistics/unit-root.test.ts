@@ -34,7 +34,8 @@ describe('adf', () => {
     for (const y of await series()) {
       for (const lags of [0, 1, 4]) {
         for (const deterministic of ['none', 'constant', 'trend'] as const) {
-          const { statistic, nObs, p, critical } = adf({ y, lags, deterministic });
+          const { statistic, nObs, p, critical, caveats } = adf({ y, lags, deterministic });
+          expect(caveats).toEqual([]);
           const fromR = await r.numbers('adf_statistic(y, lags, deterministic)', { y, lags, deterministic });
           expectClose({ statistic: [statistic], nObs: [nObs] }, fromR, near);
           expect(dickeyFullerT('adf', Float64Array.from(y), lags, deterministic)).toEqual({ statistic, nObs });
@@ -201,6 +202,25 @@ describe('engleGranger', () => {
     ['a missing value', { ...asked, x: years.with(3, NaN) }, 'engleGranger, x[3]'],
     ['mismatched lengths', { ...asked, x: years.slice(1) }, 'expected 12 values'],
   ])('refuses %s', (_, request, sentence) => expect(() => engleGranger(request)).toThrow(sentence));
+});
+
+describe('missing years', () => {
+  const { years, co2Ppm, temperatureK } = co2AndTemperature();
+  const consecutive = years.map((_, t) => 1900 + t);
+  const series = { y: temperatureK, lags: 1, deterministic: 'constant' } as const;
+  it.each([
+    ['adf', (given?: number[]) => adf({ ...series, years: given })],
+    ['kpss', (given?: number[]) => kpss({ ...series, years: given })],
+    ['engleGranger', (given?: number[]) => engleGranger({ ...series, x: co2Ppm, years: given })],
+  ] as const)('%s closes gaps up, and says so', (name, run) => {
+    const codes = (given?: number[]) => run(given).caveats.map(({ code }) => code);
+    const known = codes();
+    expect(codes(consecutive)).toEqual(known);
+    // 1964 is missing in the record.
+    expect(codes(years)).toEqual([...known, 'gaps-closed-up']);
+    expect(() => run(years.toReversed())).toThrow(`${name}, years[1]`);
+    expect(() => run(years.slice(1))).toThrow(`${name}, years: expected 60 values`);
+  });
 });
 
 describe('MacKinnon’s surfaces', () => {

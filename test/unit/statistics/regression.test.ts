@@ -90,6 +90,23 @@ describe('regression', () => {
     expect(cooksDistance.slice(0, 4)).not.toContain(null);
   });
 
+  it('says which figures close gaps between the years up', () => {
+    const asked = { ...line, x: [1, 2, 4, 5], y: [1, 2, 6, 5] };
+    const details = (change: Partial<RegressionRequest>) =>
+      regression({ ...asked, ...change })
+        .caveats.filter(({ code }) => code === 'gaps-closed-up')
+        .map(({ detail }) => detail);
+    const years = [1990, 1991, 1993, 1994];
+    expect(details({ years })).toEqual([expect.stringContaining('Terms of Durbin–Watson take the years')]);
+    const covariance = { kind: 'newey-west', lag: 1 } as const;
+    expect(details({ years, covariance })).toEqual([
+      expect.stringContaining('Newey–West errors and Durbin–Watson take'),
+    ]);
+    expect(details({ years: [1, 2, 3, 4], covariance })).toEqual([]);
+    expect(details({ covariance })).toEqual([]);
+    expect(() => regression({ ...asked, years: [1990, 1990, 1991, 1992] })).toThrow('regression, years[1]');
+  });
+
   it('takes Durbin–Watson of √w·e', () => {
     const weights = [1, 4, 9, 4];
     const answer = regression({ ...line, x: [1, 2, 4, 5], y: [1, 2, 6, 4], weights });

@@ -2,11 +2,11 @@ import { fitLogRegression } from '../climate/procedures/fit-log-regression.ts';
 import type { LogRegressionProcedure } from '../contract/claim.ts';
 import type { Caveat } from '../contract/primitives.ts';
 import type { DrawnNumber, JointDraws } from '../robustness/ladder.ts';
+import { splitNormal, splitNormalAt } from '../statistics/split-normal.ts';
 import { logClaimLine } from './claim-line.ts';
 import { forcingLine } from './forcing-line.ts';
 import { heatUptakeRatio } from './heat-uptake-ratio.ts';
 import { perDoublingFactor } from './per-doubling-factor.ts';
-import { standardDeviation } from './standard-deviation.ts';
 import type { TestContext } from './test-context.ts';
 
 /** What a log-regression's number stands on: the choices that the ladder changes one by one, in any order. */
@@ -33,7 +33,7 @@ export function footingOf({ intercept }: LogRegressionProcedure): Footing {
  *          of the same temperatures on total forcing. On CO2 alone F = F2x log2(C/C0) makes the two the same number:
  *          b ln 2 = F2x b_CO2. With heat uptake: times ΔF/(ΔF − ΔN), because a planet that takes up ΔN answers with
  *          ΔT = (ΔF − ΔN)/λ so far, and F2x/λ = (F2x ΔT/ΔF) · ΔF/(ΔF − ΔN)
- * Assumes  slopes normal with Newey–West errors; F2x, ΔF and ΔN normal and independent. One standard-normal draw moves
+ * Assumes  slopes normal with Newey–West errors; F2x, ΔF and ΔN split normal and independent. One standard-normal draw moves
  *          whichever slope is in use: slopes of one record err together. The last factor takes the ΔF and ΔN of the
  *          energy budget to describe the years of the record
  *
@@ -70,14 +70,13 @@ function onCo2(context: TestContext, intercept: boolean, draws: JointDraws): Dra
 function onForcing(context: TestContext, intercept: boolean, draws: JointDraws): Drawn {
   const { slope, slopeStandardError, doublingWm2 } = forcingLine(context, intercept);
   const factor = perDoublingFactor(context.recomputation.unit);
-  const doublingSd = standardDeviation(doublingWm2);
+  const doubling = splitNormal(doublingWm2);
   const slopes = draws.standardNormal('slope');
   const doublings = draws.standardNormal('doubling');
   return {
-    value: doublingWm2.mean * slope * factor,
+    value: doublingWm2.best * slope * factor,
     draws: slopes.map(
-      (z, draw) =>
-        (doublingWm2.mean + doublingSd * (doublings[draw] ?? NaN)) * (slope + slopeStandardError * z) * factor,
+      (z, draw) => splitNormalAt(doubling, doublings[draw] ?? NaN) * (slope + slopeStandardError * z) * factor,
     ),
   };
 }

@@ -1,5 +1,5 @@
 import { anchorRows } from '../climate/procedures/anchor-rows.ts';
-import type { UncertainInput } from '../contract/claim.ts';
+import type { UncertainInput } from '../contract/uncertain-input.ts';
 import type { ClaimComputation } from '../contract/compute.ts';
 import type { AlignedRows, RegressionAnswer } from '../contract/result.ts';
 import type { SeriesData } from '../contract/series.ts';
@@ -41,7 +41,7 @@ export function forcingMissing({ series, evidence }: ClaimComputation): { reason
   if (!evidence.doublingWm2 && !evidence.energyBudget) {
     return {
       reason: 'The forcing of a CO₂ doubling is not given, so a slope on forcing cannot be turned into K per doubling.',
-      wouldNeed: 'Give it (W/m², with its 5–95 % half-width) under Assumptions, or within the energy budget.',
+      wouldNeed: 'Give it (W/m², with its range) under Assumptions, or within the energy budget.',
     };
   }
   return null;

@@ -1,7 +1,7 @@
 import type { ClaimComputation } from '../contract/compute.ts';
 import { InputError } from '../errors.ts';
 import type { JointDraws } from '../robustness/ladder.ts';
-import { standardDeviation } from './standard-deviation.ts';
+import { splitNormal, splitNormalAt } from '../statistics/split-normal.ts';
 
 export interface DrawnRatio {
   /** +Infinity when the forcing does not exceed the uptake. */
@@ -28,14 +28,14 @@ export function heatUptakeRatio({ energyBudget }: ClaimComputation['evidence'], 
     });
   }
   const { forcingWm2, uptakeWm2 } = energyBudget;
-  const forcingSd = standardDeviation(forcingWm2);
-  const uptakeSd = standardDeviation(uptakeWm2);
+  const forcing = splitNormal(forcingWm2);
+  const uptake = splitNormal(uptakeWm2);
   const uptakes = draws.standardNormal('uptake');
   return {
-    value: ratioOf(forcingWm2.mean, uptakeWm2.mean),
+    value: ratioOf(forcingWm2.best, uptakeWm2.best),
     draws: draws
       .standardNormal('forcing')
-      .map((z, draw) => ratioOf(forcingWm2.mean + forcingSd * z, uptakeWm2.mean + uptakeSd * (uptakes[draw] ?? NaN))),
+      .map((z, draw) => ratioOf(splitNormalAt(forcing, z), splitNormalAt(uptake, uptakes[draw] ?? NaN))),
   };
 }
 

@@ -2,6 +2,7 @@ import { covarianceWords } from '../climate/procedures/slope-estimates.ts';
 import { fitLogRegression } from '../climate/procedures/fit-log-regression.ts';
 import type { Caveat } from '../contract/primitives.ts';
 import { NumericError } from '../errors.ts';
+import { inputText } from '../quantities/input-text.ts';
 import { formatInterval, formatNumber, formatYearList, formatYears } from '../quantities/notation.ts';
 import { interval90 } from '../robustness/ladder.ts';
 import { designColumns } from '../statistics/design-columns.ts';
@@ -13,7 +14,6 @@ import { outcome, untestable, type Assumption } from './assumption.ts';
 import { fitCaveats, logClaimLine } from './claim-line.ts';
 import { numberOnFooting } from './footing.ts';
 import { forcingLine, forcingMissing, type ForcingLine } from './forcing-line.ts';
-import { standardDeviation } from './standard-deviation.ts';
 import { weightWords } from './weigh.ts';
 
 /**
@@ -55,7 +55,7 @@ export const omittedForcings: Assumption = {
     });
     const both = twoPredictors(line, intercept);
     const r = formatNumber(ratio.value, { decimals: 2 });
-    const doubling = formatNumber(line.doublingWm2.mean, { decimals: 2 });
+    const doubling = formatNumber(line.doublingWm2.best, { decimals: 2 });
     const slope = formatNumber(line.slope, { decimals: 3 });
     return outcome('omitted-forcings', {
       statistic: {
@@ -91,7 +91,7 @@ export const omittedForcings: Assumption = {
         columns: ['Figure', 'Value', 'Standard error'],
         rows: [
           ['slope on total forcing (K per W/m²)', line.slope, line.slopeStandardError],
-          ['forcing of a doubling (W/m²)', line.doublingWm2.mean, standardDeviation(line.doublingWm2)],
+          [`forcing of a doubling, ${inputText(line.doublingWm2, 'W/m²')}`, line.doublingWm2.best, null],
           ['ΔF total (W/m²)', ratio.total, null],
           ['ΔF CO₂ (W/m²)', ratio.co2, null],
           [
@@ -124,7 +124,7 @@ function forcingRatio({ rows, forcingWm2, co2ForcingWm2, doublingWm2 }: ForcingL
   const nYears = Math.max(1, Math.min(10, Math.floor(years.length / 3)));
   const change = (values: readonly number[]) => mean(values.slice(-nYears)) - mean(values.slice(0, nYears));
   const total = change(forcingWm2);
-  const co2 = change(co2ForcingWm2 ?? logRatio.map((x) => (doublingWm2.mean * x) / Math.LN2));
+  const co2 = change(co2ForcingWm2 ?? logRatio.map((x) => (doublingWm2.best * x) / Math.LN2));
   if (co2 === 0) {
     throw new NumericError({
       code: 'no-spread',
@@ -162,7 +162,7 @@ function twoPredictors(
         ]),
         [
           'two predictors: forcing of a doubling × slope on CO₂ (K per doubling)',
-          doublingWm2.mean * (answer.coefficients[place] ?? NaN),
+          doublingWm2.best * (answer.coefficients[place] ?? NaN),
           null,
         ],
       ],

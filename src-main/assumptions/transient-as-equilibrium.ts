@@ -1,13 +1,13 @@
 import { energyBudget } from '../climate/energy-budget.ts';
-import type { EnergyBudgetInputs } from '../contract/claim.ts';
+import type { EnergyBudgetAnswer } from '../contract/energy-budget.ts';
 import type { Interval } from '../contract/primitives.ts';
-import type { AssumptionOutcome, EnergyBudgetAnswer, Weight } from '../contract/result.ts';
-import { formatInterval, formatNumber, withUnit } from '../quantities/notation.ts';
+import type { AssumptionOutcome, Weight } from '../contract/result.ts';
+import { inputText } from '../quantities/input-text.ts';
+import { formatInterval, formatNumber } from '../quantities/notation.ts';
 import { quantityNames } from '../quantities/quantity-names.ts';
 import { outcome, untestable, type Assumption } from './assumption.ts';
 import { perDoublingFactor } from './per-doubling-factor.ts';
 import { isEquilibrium, presentedQuantity } from './presented-quantity.ts';
-import { standardDeviation } from './standard-deviation.ts';
 import type { TestContext } from './test-context.ts';
 import { weightWords } from './weigh.ts';
 
@@ -26,10 +26,10 @@ export const transientAsEquilibrium: Assumption = {
   explanation:
     'The oceans are still warming up. What the thermometers show so far is not the whole answer to today’s forcing, so a number read from the record is a transient one and smaller than that of a settled climate.',
   method:
-    'Energy budget between two periods from warming, forcing and heat uptake, each with its 5–95 % range: effective sensitivity and transient response by Monte Carlo, and their quotient.',
+    'Energy budget between two periods from warming, forcing and heat uptake, each with its range: effective sensitivity and transient response by Monte Carlo, and their quotient.',
   formula: 'EffCS = F2x ΔT / (ΔF − ΔN); TCR = F2x ΔT / ΔF; EffCS / TCR = ΔF / (ΔF − ΔN)',
   needs:
-    'Warming, forcing change and heat-uptake change between two periods, and the forcing of a CO₂ doubling, with 5–95 % half-widths.',
+    'Warming, forcing change and heat-uptake change between two periods, and the forcing of a CO₂ doubling, each with its range.',
   source: 'Gregory et al. 2002, J. Climate 15, 3117; Otto et al. 2013, Nat. Geosci. 6, 415; AR6 WG1 §7.5.2.1',
 
   applies: ({ procedure }) => procedure.kind === 'log-regression',
@@ -38,7 +38,7 @@ export const transientAsEquilibrium: Assumption = {
     const { computation, recomputation, show, showWithUnit, showShift } = context;
     const { energyBudget: inputs } = computation.evidence;
     if (!inputs) return untestable(transientAsEquilibrium, missing);
-    const budget = energyBudget({ ...normals(inputs), draws: nBudgetDraws, seed: computation.seed });
+    const budget = energyBudget({ ...inputs, draws: nBudgetDraws, seed: computation.seed });
     const factor = perDoublingFactor(recomputation.unit);
     const effcs = inUnit(budget, 'effcs', factor);
     const tcr = inUnit(budget, 'tcr', factor);
@@ -47,7 +47,7 @@ export const transientAsEquilibrium: Assumption = {
     const weight: Weight = effcs.value === null ? 'decisive' : context.weigh(effcs.value);
     const ratioText = ratio === null ? 'unbounded' : formatNumber(ratio, { decimals: 2 });
     const toNumber = effcs.value === null ? null : effcs.value / recomputation.value;
-    const uptake = inputText(inputs, 'uptakeWm2');
+    const uptake = inputText(inputs.uptakeWm2, 'W/m²');
     const effcsText = effcs.value === null ? 'no finite value' : showWithUnit(effcs.value);
     const tcrText = tcr.value === null ? 'no finite value' : show(tcr.value);
     return outcome('transient-as-equilibrium', {
@@ -59,7 +59,7 @@ export const transientAsEquilibrium: Assumption = {
               value: ratio,
               p: null,
               interval: null,
-              convention: `ΔF/(ΔF − ΔN) at the central values, ΔF ${inputText(inputs, 'forcingWm2')}, ΔN ${uptake}, F2x ${inputText(inputs, 'doublingWm2')}, ΔT ${inputText(inputs, 'warmingK', 'K')} (± is half of 5–95 %; normal, independent)`,
+              convention: `ΔF/(ΔF − ΔN) at the central values, ΔF ${inputText(inputs.forcingWm2, 'W/m²')}; ΔN ${uptake}; F2x ${inputText(inputs.doublingWm2, 'W/m²')}; ΔT ${inputText(inputs.warmingK, 'K')} (split normal, independent)`,
             },
       test: `energy budget, ΔN ${uptake}: EffCS ${formatInterval(effcs.interval)}, TCR ${formatInterval(tcr.interval)}`,
       alternative:
@@ -109,18 +109,8 @@ export const transientAsEquilibrium: Assumption = {
 const missing = {
   reason: 'No energy budget is given.',
   wouldNeed:
-    'Give warming, forcing change and heat-uptake change between two periods and the forcing of a doubling, with their 5–95 % half-widths, under Assumptions.',
+    'Give warming, forcing change and heat-uptake change between two periods and the forcing of a doubling, with their ranges, under Assumptions.',
 };
-
-function normals({ warmingK, forcingWm2, uptakeWm2, doublingWm2 }: EnergyBudgetInputs) {
-  const normal = (input: EnergyBudgetInputs['warmingK']) => ({ mean: input.mean, sd: standardDeviation(input) });
-  return {
-    warmingK: normal(warmingK),
-    forcingWm2: normal(forcingWm2),
-    uptakeWm2: normal(uptakeWm2),
-    doublingWm2: normal(doublingWm2),
-  };
-}
 
 function inUnit(
   budget: EnergyBudgetAnswer,
@@ -134,16 +124,6 @@ function inUnit(
 
 function quantilesIn({ q05, q17, q50, q83, q95 }: EnergyBudgetAnswer['effcs'], factor: number): (number | null)[] {
   return [q05, q17, q50, q83, q95].map((value) => (value === null ? null : value * factor));
-}
-
-function inputText(inputs: EnergyBudgetInputs, which: keyof EnergyBudgetInputs, unit = 'W/m²'): string {
-  const { mean, halfWidth90 } = inputs[which];
-  return withUnit(`${asGiven(mean)} ± ${asGiven(halfWidth90)}`, unit);
-}
-
-/** All digits that the reviewer gave, so that the figures can be worked out again. */
-function asGiven(value: number): string {
-  return String(value).replace('-', '−');
 }
 
 function proposal(

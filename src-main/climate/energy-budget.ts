@@ -1,9 +1,10 @@
-import type { EnergyBudgetRequest } from '../contract/compute.ts';
+import type { EnergyBudgetAnswer, EnergyBudgetRequest, Spread } from '../contract/energy-budget.ts';
 import type { Caveat } from '../contract/primitives.ts';
-import type { EnergyBudgetAnswer } from '../contract/result.ts';
 import { NumericError } from '../errors.ts';
+import { fieller } from '../statistics/fieller.ts';
 import { finiteNumber } from '../statistics/finite-values.ts';
 import { generatorId, randomStream } from '../statistics/random-stream.ts';
+import { splitNormal, splitNormalAt, type SplitNormal } from '../statistics/split-normal.ts';
 import { quantilesWithUnbounded } from './quantiles-with-unbounded.ts';
 
 /** Draws per random stream. Part of the numbers: changing it changes the digits of every stored result. */
@@ -16,95 +17,160 @@ const levels = [0.05, 0.17, 0.5, 0.83, 0.95] as const;
  * forcing behind it, and the heat that the planet still takes up.
  *
  * Model    EffCS = F2x ΔT / (ΔF − ΔN), TCR = F2x ΔT / ΔF, λ = (ΔF − ΔN)/ΔT; changes between two periods,
- *          F and N positive downward, λ > 0 restoring
- * Assumes  normal inputs, independent but for a correlation between ΔF and F2x; each block of 65 536 draws has its own
- *          random stream. Draws whose denominator is not positive count as unbounded above (+∞), never as negative
+ *          F and N positive downward, λ > 0 restoring. With a pattern effect α′ > 0, by which the feedback of the record is
+ *          stronger than that of the settled climate: ECS = F2x / (λ − α′)
+ * Assumes  inputs normal, or split normal from a range, independent but for a correlation between ΔF and F2x; each block
+ *          of 65 536 draws has its own random stream. Draws whose denominator is not positive count as unbounded above
+ *          (+∞), never as negative. The Fieller set takes the mean of the two spreads of a split normal
  *
- * @param request     ΔT in K; ΔF, ΔN and F2x in W/m², mean and standard deviation each; nDraws, seed
+ * @param request     ΔT in K; ΔF, ΔN and F2x in W/m², α′ in W/m² per K; nDraws, seed
  * @param onProgress  called after each block with the share done; may throw to stop
- * @returns  quantiles (K per doubling), null where unbounded; central values from the means; caveats
- * @throws   InputError `out-of-range`; NumericError `no-warming` when the mean warming is zero
+ * @returns  quantiles (K per doubling), null where unbounded; central values from the central inputs; caveats
+ * @throws   InputError `out-of-range`, `range-order`; NumericError `no-warming` when the central warming is zero
  *
- * Differs   a published range may rest on skewed inputs: a 5–95 % range that is not symmetric is not a normal one
- * Source    Gregory et al. 2002, J. Climate 15, 3117; Otto et al. 2013, Nat. Geosci. 6, 415; AR6 WG1 §7.5.2.1
+ * Differs   AR6 prints ECS = F2x/(−α + α′); its own figures (3.5 for α′ = 0.5) need the sign used here
+ * Source    Gregory et al. 2002, J. Climate 15, 3117; Otto et al. 2013, Nat. Geosci. 6, 415; AR6 WG1 §7.5.2.1;
+ *           Fieller 1954, J. R. Stat. Soc. B 16, 175
  * Checked   test/reference/climate/energy-budget.test.ts (A: Otto 2013 and AR6 as published; C: closed forms)
  */
 export function energyBudget(
   request: EnergyBudgetRequest,
   onProgress?: (shareDone: number) => void,
 ): EnergyBudgetAnswer {
-  const { warmingK, forcingWm2, uptakeWm2, doublingWm2, draws: nDraws, seed } = request;
-  const correlation = request.correlation ?? 0;
-  checkInputs(request);
+  const { draws: nDraws, seed, correlation = 0 } = request;
+  const spreads = checkedSpreads(request);
+  const { warming: warmings, forcing: forcings, uptake: uptakes, doubling: doublings, pattern: patterns } = spreads;
   const independentShare = Math.sqrt(1 - correlation * correlation);
   const effcs = new Float64Array(nDraws);
   const tcr = new Float64Array(nDraws);
+  const ecs = new Float64Array(patterns ? nDraws : 0);
   let nEffcs = 0;
   let nTcr = 0;
+  let nEcs = 0;
   let nDone = 0;
   for (let block = 0; nDone < nDraws; block++) {
     const stream = randomStream(seed, block);
     const blockEnd = Math.min(nDone + drawsPerBlock, nDraws);
     for (; nDone < blockEnd; nDone++) {
-      const warming = warmingK.mean + warmingK.sd * stream.normal();
+      const warming = splitNormalAt(warmings, stream.normal());
       const forcingNormal = stream.normal();
-      const forcing = forcingWm2.mean + forcingWm2.sd * forcingNormal;
-      const uptake = uptakeWm2.mean + uptakeWm2.sd * stream.normal();
+      const forcing = splitNormalAt(forcings, forcingNormal);
+      const uptake = splitNormalAt(uptakes, stream.normal());
       const doublingNormal = correlation * forcingNormal + independentShare * stream.normal();
-      const response = (doublingWm2.mean + doublingWm2.sd * doublingNormal) * warming;
+      const response = splitNormalAt(doublings, doublingNormal) * warming;
       if (forcing > uptake) effcs[nEffcs++] = response / (forcing - uptake);
       if (forcing > 0) tcr[nTcr++] = response / forcing;
+      if (!patterns) continue;
+      const settled = forcing - uptake - splitNormalAt(patterns, stream.normal()) * warming;
+      if (settled > 0) ecs[nEcs++] = response / settled;
     }
     onProgress?.(nDone / nDraws);
   }
-  const shareUndefined = (nDraws - nEffcs) / nDraws;
-  const shareUndefinedTcr = (nDraws - nTcr) / nDraws;
-  const [e05, e17, e50, e83, e95] = quantilesWithUnbounded(effcs.subarray(0, nEffcs), nDraws, levels);
-  const [t05, t17, t50, t83, t95] = quantilesWithUnbounded(tcr.subarray(0, nTcr), nDraws, levels);
-  const netForcing = forcingWm2.mean - uptakeWm2.mean;
-  const responseWm2K = doublingWm2.mean * warmingK.mean;
+  const shares = {
+    shareUndefined: (nDraws - nEffcs) / nDraws,
+    shareUndefinedTcr: (nDraws - nTcr) / nDraws,
+    shareUndefinedEcs: patterns ? (nDraws - nEcs) / nDraws : null,
+  };
   return {
-    effcs: { q05: e05, q17: e17, q50: e50, q83: e83, q95: e95 },
-    tcr: { q05: t05, q17: t17, q50: t50, q83: t83, q95: t95 },
-    central: {
-      effcs: netForcing > 0 ? responseWm2K / netForcing : null,
-      tcr: forcingWm2.mean > 0 ? responseWm2K / forcingWm2.mean : null,
-      feedbackWm2PerK: netForcing / warmingK.mean,
-    },
-    shareUndefined,
-    shareUndefinedTcr,
+    effcs: quantilesOf(effcs.subarray(0, nEffcs), nDraws),
+    tcr: quantilesOf(tcr.subarray(0, nTcr), nDraws),
+    ecs: patterns ? quantilesOf(ecs.subarray(0, nEcs), nDraws) : null,
+    central: centralValues(spreads),
+    ...shares,
+    fieller90: fiellerSets(spreads, correlation),
     random: { generator: generatorId, seed, nDraws },
-    caveats: caveatsOf(request, shareUndefined, shareUndefinedTcr),
+    caveats: caveatsOf(spreads, nDraws, shares),
   };
 }
 
-function checkInputs({ warmingK, forcingWm2, uptakeWm2, doublingWm2, draws, correlation }: EnergyBudgetRequest): void {
-  const inputs = { warmingK, forcingWm2, uptakeWm2, doublingWm2 };
-  for (const [name, { mean, sd }] of Object.entries(inputs)) {
-    finiteNumber('energyBudget', `${name}.mean`, mean);
-    finiteNumber('energyBudget', `${name}.sd`, sd, { atLeast: 0 });
-  }
-  finiteNumber('energyBudget', 'doublingWm2.mean', doublingWm2.mean, { above: 0 });
+interface Spreads {
+  warming: SplitNormal;
+  forcing: SplitNormal;
+  uptake: SplitNormal;
+  doubling: SplitNormal;
+  pattern: SplitNormal | null;
+}
+
+function checkedSpreads(request: EnergyBudgetRequest): Spreads {
+  const { warmingK, forcingWm2, uptakeWm2, doublingWm2, patternWm2PerK, draws, correlation } = request;
+  const spreads = {
+    warming: spreadOf('warmingK', warmingK),
+    forcing: spreadOf('forcingWm2', forcingWm2),
+    uptake: spreadOf('uptakeWm2', uptakeWm2),
+    doubling: spreadOf('doublingWm2', doublingWm2),
+    pattern: patternWm2PerK ? spreadOf('patternWm2PerK', patternWm2PerK) : null,
+  };
+  finiteNumber('energyBudget', 'doublingWm2', spreads.doubling.centre, { above: 0 });
   finiteNumber('energyBudget', 'draws', draws, { isWhole: true, atLeast: 1 });
   finiteNumber('energyBudget', 'correlation', correlation ?? 0, { atLeast: -1, atMost: 1 });
-  if (warmingK.mean === 0) {
+  if (spreads.warming.centre === 0) {
     throw new NumericError({
       code: 'no-warming',
-      where: 'energyBudget, warmingK.mean',
+      where: 'energyBudget, warmingK',
       expected: 'a warming that is not zero, so that a feedback can be formed',
       received: '0',
       hint: 'Compare two periods between which the temperature changed.',
     });
   }
+  return spreads;
 }
 
-function caveatsOf(request: EnergyBudgetRequest, shareUndefined: number, shareUndefinedTcr: number): Caveat[] {
+function spreadOf(name: string, given: Spread): SplitNormal {
+  if (!('sd' in given)) return splitNormal(given);
+  const { mean, sd } = given;
+  finiteNumber('energyBudget', `${name}.mean`, mean);
+  finiteNumber('energyBudget', `${name}.sd`, sd, { atLeast: 0 });
+  return { centre: mean, sdBelow: sd, sdAbove: sd };
+}
+
+function quantilesOf(finite: Float64Array, nAll: number): EnergyBudgetAnswer['effcs'] {
+  const [q05, q17, q50, q83, q95] = quantilesWithUnbounded(finite, nAll, levels);
+  return { q05, q17, q50, q83, q95 };
+}
+
+function centralValues({ warming, forcing, uptake, doubling, pattern }: Spreads): EnergyBudgetAnswer['central'] {
+  const net = forcing.centre - uptake.centre;
+  const response = doubling.centre * warming.centre;
+  const settled = pattern ? net - pattern.centre * warming.centre : 0;
+  return {
+    effcs: net > 0 ? response / net : null,
+    tcr: forcing.centre > 0 ? response / forcing.centre : null,
+    ecs: settled > 0 ? response / settled : null,
+    feedbackWm2PerK: net / warming.centre,
+  };
+}
+
+function fiellerSets(
+  { warming, forcing, uptake, doubling }: Spreads,
+  correlation: number,
+): EnergyBudgetAnswer['fieller90'] {
+  const sd = ({ sdBelow, sdAbove }: SplitNormal) => (sdBelow + sdAbove) / 2;
+  const numerator = {
+    numerator: doubling.centre * warming.centre,
+    // Of a product of independent quantities, exactly.
+    numeratorVariance:
+      (doubling.centre * sd(warming)) ** 2 + (warming.centre * sd(doubling)) ** 2 + (sd(warming) * sd(doubling)) ** 2,
+    covariance: warming.centre * correlation * sd(doubling) * sd(forcing),
+  };
+  const set = (denominator: number, denominatorVariance: number) =>
+    denominator === 0 ? null : fieller({ ...numerator, denominator, denominatorVariance }, 90);
+  return {
+    effcs: set(forcing.centre - uptake.centre, sd(forcing) ** 2 + sd(uptake) ** 2),
+    tcr: set(forcing.centre, sd(forcing) ** 2),
+  };
+}
+
+function caveatsOf(
+  { forcing, uptake, warming }: Spreads,
+  nDraws: number,
+  shares: Pick<EnergyBudgetAnswer, 'shareUndefined' | 'shareUndefinedTcr' | 'shareUndefinedEcs'>,
+): Caveat[] {
+  const { shareUndefined, shareUndefinedTcr, shareUndefinedEcs } = shares;
   const caveats: Caveat[] = [];
-  const { forcingWm2, uptakeWm2, draws, warmingK } = request;
-  if (forcingWm2.mean <= uptakeWm2.mean) {
+  if (forcing.centre <= uptake.centre) {
     caveats.push({
       code: 'no-positive-net-forcing',
-      detail: `The forcing (${forcingWm2.mean} W/m²) does not exceed the heat uptake (${uptakeWm2.mean} W/m²): the effective sensitivity has no finite central value.`,
+      detail: `The forcing (${forcing.centre} W/m²) does not exceed the heat uptake (${uptake.centre} W/m²): the effective sensitivity has no finite central value.`,
     });
   }
   if (shareUndefined > 0) {
@@ -120,14 +186,20 @@ function caveatsOf(request: EnergyBudgetRequest, shareUndefined: number, shareUn
       detail: `In ${(100 * shareUndefinedTcr).toPrecision(2)} % of the draws the forcing is not positive; they count as unbounded above in the transient response.`,
     });
   }
-  if (warmingK.mean < 1.645 * warmingK.sd) {
+  if (shareUndefinedEcs) {
+    caveats.push({
+      code: 'unbounded-draws-ecs',
+      detail: `In ${(100 * shareUndefinedEcs).toPrecision(2)} % of the draws no restoring feedback is left once the pattern effect is counted; they count as unbounded above.`,
+    });
+  }
+  if (warming.centre < 1.645 * warming.sdBelow) {
     caveats.push({
       code: 'warming-not-distinct',
       detail: 'The warming is not distinguishable from zero at its stated uncertainty; low quantiles may be negative.',
     });
   }
-  if (draws < 10_000) {
-    caveats.push({ code: 'few-draws', detail: `With ${draws} draws the outer quantiles are known only roughly.` });
+  if (nDraws < 10_000) {
+    caveats.push({ code: 'few-draws', detail: `With ${nDraws} draws the outer quantiles are known only roughly.` });
   }
   return caveats;
 }

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { longText, quantityId, recordId, shortText, yearSpan } from './primitives.ts';
+import { uncertainInput } from './uncertain-input.ts';
 
 export const bound = z.enum(['equals', 'at most', 'at least']);
 export type Bound = z.infer<typeof bound>;
@@ -95,14 +96,6 @@ export type LogRegressionProcedure = z.infer<typeof logRegressionProcedure>;
 export type TrendProcedure = z.infer<typeof trendProcedure>;
 export type RatioProcedure = z.infer<typeof ratioProcedure>;
 export type Procedure = z.infer<typeof procedure>;
-
-/** A quantity with its 5–95 % half-width; normal unless stated otherwise. */
-export const uncertainInput = z.object({
-  mean: z.number(),
-  halfWidth90: z.number().min(0),
-  source: shortText,
-});
-export type UncertainInput = z.infer<typeof uncertainInput>;
 
 /** Warming, forcing change, heat-uptake change between two periods, and the forcing of a CO2 doubling. */
 export const energyBudgetInputs = z.object({

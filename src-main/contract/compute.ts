@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { anchor, evidence, procedure, slopeCovariance, statement, tolerance } from './claim.ts';
+import { energyBudgetAnswer, energyBudgetRequest } from './energy-budget.ts';
 import { estimatorComparison } from './estimator-comparison.ts';
 import { column, lineMethods, predictors, rowYears } from './line-estimators.ts';
 import { year } from './primitives.ts';
@@ -8,7 +9,6 @@ import {
   assumptionsAnswer,
   claimSweep,
   derivationAnswer,
-  energyBudgetAnswer,
   recomputation,
   regressionAnswer,
   windowSweep,
@@ -22,7 +22,6 @@ const covariance = z.object({
   lag: z.int().min(0).optional(),
   smallSample: z.boolean().optional(),
 });
-const normal = z.object({ mean: z.number(), sd: z.number().min(0) });
 const seed = z.int().min(0).max(4_294_967_295);
 
 export const regressionRequest = z.object({
@@ -48,18 +47,6 @@ export const windowSweepRequest = z
   })
   .refine(({ x, co2Ppm }) => (x === undefined) !== (co2Ppm === undefined), { error: 'give either x or co2Ppm' });
 export type WindowSweepRequest = z.infer<typeof windowSweepRequest>;
-
-export const energyBudgetRequest = z.object({
-  warmingK: normal,
-  forcingWm2: normal,
-  uptakeWm2: normal,
-  doublingWm2: normal,
-  draws: z.int().min(100).max(10_000_000),
-  seed,
-  /** Correlation between the forcing change and the forcing of a doubling. */
-  correlation: z.number().min(-1).max(1).optional(),
-});
-export type EnergyBudgetRequest = z.infer<typeof energyBudgetRequest>;
 
 export const derivationRequest = z.object({ lines: z.array(z.string().max(500)).max(100) });
 

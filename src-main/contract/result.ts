@@ -247,30 +247,6 @@ export const claimSweep = windowSweep.extend({
 });
 export type ClaimSweep = z.infer<typeof claimSweep>;
 
-export const energyBudgetAnswer = z.object({
-  effcs: z.object({
-    q05: z.number().nullable(),
-    q17: z.number().nullable(),
-    q50: z.number().nullable(),
-    q83: z.number().nullable(),
-    q95: z.number().nullable(),
-  }),
-  tcr: z.object({
-    q05: z.number().nullable(),
-    q17: z.number().nullable(),
-    q50: z.number().nullable(),
-    q83: z.number().nullable(),
-    q95: z.number().nullable(),
-  }),
-  central: z.object({ effcs: z.number().nullable(), tcr: z.number().nullable(), feedbackWm2PerK: z.number() }),
-  /** Share of draws whose denominator ΔF − ΔN is not positive; counted as unbounded above. */
-  shareUndefined: z.number(),
-  shareUndefinedTcr: z.number(),
-  random: z.object({ generator: z.string(), seed: z.int(), nDraws: z.int() }),
-  caveats: z.array(caveat),
-});
-export type EnergyBudgetAnswer = z.infer<typeof energyBudgetAnswer>;
-
 const closedInterval = z.object({ low: z.number(), high: z.number() });
 export const derivationLine = z.object({
   line: z.string(),

@@ -62,8 +62,8 @@ export function ar1Noise(nYears: number, { sd, carryOver, seed }: { sd: number; 
 
 /** The inputs of AR6 WG1 §7.5.2.1 (1850–1900 to 2006–2019); the forcing range, 1.53 to 2.91, taken as symmetric. */
 export const ar6EnergyBudget: EnergyBudgetInputs = {
-  warmingK: { mean: 1.03, halfWidth90: 0.2, source: 'AR6 WG1 §7.5.2.1' },
-  forcingWm2: { mean: 2.2, halfWidth90: 0.7, source: 'AR6 WG1 §7.5.2.1' },
-  uptakeWm2: { mean: 0.59, halfWidth90: 0.35, source: 'AR6 WG1 §7.5.2.1' },
-  doublingWm2: { mean: 3.93, halfWidth90: 0.47, source: 'AR6 WG1 §7.3.2.1' },
+  warmingK: { best: 1.03, low: 0.83, high: 1.23, levelPercent: 90, source: 'AR6 WG1 §7.5.2.1' },
+  forcingWm2: { best: 2.2, low: 1.5, high: 2.9, levelPercent: 90, source: 'AR6 WG1 §7.5.2.1' },
+  uptakeWm2: { best: 0.59, low: 0.24, high: 0.94, levelPercent: 90, source: 'AR6 WG1 §7.5.2.1' },
+  doublingWm2: { best: 3.93, low: 3.46, high: 4.4, levelPercent: 90, source: 'AR6 WG1 §7.3.2.1' },
 };

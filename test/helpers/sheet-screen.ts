@@ -41,10 +41,10 @@ export function inventedSheet(change: Partial<ClaimView> = {}): ClaimView {
     catalogue: [],
     published,
     publishedBudget: {
-      warmingK: { mean: 1.01, halfWidth90: 0.11, source: 'an invented edition' },
-      forcingWm2: { mean: 2.02, halfWidth90: 0.22, source: 'an invented edition' },
-      uptakeWm2: { mean: 0.33, halfWidth90: 0.03, source: 'an invented edition' },
-      doublingWm2: { mean: 4.04, halfWidth90: 0.44, source: 'an invented edition' },
+      warmingK: { best: 1.01, low: 0.9, high: 1.12, levelPercent: 90, source: 'an invented edition' },
+      forcingWm2: { best: 2.02, low: 1.8, high: 2.24, levelPercent: 90, source: 'an invented edition' },
+      uptakeWm2: { best: 0.33, low: 0.3, high: 0.36, levelPercent: 90, source: 'an invented edition' },
+      doublingWm2: { best: 4.04, low: 3.6, high: 4.48, levelPercent: 90, source: 'an invented edition' },
     },
     fillIns: { recomputed: '1.87 ± 0.07 K per doubling', stated: '1.9 K per doubling' },
     trail: [

@@ -1,6 +1,6 @@
-import type { UncertainInput } from '../../contract/claim.ts';
 import type { ReportClaim } from '../../contract/project.ts';
-import { formatWithUncertainty } from '../../quantities/notation.ts';
+import type { UncertainInput } from '../../contract/uncertain-input.ts';
+import { inputText } from '../../quantities/input-text.ts';
 import { facts, html, type Html } from '../html.ts';
 
 /** What the reviewer supplied so that assumptions could be tested. */
@@ -11,19 +11,18 @@ export function evidencePart({ claim, series, published }: ReportClaim): Html {
   const compared = published.find(({ id }) => id === comparedWith)?.label ?? comparedWith;
   return html`<h3>Evidence supplied</h3>
     ${facts([
-      ['Warming', inputText(budget?.warmingK, 'K')],
-      ['Forcing change', inputText(budget?.forcingWm2, 'W/m²')],
-      ['Heat uptake', inputText(budget?.uptakeWm2, 'W/m²')],
-      ['CO₂ doubling', inputText(budget?.doublingWm2, 'W/m²')],
-      ['… for slopes', inputText(doublingWm2, 'W/m²')],
+      ['Warming', givenText(budget?.warmingK, 'K')],
+      ['Forcing change', givenText(budget?.forcingWm2, 'W/m²')],
+      ['Heat uptake', givenText(budget?.uptakeWm2, 'W/m²')],
+      ['CO₂ doubling', givenText(budget?.doublingWm2, 'W/m²')],
+      ['… for slopes', givenText(doublingWm2, 'W/m²')],
       ['Total forcing', seriesName(totalForcingSeriesId)],
       ['CO₂ forcing', seriesName(co2ForcingSeriesId)],
       ['Compared with', compared ?? 'the source names no published range'],
     ])}`;
 }
 
-function inputText(input: UncertainInput | null | undefined, unit: string): string {
+function givenText(input: UncertainInput | null | undefined, unit: string): string {
   if (!input) return 'none given';
-  const source = input.source === '' ? 'no source given' : input.source;
-  return `${formatWithUncertainty(input.mean, input.halfWidth90, unit)} (5–95 %); ${source}`;
+  return `${inputText(input, unit)}; ${input.source === '' ? 'no source given' : input.source}`;
 }

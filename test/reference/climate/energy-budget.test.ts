@@ -2,45 +2,45 @@ import { describe, expect, it } from 'vitest';
 import normalQuantile from '@stdlib/stats-base-dists-normal-quantile';
 import normalCdf from '@stdlib/stats-base-dists-normal-cdf';
 import { energyBudget } from '../../../src-main/climate/energy-budget.ts';
-import type { EnergyBudgetRequest } from '../../../src-main/contract/compute.ts';
+import type { EnergyBudgetRequest } from '../../../src-main/contract/energy-budget.ts';
 import { expectClose, type Tolerance } from '../../helpers/close.ts';
 
 /** Standard deviation of a normal distribution from its 5–95 % half-width. */
 const sd = (halfWidth90: number): number => halfWidth90 / 1.645;
-const exact = (mean: number): EnergyBudgetRequest['warmingK'] => ({ mean, sd: 0 });
+const exact = (mean: number) => ({ mean, sd: 0 });
 const draws = 200_000;
 
 // Inputs: Otto et al. 2013, 2000s; central values second-hand, half-widths from memory.
-const otto: EnergyBudgetRequest = {
+const otto = {
   warmingK: { mean: 0.75, sd: sd(0.2) },
   forcingWm2: { mean: 1.95, sd: sd(0.58) },
   uptakeWm2: { mean: 0.65, sd: sd(0.27) },
   doublingWm2: { mean: 3.44, sd: sd(0.34) },
   draws,
   seed: 11,
-};
+} satisfies EnergyBudgetRequest;
 
 // Inputs: AR6 WG1 §7.5.2.1 (read there); the forcing range 1.53–2.91 taken as symmetric.
-const ar6: EnergyBudgetRequest = {
+const ar6 = {
   warmingK: { mean: 1.03, sd: sd(0.2) },
   forcingWm2: { mean: 2.2, sd: sd((2.91 - 1.53) / 2) },
   uptakeWm2: { mean: 0.59, sd: sd(0.35) },
   doublingWm2: { mean: 3.93, sd: sd(0.47) },
   draws,
   seed: 12,
-};
+} satisfies EnergyBudgetRequest;
 
 describe('central values', () => {
   const hand: Tolerance = { rel: 0, abs: 0.0006, why: 'worked by hand to three decimals' };
 
   it('are those of Otto et al. 2013 (published 2.0 and 1.3)', () => {
     const { central } = energyBudget({ ...otto, draws: 100 });
-    expectClose(central, { effcs: 1.985, tcr: 1.323, feedbackWm2PerK: 1.733 }, hand);
+    expectClose(central, { effcs: 1.985, tcr: 1.323, ecs: null, feedbackWm2PerK: 1.733 }, hand);
   });
 
   it('are those of AR6 §7.5.2.1 (published 2.5; its TCR of 1.9 is 1.84 from its own inputs)', () => {
     const { central } = energyBudget({ ...ar6, draws: 100 });
-    expectClose(central, { effcs: 2.514, tcr: 1.84, feedbackWm2PerK: 1.563 }, hand);
+    expectClose(central, { effcs: 2.514, tcr: 1.84, ecs: null, feedbackWm2PerK: 1.563 }, hand);
   });
 });
 
@@ -74,6 +74,34 @@ describe('ranges of published budgets', () => {
 
   it('Otto et al. 2013 with independent errors: 1.18/1.98/4.06', () => {
     expectQuantiles(energyBudget(otto).effcs, { q05: 1.18, q50: 1.98, q95: 4.06 });
+  });
+
+  it('AR6 §7.5.2.1 with its skewed forcing of 1.53 to 2.91, kept as it is', () => {
+    const forcingWm2 = { best: 2.2, low: 1.53, high: 2.91, levelPercent: 90 };
+    const { effcs, tcr } = energyBudget({ ...ar6, forcingWm2 });
+    expectQuantiles(effcs, { q05: 1.56, q17: 1.88, q50: 2.5, q83: 3.53, q95: 4.87 });
+    expectQuantiles(tcr, { q05: 1.26, q17: 1.47, q50: 1.83, q83: 2.31, q95: 2.79 });
+  });
+
+  it('AR6 §7.5.2.1 with the pattern effect: 3.5 (from 1.7) for 0.5 ± 0.5, 2.7 (1.7–5.9) for 0.1 ± 0.3', () => {
+    const strong = energyBudget({ ...ar6, patternWm2PerK: { best: 0.5, low: 0, high: 1, levelPercent: 90 } });
+    // AR6 does not say how it drew: for 0.5 ± 0.5 its ends are 1.7 and 13.8, those of independent draws 1.9 and beyond 20.
+    const published: Tolerance = { rel: 0, abs: 0.15, why: 'one decimal, and inputs rounded for print' };
+    expectClose(strong.ecs?.q50, 3.5, { ...published, abs: 0.25 });
+    expectClose(strong.central.ecs, 3.7, { rel: 0, abs: 0.005, why: 'worked by hand: 3.93 / (1.563 − 0.5)' });
+    const weak = energyBudget({ ...ar6, patternWm2PerK: { best: 0.1, low: -0.2, high: 0.4, levelPercent: 90 } });
+    expectClose(weak.ecs?.q50, 2.7, published);
+    expectClose(weak.ecs?.q05, 1.7, published);
+    expectClose(weak.ecs?.q95, 5.9, { ...published, abs: 0.3 });
+  });
+
+  it('AR6 §7.5.2.1 by Fieller: near the Monte Carlo ends, and open above where the forcing is too small', () => {
+    const { effcs } = energyBudget(ar6).fieller90;
+    expectClose(effcs?.low, 1.56, { rel: 0, abs: 0.1, why: 'another definition of the same range' });
+    expectClose(effcs?.high, 4.87, { rel: 0, abs: 0.3, why: 'another definition of the same range' });
+    const open = energyBudget({ ...ar6, forcingWm2: { mean: 1, sd: 0.4 } }).fieller90.effcs;
+    expect(open?.high).toBeNull();
+    expect(open?.low).toBeGreaterThan(0);
   });
 
   it('Gregory et al. 2002: no upper bound, 5 % at 1.63 (published 1.6), 29 % unbounded', () => {

@@ -69,8 +69,9 @@ describe('the ledger', () => {
 });
 
 describe('the energy budget', () => {
-  const central = '[aria-label="Heat-uptake change, ΔN, central value"]';
-  const half = '[aria-label="Heat-uptake change, ΔN, 5–95 % half-width"]';
+  const central = '[aria-label="Heat-uptake change, ΔN, best value"]';
+  const low = '[aria-label="Heat-uptake change, ΔN, lower end"]';
+  const high = '[aria-label="Heat-uptake change, ΔN, upper end"]';
 
   it('is filled in from the published one, and stored when the reviewer says so', async () => {
     const { screen, host } = await mounted();
@@ -80,23 +81,33 @@ describe('the energy budget', () => {
     await button(screen, 'Keep these values').trigger('click');
     await settled();
     expect(host.inputs('claim.update')[0]?.change.evidence).toMatchObject({
-      energyBudget: { uptakeWm2: { mean: 0.33, halfWidth90: 0.03, source: 'an invented edition' } },
-      doublingWm2: { mean: 4.04, halfWidth90: 0.44 },
+      energyBudget: {
+        uptakeWm2: { best: 0.33, low: 0.3, high: 0.36, levelPercent: 90, source: 'an invented edition' },
+      },
+      doublingWm2: { best: 4.04, low: 3.6, high: 4.48, levelPercent: 90 },
     });
   });
 
   it('reads a decimal comma and a minus sign', async () => {
     const { screen, host } = await mounted();
     await screen.get(central).setValue('−0,2');
+    await screen.get(low).setValue('-0.5');
     await button(screen, 'Keep these values').trigger('click');
     await settled();
-    expect(host.inputs('claim.update')[0]?.change.evidence?.energyBudget?.uptakeWm2.mean).toBe(-0.2);
+    expect(host.inputs('claim.update')[0]?.change.evidence?.energyBudget?.uptakeWm2).toMatchObject({
+      best: -0.2,
+      low: -0.5,
+    });
   });
 
   it.each([
     { at: central, text: 'some', says: 'Expected a number, but found “some”.' },
-    { at: half, text: '', says: 'Expected a 5–95 % half-width, 0 for a value taken as exact, but found nothing.' },
-    { at: half, text: '-1', says: 'but found “-1”.' },
+    {
+      at: low,
+      text: '',
+      says: 'Expected both ends of its range, or none for a value taken as exact, but found nothing to',
+    },
+    { at: high, text: '-1', says: 'Expected a best value within its range, but found 0.79 beside 0.63 to -1.' },
   ])('stores nothing with “$text” in it', async ({ at, text, says }) => {
     const { screen, host } = await mounted();
     await screen.get(at).setValue(text);
@@ -107,10 +118,23 @@ describe('the energy budget', () => {
     expect(host.inputs('claim.update')).toEqual([]);
   });
 
+  it('takes a value without a range as exact', async () => {
+    const { screen, host } = await mounted();
+    await screen.get(low).setValue('');
+    await screen.get(high).setValue('');
+    await button(screen, 'Keep these values').trigger('click');
+    await settled();
+    expect(host.inputs('claim.update')[0]?.change.evidence?.energyBudget?.uptakeWm2).toMatchObject({
+      low: 0.79,
+      high: 0.79,
+    });
+  });
+
   it('asks for what is missing', async () => {
     const { screen, host } = await mounted();
     await screen.get(central).setValue('');
-    await screen.get(half).setValue('');
+    await screen.get(low).setValue('');
+    await screen.get(high).setValue('');
     await button(screen, 'Keep these values').trigger('click');
     await settled();
     expect(screen.get('[role=alert]').text()).toContain('nothing for Heat-uptake change, ΔN.');

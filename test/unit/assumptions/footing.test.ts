@@ -6,7 +6,15 @@ import { inventedCo2, logRegressionClaim } from '../../helpers/log-regression-cl
 
 const exact = { rel: 1e-9, abs: 0, why: 'closed form' };
 const { years, co2Ppm, x } = inventedCo2(60);
-const given = (mean: number, halfWidth90: number) => ({ mean, halfWidth90, source: 'invented' });
+/** Distance of the 95 % point of a normal, in standard deviations. */
+const z95 = 1.6448536269514722;
+const given = (best: number, halfWidth: number) => ({
+  best,
+  low: best - halfWidth,
+  high: best + halfWidth,
+  levelPercent: 90,
+  source: 'invented',
+});
 
 /** Total forcing 1.25 times that of CO2, and 0.5 K per W/m² of it; the first year, the anchor, off by `firstYearK`. */
 const total = x.map((value) => (1.25 * 3.7 * value) / Math.LN2);
@@ -63,13 +71,13 @@ describe('numberOnFooting', () => {
     const without = numberOnFooting(context, footing, context.draws).draws;
     const doublings = context.draws.standardNormal('doubling');
     const some = [0, 1, 777, 19_999];
-    for (const draw of some) expectClose(without[draw], 0.5 * (3.7 + (0.4 / 1.645) * (doublings[draw] ?? NaN)), exact);
+    for (const draw of some) expectClose(without[draw], 0.5 * (3.7 + (0.4 / z95) * (doublings[draw] ?? NaN)), exact);
     const withUptake = numberOnFooting(context, { ...footing, countsHeatUptake: true }, context.draws).draws;
     const forcings = context.draws.standardNormal('forcing');
     const uptakes = context.draws.standardNormal('uptake');
     for (const draw of some) {
-      const forcing = 2 + (0.5 / 1.645) * (forcings[draw] ?? NaN);
-      const uptake = 0.5 + (0.3 / 1.645) * (uptakes[draw] ?? NaN);
+      const forcing = 2 + (0.5 / z95) * (forcings[draw] ?? NaN);
+      const uptake = 0.5 + (0.3 / z95) * (uptakes[draw] ?? NaN);
       expectClose(withUptake[draw], ((without[draw] ?? NaN) * forcing) / (forcing - uptake), exact);
     }
   });

@@ -66,7 +66,7 @@ describe('r-squared', () => {
         logRegressionClaim({
           ...record,
           totalForcingWm2: forcing,
-          evidence: { doublingWm2: { mean: 3.93, halfWidth90: 0.47, source: 'AR6' } },
+          evidence: { doublingWm2: { best: 3.93, low: 3.46, high: 4.4, levelPercent: 90, source: 'AR6' } },
         }),
       ),
     );
@@ -83,7 +83,7 @@ describe('r-squared', () => {
     const claim = logRegressionClaim({
       ...record,
       totalForcingWm2: x,
-      evidence: { doublingWm2: { mean: 3.93, halfWidth90: 0.47, source: '' } },
+      evidence: { doublingWm2: { best: 3.93, low: 3.46, high: 4.4, levelPercent: 90, source: '' } },
     });
     const series = { ...claim.series, totalForcingSeriesId: annualSeries('odd', 'forcing', 'furlongs', years, x) };
     expect(rSquared.test(testContext({ ...claim, series })).table?.rows).toHaveLength(5);

@@ -15,10 +15,10 @@ const outcomeFor = (energyBudget: EnergyBudgetInputs | null, statement: Partial<
 
 /** Otto et al. 2013, the 2000s; standard deviations as half-widths of 5–95 %. Inputs partly from memory. */
 const otto: EnergyBudgetInputs = {
-  warmingK: { mean: 0.75, halfWidth90: 0.2, source: 'Otto et al. 2013' },
-  forcingWm2: { mean: 1.95, halfWidth90: 0.58, source: 'Otto et al. 2013' },
-  uptakeWm2: { mean: 0.65, halfWidth90: 0.27, source: 'Otto et al. 2013' },
-  doublingWm2: { mean: 3.44, halfWidth90: 0.34, source: 'Otto et al. 2013' },
+  warmingK: { best: 0.75, low: 0.55, high: 0.95, levelPercent: 90, source: 'Otto et al. 2013' },
+  forcingWm2: { best: 1.95, low: 1.37, high: 2.53, levelPercent: 90, source: 'Otto et al. 2013' },
+  uptakeWm2: { best: 0.65, low: 0.38, high: 0.92, levelPercent: 90, source: 'Otto et al. 2013' },
+  doublingWm2: { best: 3.44, low: 3.1, high: 3.78, levelPercent: 90, source: 'Otto et al. 2013' },
 };
 
 describe('transient-as-equilibrium', () => {
@@ -71,7 +71,7 @@ describe('transient-as-equilibrium', () => {
   it('calls it decisive when the budget leaves no upper end', () => {
     const { alternative, effect, weight, statistic, reading } = outcomeFor({
       ...otto,
-      uptakeWm2: { mean: 2, halfWidth90: 0.2, source: '' },
+      uptakeWm2: { best: 2, low: 1.8, high: 2.2, levelPercent: 90, source: '' },
     });
     expect({ alternative, effect, weight, statistic }).toEqual({
       alternative: null,
@@ -94,6 +94,6 @@ describe('transient-as-equilibrium', () => {
   it('says what is missing', () => {
     const outcome = outcomeFor(null);
     expect(outcome).toMatchObject({ isTestable: false, missing: { reason: 'No energy budget is given.' } });
-    expect(outcome.missing?.wouldNeed).toMatch(/5–95 % half-widths/);
+    expect(outcome.missing?.wouldNeed).toMatch(/with their ranges/);
   });
 });

@@ -55,7 +55,7 @@ describe('publishedValues', () => {
   });
 
   it('says which of two readings it takes of the doubling forcing’s uncertainty', () => {
-    expect(publishedBudget.doublingWm2).toMatchObject({ mean: 3.93, halfWidth90: 0.47 });
+    expect(publishedBudget.doublingWm2).toMatchObject({ best: 3.93, low: 3.46, high: 4.4, levelPercent: 90 });
     expect(publishedBudget.doublingWm2.source).toContain('5–95 %');
     // The other reading, one standard deviation, would be wider by the normal 95 % point.
     expect(0.47 * 1.645).toBeCloseTo(0.77, 2);

@@ -88,7 +88,7 @@ describe('reportHtml', () => {
       'from memory; look it up before it decides anything',
       'No published range of the number’s own quantity (apparent sensitivity) is quoted.',
       '1994-03,?? the value is not a number',
-      'CO 2 doubling 3.9 ± 0.5\u202fW/m² (5–95 %); no source given',
+      'CO 2 doubling 3.93 ± 0.47\u202fW/m², 5–95 %; no source given',
       'No row of this file was left out.',
       'Ask for the heat-content series',
       'Revision 1, cannot be determined.',

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { anchor, evidence, procedure, slopeCovariance, statement, tolerance } from './claim.ts';
 import { energyBudgetAnswer, energyBudgetRequest } from './energy-budget.ts';
 import { estimatorComparison } from './estimator-comparison.ts';
+import { forcingMethods } from './forcing.ts';
 import { column, lineMethods, predictors, rowYears } from './line-estimators.ts';
 import { year } from './primitives.ts';
 import { resamplingMethods } from './resampling.ts';
@@ -76,6 +77,7 @@ export const computeMethods = {
   ...specificationTestMethods,
   ...resamplingMethods,
   'window-sweep': { input: windowSweepRequest, value: windowSweep },
+  ...forcingMethods,
   'energy-budget': { input: energyBudgetRequest, value: energyBudgetAnswer },
   derivation: { input: derivationRequest, value: derivationAnswer },
   recomputation: { input: claimComputation, value: recomputation },

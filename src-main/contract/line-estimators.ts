@@ -5,7 +5,8 @@ import { caveat, year } from './primitives.ts';
 export const column = z.array(z.number()).min(1).max(1_000_000);
 /** One predictor, or several as columns. */
 export const predictors = z.union([column, z.array(column).min(1).max(100)]);
-const oneOrEach = z.union([z.number(), column]);
+/** One number for all rows, or one for each. */
+export const oneOrEach = z.union([z.number(), column]);
 const caveats = z.array(caveat);
 
 /** Years of the rows, for a method that can say what a gap does to it, or predict across one. */

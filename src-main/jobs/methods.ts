@@ -1,6 +1,7 @@
 import { testAssumptions } from '../assumptions/test-assumptions.ts';
 import { energyBudget } from '../climate/energy-budget.ts';
 import { compareEstimators } from '../climate/estimators/compare-estimators.ts';
+import { forcing } from '../climate/forcing/forcing.ts';
 import { recompute } from '../climate/procedures/recompute.ts';
 import type {
   LeaveOneOutInput,
@@ -62,6 +63,7 @@ export const methods: Methods = {
   chow: (input) => chowTest(input),
   cusum: (input) => cusum(input),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
+  forcing: (input) => forcing(input),
   'energy-budget': (input, onProgress) => energyBudget(input, onProgress),
   derivation: ({ lines }) => evaluateDerivation(lines),
   recomputation: (input) => recompute(input),

@@ -10,6 +10,9 @@ const y = x.map((value, t) =>
   Number((0.4 + 1.7 * value + 0.2 * Math.sin(t * 0.9) + 0.05 * Math.cos(t * 2.3)).toFixed(4)),
 );
 const same = <Value>(value: Value, length = x.length): Value[] => Array.from({ length }, () => value);
+const co2Ppm = x.map((_, t) => 380 + t);
+const methane = { ch4Ppb: 1850, ch4RefPpb: 729 };
+const nitrousOxide = { n2oPpb: 330, n2oRefPpb: 270 };
 const without = (at: number) => y.map((value, t) => (t === at ? null : value));
 const withGapAt = (at: number) => x.map((_, t) => 1960 + t + (t < at ? 0 : 2));
 /** A bend that a line cannot follow: the cumulated sum crosses its bound. */
@@ -47,6 +50,7 @@ const valid = {
   cusum: { x, y: withBend, intercept: true, levelPercent: 5 },
   'leave-one-out': { x, y, intercept: true, place: 1 },
   'phase-surrogates': { values: y, draws: 3, seed: 5 },
+  forcing: { formula: 'meinshausen2020', co2Ppm, co2RefPpm: 278, ...methane, ...nitrousOxide },
 } as const;
 type Method = keyof typeof valid;
 const methods = Object.keys(valid) as Method[];
@@ -72,7 +76,7 @@ describe.each(methods)('compute %s', (method) => {
   });
 
   it('refuses a missing value, and says how one is left out', async () => {
-    const column = method === 'phase-surrogates' ? 'values' : 'y';
+    const column = method === 'phase-surrogates' ? 'values' : method === 'forcing' ? 'co2Ppm' : 'y';
     const { error } = await compute(method, { ...valid[method], [column]: without(5) });
     expect(error).toMatchObject({ code: 'input-form', where: `${method}.${column}[5]`, received: 'null' });
     expect(error?.hint).toContain('Leave a row with a missing value out');
@@ -119,6 +123,15 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['leave-one-out', 'weights', [{ weights: x.map((_, t) => 1 + t) }, { weights: x.map((_, t) => 30 - t) }]],
   ['phase-surrogates', 'draws', [{ draws: 1 }, { draws: 2 }]],
   ['phase-surrogates', 'seed', [{ seed: 6 }, { seed: 7 }]],
+  ['forcing', 'formula', [{ formula: 'ipcc1990' }, { formula: 'myhre1998' }]],
+  ['forcing', 'formula', [{ formula: 'etminan2016' }, { formula: 'meinshausen2020' }]],
+  ['forcing', 'adjustment', [{ adjustment: 'ar6' }, { adjustment: 'none' }]],
+  ['forcing', 'co2Ppm', [{ co2Ppm: 400 }, { co2Ppm: 420 }]],
+  ['forcing', 'co2RefPpm', [{ co2RefPpm: 280 }, { co2RefPpm: co2Ppm.toReversed() }]],
+  ['forcing', 'ch4Ppb', [{ ch4Ppb: 1900 }, { ch4Ppb: co2Ppm.map((ppm) => 4 * ppm) }]],
+  ['forcing', 'ch4RefPpb', [{ ch4RefPpb: 700 }, { ch4RefPpb: 720 }]],
+  ['forcing', 'n2oPpb', [{ n2oPpb: 332 }, { n2oPpb: 336 }]],
+  ['forcing', 'n2oRefPpb', [{ n2oRefPpb: 271 }, { n2oRefPpb: 272 }]],
   ['kpss', 'lags', [{ lags: 0 }, { lags: 4 }]],
   ['kpss', 'deterministic', [{ deterministic: 'trend' }, { deterministic: 'constant' }]],
 ];
@@ -204,6 +217,12 @@ const bad: [Method, string, object, Partial<ErrorAnswer>][] = [
   ['leave-one-out', 'fewer rows than coefficients', { x: [1], y: [2] }, { code: 'too-few-observations' }],
   ['phase-surrogates', 'a constant', { values: same(3) }, { code: 'constant' }],
   ['phase-surrogates', 'three values', { values: [1, 2, 4] }, { code: 'too-few-values' }],
+  ['forcing', 'an unknown formula', { formula: 'ln' }, { code: 'input-form', where: 'forcing.formula' }],
+  ['forcing', 'no CO2', { co2Ppm: 0 }, { code: 'not-positive', where: 'forcing, co2Ppm[0]' }],
+  ['forcing', 'CO2 in ppb', { co2Ppm: 420_000 }, { code: 'suspected-unit', where: 'forcing, co2Ppm' }],
+  ['forcing', 'methane in ppm', { ch4Ppb: 1.9 }, { code: 'suspected-unit', where: 'forcing, ch4Ppb' }],
+  ['forcing', 'lists of different lengths', { ch4Ppb: [1850, 1860] }, { code: 'wrong-length' }],
+  ['forcing', 'a gas without its reference', { n2oRefPpb: undefined }, { code: 'unpaired-gas' }],
   ['kpss', 'as many lags as rows', { lags: 24 }, { code: 'out-of-range', where: 'kpss, lags' }],
   ['kpss', 'a constant series', { y: same(3) }, { code: 'exact-fit' }],
 ];

@@ -1,6 +1,6 @@
 import tQuantile from '@stdlib/stats-base-dists-t-quantile';
 import { fittedLine, type FittedLine } from '../climate/procedures/fitted-line.ts';
-import type { LogRegressionProcedure } from '../contract/claim.ts';
+import type { LogRegressionProcedure } from '../contract/procedure.ts';
 import type { Caveat, Interval } from '../contract/primitives.ts';
 import type { AlignedRows, RegressionAnswer } from '../contract/result.ts';
 import { InputError } from '../errors.ts';

@@ -1,12 +1,12 @@
 import { fitLogRegression } from '../climate/procedures/fit-log-regression.ts';
-import type { LogRegressionProcedure } from '../contract/claim.ts';
+import type { LogRegressionProcedure } from '../contract/procedure.ts';
 import type { Caveat } from '../contract/primitives.ts';
 import type { DrawnNumber, JointDraws } from '../robustness/ladder.ts';
 import { splitNormal, splitNormalAt } from '../statistics/split-normal.ts';
 import { logClaimLine } from './claim-line.ts';
 import { forcingLine } from './forcing-line.ts';
 import { heatUptakeRatio } from './heat-uptake-ratio.ts';
-import { perDoublingFactor } from './per-doubling-factor.ts';
+import { perDoublingFactor } from '../quantities/per-doubling-factor.ts';
 import type { TestContext } from './test-context.ts';
 
 /** What a log-regression's number stands on: the choices that the ladder changes one by one, in any order. */

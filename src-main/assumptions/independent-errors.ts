@@ -1,3 +1,4 @@
+import { fitsLine } from '../contract/procedure.ts';
 import { fittedLine } from '../climate/procedures/fitted-line.ts';
 import { covarianceWords } from '../climate/procedures/slope-estimates.ts';
 import type { AssumptionOutcome } from '../contract/result.ts';
@@ -32,7 +33,7 @@ export const independentErrors: Assumption = {
   source:
     'Durbin & Watson 1950; Breusch 1978 and Godfrey 1978; Ljung & Box 1978; Santer et al. 2000, J. Geophys. Res. 105, 7337; Newey & West 1987; Prais & Winsten 1954',
 
-  applies: ({ procedure }) => procedure.kind !== 'ratio',
+  applies: ({ procedure }) => fitsLine(procedure),
 
   test(context) {
     const { recomputation, show, showWithUnit, showShift } = context;

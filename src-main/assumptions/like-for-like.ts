@@ -4,7 +4,7 @@ import type { AssumptionOutcome } from '../contract/result.ts';
 import { InputError } from '../errors.ts';
 import { formatInterval, formatNumber } from '../quantities/notation.ts';
 import { publishedFor, publishedValues } from '../quantities/published-values.ts';
-import { quantityNames } from '../quantities/quantity-names.ts';
+import { isSensitivity, quantityNames } from '../quantities/quantity-names.ts';
 import { interval90 } from '../robustness/ladder.ts';
 import { outcome, untestable, type Assumption } from './assumption.ts';
 import { footingOf, numberOnFooting } from './footing.ts';
@@ -129,7 +129,6 @@ interface Conversion {
 function converted(context: TestContext, own: QuantityId, target: QuantityId): Conversion | null {
   const { computation, recomputation, draws } = context;
   const { evidence, procedure } = computation;
-  const isSensitivity = (quantity: QuantityId) => quantity !== 'trend' && quantity !== 'ratio';
   if (!evidence.energyBudget || !isSensitivity(own) || !isSensitivity(target)) return null;
   if (isEquilibrium(own) === isEquilibrium(target)) return null;
   const ratio = heatUptakeRatio(evidence, draws);
@@ -155,8 +154,7 @@ function whyNotConverted(own: QuantityId, target: QuantityId): string {
   if (isEquilibrium(own) && isEquilibrium(target)) {
     return 'Between the two lies the change of feedback with the pattern of warming; no conversion is made.';
   }
-  if (own === 'trend' || target === 'trend' || own === 'ratio' || target === 'ratio')
-    return 'There is no conversion between them.';
+  if (!isSensitivity(own) || !isSensitivity(target)) return 'There is no conversion between them.';
   if (isEquilibrium(own) === isEquilibrium(target)) {
     return 'Between the two lie the forcings other than CO₂; see that assumption for the number on all forcings.';
   }

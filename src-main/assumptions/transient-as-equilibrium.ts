@@ -6,7 +6,7 @@ import { inputText } from '../quantities/input-text.ts';
 import { formatInterval, formatNumber } from '../quantities/notation.ts';
 import { quantityNames } from '../quantities/quantity-names.ts';
 import { outcome, untestable, type Assumption } from './assumption.ts';
-import { perDoublingFactor } from './per-doubling-factor.ts';
+import { perDoublingFactor } from '../quantities/per-doubling-factor.ts';
 import { isEquilibrium, presentedQuantity } from './presented-quantity.ts';
 import type { TestContext } from './test-context.ts';
 import { weightWords } from './weigh.ts';

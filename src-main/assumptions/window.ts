@@ -1,3 +1,4 @@
+import { fitsLine } from '../contract/procedure.ts';
 import { fittedLine } from '../climate/procedures/fitted-line.ts';
 import { InputError } from '../errors.ts';
 import { formatNumber, formatShare, formatYears } from '../quantities/notation.ts';
@@ -20,7 +21,7 @@ export const window: Assumption = {
   needs: `Series that share more than ${defaultMinYears} years.`,
   source: 'Rahmstorf, Foster & Cahill 2017, Environ. Res. Lett. 12, 054001, on trends over all start and end years',
 
-  applies: ({ procedure }) => procedure.kind !== 'ratio',
+  applies: ({ procedure }) => fitsLine(procedure),
 
   test(context) {
     const { computation, recomputation, show, showWithUnit, showShift } = context;

@@ -1,25 +1,8 @@
 import { z } from 'zod';
-import { longText, quantityId, recordId, shortText, yearSpan } from './primitives.ts';
+import { longText, quantityId, recordId, shortText } from './primitives.ts';
+import { procedure, procedureDraft, seriesReference } from './procedure.ts';
+import { bound, claimUnit, statedNumber } from './stated.ts';
 import { uncertainInput } from './uncertain-input.ts';
-
-export const bound = z.enum(['equals', 'at most', 'at least']);
-export type Bound = z.infer<typeof bound>;
-
-/** A number as printed: the digits decide how far it may be off by rounding. */
-export const statedNumber = z
-  .string()
-  .regex(/^[+\-−]?(\d+([.,]\d*)?|[.,]\d+)([eE][+-]?\d+)?$/, 'a plain decimal number, as printed');
-
-export const claimUnit = z.enum([
-  'K per doubling',
-  'K per e-folding',
-  '°F per doubling',
-  'K per decade',
-  'K per year',
-  'W/m²',
-  '1',
-]);
-export type ClaimUnit = z.infer<typeof claimUnit>;
 
 export const statement = z.object({
   /** The words of the source. */
@@ -49,53 +32,6 @@ export const statementQuestion = z.object({
   answer: z.string().nullable(),
 });
 export type StatementQuestion = z.infer<typeof statementQuestion>;
-
-export const anchor = z.discriminatedUnion('kind', [
-  z.object({ kind: z.literal('first-year') }),
-  z.object({ kind: z.literal('mean-of-first'), years: z.int().min(1).max(100) }),
-]);
-export type Anchor = z.infer<typeof anchor>;
-
-export const slopeCovariance = z.discriminatedUnion('kind', [
-  z.object({ kind: z.literal('classical') }),
-  z.object({ kind: z.literal('newey-west'), lag: z.int().min(0).max(1000), smallSample: z.boolean() }),
-]);
-export type SlopeCovariance = z.infer<typeof slopeCovariance>;
-
-/** How many of a year's twelve months must be there for an annual mean. */
-const minMonths = z.int().min(1).max(12);
-
-export const logRegressionProcedure = z.object({
-  kind: z.literal('log-regression'),
-  temperatureSeriesId: recordId,
-  co2SeriesId: recordId,
-  minMonths,
-  /** null: all years that both series have. */
-  window: yearSpan.nullable(),
-  /** C0 and T0: the values in the first year of the window, or their means over its first years. */
-  anchor,
-  intercept: z.boolean(),
-  covariance: slopeCovariance,
-  conversion: z.enum(['per-doubling', 'per-e-folding']),
-});
-export const trendProcedure = z.object({
-  kind: z.literal('trend'),
-  seriesId: recordId,
-  minMonths,
-  window: yearSpan.nullable(),
-  covariance: slopeCovariance,
-  per: z.enum(['decade', 'year']),
-});
-export const ratioProcedure = z.object({
-  kind: z.literal('ratio'),
-  numerator: z.object({ value: statedNumber, unit: shortText }),
-  denominator: z.object({ value: statedNumber, unit: shortText }),
-});
-export const procedure = z.discriminatedUnion('kind', [logRegressionProcedure, trendProcedure, ratioProcedure]);
-export type LogRegressionProcedure = z.infer<typeof logRegressionProcedure>;
-export type TrendProcedure = z.infer<typeof trendProcedure>;
-export type RatioProcedure = z.infer<typeof ratioProcedure>;
-export type Procedure = z.infer<typeof procedure>;
 
 /** Warming, forcing change, heat-uptake change between two periods, and the forcing of a CO2 doubling. */
 export const energyBudgetInputs = z.object({
@@ -143,23 +79,12 @@ export const claim = z.object({
 export type Claim = z.infer<typeof claim>;
 
 /** A claim as written by a person or a script: series may be named instead of numbered; the rest has defaults. */
-const seriesReference = z.union([recordId, z.string().min(1)]);
 export const claimDraft = z.object({
   title: z.string().min(1).max(200),
   statement: statement.partial().required({ words: true, quantity: true, value: true, unit: true }),
   answers: claim.shape.answers.optional(),
   derivation: claim.shape.derivation.optional(),
-  procedure: z
-    .discriminatedUnion('kind', [
-      logRegressionProcedure
-        .partial()
-        .required({ kind: true })
-        .extend({ temperatureSeriesId: seriesReference, co2SeriesId: seriesReference }),
-      trendProcedure.partial().required({ kind: true }).extend({ seriesId: seriesReference }),
-      ratioProcedure,
-    ])
-    .nullable()
-    .optional(),
+  procedure: procedureDraft.nullable().optional(),
   evidence: evidence
     .extend({
       totalForcingSeriesId: seriesReference.nullable(),

@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { anchor, evidence, procedure, slopeCovariance, statement, tolerance } from './claim.ts';
+import { evidence, statement, tolerance } from './claim.ts';
+import { anchor, procedure, slopeCovariance } from './procedure.ts';
 import { energyBudgetAnswer, energyBudgetRequest } from './energy-budget.ts';
 import { estimatorComparison } from './estimator-comparison.ts';
 import { forcingMethods } from './forcing.ts';

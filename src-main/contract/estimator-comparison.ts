@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { claimUnit } from './claim.ts';
+import { claimUnit } from './stated.ts';
 import { caveat, interval, quantityId, year, yearSpan } from './primitives.ts';
 
 export const estimatorId = z.enum([

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { interval, quantityId, sha256 } from './primitives.ts';
-import { bound, claimUnit } from './claim.ts';
+import { bound, claimUnit } from './stated.ts';
 
 const figureFrame = {
   /** Short name, also the file name when saved. */

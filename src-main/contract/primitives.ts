@@ -34,6 +34,9 @@ export const quantityId = z.enum([
   'equilibrium-climate-sensitivity',
   'transient-climate-response',
   'trend',
+  'radiative-forcing',
+  'climate-feedback',
+  'share',
   'ratio',
 ]);
 export type QuantityId = z.infer<typeof quantityId>;

@@ -94,6 +94,8 @@ export const claimView = z.object({
   estimators: stored(estimatorComparison).nullable(),
   /** What stands in the way of a recomputation: a series not chosen, a unit not set. */
   obstacles: z.array(z.string()),
+  /** The series that the procedure works on. */
+  procedureSeriesIds: z.array(recordId),
   marks: z.array(mark),
   notes: z.array(note),
   findings: z.array(finding),

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { caveat, interval, quantityId, recordId, sha256, timestamp, year, yearSpan } from './primitives.ts';
-import { claimUnit } from './claim.ts';
+import { claimUnit } from './stated.ts';
 
 const numbers = z.array(z.number());
 
@@ -61,6 +61,14 @@ export const fitDiagnostics = z.object({
 });
 export type FitDiagnostics = z.infer<typeof fitDiagnostics>;
 
+const figureRows = z.object({
+  columns: z.array(z.string()),
+  rows: z.array(z.array(z.union([z.string(), z.number(), z.null()]))),
+});
+
+const workingTable = figureRows.extend({ caption: z.string() });
+export type WorkingTable = z.infer<typeof workingTable>;
+
 /** How the recomputed number relates to the stated one. */
 export const agreement = z.object({
   /** The numbers that round to the stated digits: [low, high). */
@@ -84,7 +92,8 @@ export const recomputation = z.object({
   unit: claimUnit,
   value: z.number(),
   standardError: z.number().nullable(),
-  interval95: interval.nullable(),
+  /** With its level: 95 % of a line, 5–95 % of draws. */
+  interval: interval.nullable(),
   agreement,
   /** Regression procedures only. */
   fit: z
@@ -107,6 +116,8 @@ export const recomputation = z.object({
     .nullable(),
   /** The conversion in words and figures: "2.71 K × ln 2 = 1.88 K per doubling". */
   conversion: z.string().nullable(),
+  /** Inputs and figures on the way, of procedures without a line. */
+  working: z.array(workingTable),
   caveats: z.array(caveat),
 });
 export type Recomputation = z.infer<typeof recomputation>;
@@ -148,11 +159,6 @@ export const weight = z.enum(['negligible', 'notable', 'decisive']);
 export type Weight = z.infer<typeof weight>;
 export const markValue = z.enum(['met', 'not met', 'untested']);
 export type MarkValue = z.infer<typeof markValue>;
-
-const figureRows = z.object({
-  columns: z.array(z.string()),
-  rows: z.array(z.array(z.union([z.string(), z.number(), z.null()]))),
-});
 
 /** What a test of one assumption returns. */
 export const assumptionOutcome = z.object({

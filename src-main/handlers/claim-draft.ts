@@ -2,6 +2,7 @@ import type { Claim, ClaimDraft } from '../contract/claim.ts';
 import { InputError } from '../errors.ts';
 import type { Project } from '../project/project.ts';
 import { publishedValues } from '../quantities/published-values.ts';
+import { procedureSeries } from './procedure-series.ts';
 
 /** A draft with its defaults filled in and its series found by name. */
 export function completeDraft(project: Project, draft: ClaimDraft): Omit<Claim, 'id'> {
@@ -36,6 +37,9 @@ export function completeDraft(project: Project, draft: ClaimDraft): Omit<Claim, 
   return record;
 }
 
+/** The ends of a 5–95 % range are then known to less than a hundredth of its width. */
+const defaultDraws = 100_000;
+
 function completeProcedure(
   procedure: ClaimDraft['procedure'],
   find: (reference: number | string, field: string) => number,
@@ -65,6 +69,29 @@ function completeProcedure(
       };
     case 'ratio':
       return procedure;
+    case 'energy-budget':
+      return {
+        estimate: 'effective-climate-sensitivity',
+        patternWm2PerK: null,
+        correlation: 0,
+        draws: defaultDraws,
+        ...withoutUndefined(procedure),
+      };
+    case 'forcing':
+      return {
+        isEffective: false,
+        ch4Ppb: null,
+        n2oPpb: null,
+        ...withoutUndefined(procedure),
+        co2SeriesId:
+          procedure.co2SeriesId === undefined || procedure.co2SeriesId === null
+            ? null
+            : find(procedure.co2SeriesId, 'procedure.co2SeriesId'),
+      };
+    case 'feedback':
+      return { draws: defaultDraws, ...withoutUndefined(procedure) };
+    case 'attribution':
+      return { correlation: 0, draws: defaultDraws, ...withoutUndefined(procedure) };
   }
 }
 
@@ -87,11 +114,7 @@ function findSeries(project: Project, reference: number | string, field: string)
  * @throws InputError unknown-series, unknown-source, unknown-published-value, tolerance-order
  */
 export function checkClaim(project: Project, { statement, procedure, evidence, tolerance }: Omit<Claim, 'id'>): void {
-  if (procedure?.kind === 'log-regression') {
-    findSeries(project, procedure.temperatureSeriesId, 'procedure.temperatureSeriesId');
-    findSeries(project, procedure.co2SeriesId, 'procedure.co2SeriesId');
-  }
-  if (procedure?.kind === 'trend') findSeries(project, procedure.seriesId, 'procedure.seriesId');
+  for (const [field, id] of Object.entries(procedureSeries(procedure))) findSeries(project, id, `procedure.${field}`);
   for (const field of ['totalForcingSeriesId', 'co2ForcingSeriesId'] as const) {
     const id = evidence[field];
     if (id !== null) findSeries(project, id, `evidence.${field}`);

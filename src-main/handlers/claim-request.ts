@@ -1,22 +1,21 @@
 import { createHash } from 'node:crypto';
-import { claimComputation, claimSweepRequest, derivationRequest, type ClaimComputation } from '../contract/compute.ts';
+import { claimComputation, claimSweepRequest, derivationRequest } from '../contract/compute.ts';
 import type { Claim } from '../contract/claim.ts';
 import type { Result, ResultMethod } from '../contract/result.ts';
 import { seriesValues, type SeriesData } from '../contract/series.ts';
 import { InputError, ProjectError } from '../errors.ts';
 import { canonicalJson } from '../project/canonical-json.ts';
 import type { Project } from '../project/project.ts';
+import { claimSeries, type SeriesRole } from './procedure-series.ts';
 
 /** A request as it is stored: plain JSON, each series by the digest of its values. */
 export type StoredRequest = Result['request'];
-
-type SeriesRole = keyof ClaimComputation['series'];
 
 /** What stands in the way of computing this claim, in sentences; empty when nothing does. */
 export function obstacles(project: Project, claim: Claim): string[] {
   if (!claim.procedure) return ['The procedure is not chosen yet.'];
   const known = new Set(project.list('series').map((series) => series.id));
-  return Object.entries(seriesRoles(claim))
+  return Object.entries(claimSeries(claim))
     .filter(([, id]) => !known.has(id))
     .map(([role, id]) => `${roleNames[role as SeriesRole]}: series ${id} is not in this project.`);
 }
@@ -36,7 +35,7 @@ export function requestFor(project: Project, claim: Claim, method: ResultMethod,
   }
   const { totalForcingSeriesId: _total, co2ForcingSeriesId: _co2, ...evidence } = claim.evidence;
   const series = Object.fromEntries(
-    Object.entries(seriesRoles(claim)).map(([role, id]) => {
+    Object.entries(claimSeries(claim)).map(([role, id]) => {
       const { name, quantity, agent, unit, step, baseline, partialYears, valuesDigest } = project.get('series', id);
       return [role, { name, quantity, agent, unit, step, baseline, partialYears, valuesDigest }];
     }),
@@ -103,18 +102,6 @@ const roleNames: Record<SeriesRole, string> = {
   totalForcingSeriesId: 'Total forcing',
   co2ForcingSeriesId: 'CO2 forcing',
 };
-
-function seriesRoles({ procedure, evidence }: Claim): Partial<Record<SeriesRole, number>> & Record<string, number> {
-  const roles: Record<string, number> = {};
-  if (procedure?.kind === 'log-regression') {
-    roles['temperatureSeriesId'] = procedure.temperatureSeriesId;
-    roles['co2SeriesId'] = procedure.co2SeriesId;
-  }
-  if (procedure?.kind === 'trend') roles['seriesId'] = procedure.seriesId;
-  if (evidence.totalForcingSeriesId !== null) roles['totalForcingSeriesId'] = evidence.totalForcingSeriesId;
-  if (evidence.co2ForcingSeriesId !== null) roles['co2ForcingSeriesId'] = evidence.co2ForcingSeriesId;
-  return roles;
-}
 
 function plain(value: object): StoredRequest {
   return JSON.parse(JSON.stringify(value)) as StoredRequest;

@@ -11,6 +11,7 @@ import { fitFigure, residualsFigure, sweepFigure } from './claim-figures.ts';
 import { obstacles, requestDigest, requestFor } from './claim-request.ts';
 import { fillIns } from './fill-ins.ts';
 import { publishedBudget } from '../quantities/published-budget.ts';
+import { procedureSeries } from './procedure-series.ts';
 import { publishedForClaim } from './published-for-claim.ts';
 import { residualFigures } from './residual-figures.ts';
 import { sectionStates } from './section-states.ts';
@@ -44,6 +45,7 @@ export function claimView(project: Project, claimId: number): ClaimView {
     statedValue: statedValue(claim.statement.value),
     ...results,
     obstacles: blocked,
+    procedureSeriesIds: Object.values(procedureSeries(claim.procedure)),
     marks,
     notes: own(project.list('note')),
     findings,
@@ -87,9 +89,7 @@ function storedWithState<Method extends ResultMethod>(
 
 /** Digests of the series that the claim's procedure uses. */
 function digestsOf(project: Project, { procedure }: Claim): string[] {
-  if (procedure?.kind !== 'log-regression' && procedure?.kind !== 'trend') return [];
-  const ids =
-    procedure.kind === 'log-regression' ? [procedure.temperatureSeriesId, procedure.co2SeriesId] : [procedure.seriesId];
+  const ids = Object.values(procedureSeries(procedure));
   return project
     .list('series')
     .filter((series) => ids.includes(series.id))

@@ -13,6 +13,7 @@ import { refuseFrozen } from './claims.ts';
 import type { Handlers } from './context.ts';
 import { projectView } from './project-view.ts';
 import { seriesFigure } from './series-figure.ts';
+import { claimSeries } from './procedure-series.ts';
 
 type Names = 'data.preview' | 'data.import' | 'dataset.remove' | 'series.get' | 'series.update' | 'series.rebase';
 
@@ -146,12 +147,7 @@ function refuseInUse(project: Project, series: Series): void {
 function claimsUsing(project: Project, seriesId: number): number[] {
   return project
     .list('claim')
-    .filter(({ procedure, evidence }) => {
-      const used: (number | null)[] = [evidence.totalForcingSeriesId, evidence.co2ForcingSeriesId];
-      if (procedure?.kind === 'log-regression') used.push(procedure.temperatureSeriesId, procedure.co2SeriesId);
-      if (procedure?.kind === 'trend') used.push(procedure.seriesId);
-      return used.includes(seriesId);
-    })
+    .filter((claim) => Object.values(claimSeries(claim)).includes(seriesId))
     .map((claim) => claim.id);
 }
 

@@ -19,9 +19,9 @@ export function fillIns(
   // All numbers in the claim's unit show as many digits as the recomputed one can.
   const decimals = recomputation?.standardError ? decimalsFor(recomputation.standardError) : 2;
   if (recomputation) {
-    const { value, standardError, interval95, unit, fit } = recomputation;
+    const { value, standardError, interval, unit, fit } = recomputation;
     figures['recomputed'] = formatWithUncertainty(value, standardError, unit);
-    if (interval95) figures['recomputed-interval'] = formatInterval(interval95, unit);
+    if (interval) figures['recomputed-interval'] = formatInterval(interval, unit);
     if (fit) {
       const { diagnostics, window, slopes, intercept } = fit;
       figures['years'] = `${window.start}–${window.end}`;

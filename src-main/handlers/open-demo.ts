@@ -1,3 +1,4 @@
+import { fitsLine } from '../contract/procedure.ts';
 import { readdirSync, readFileSync, rmSync } from 'node:fs';
 import { basename, join } from 'node:path';
 import { workedExample, type WorkedExample } from '../contract/worked-example.ts';
@@ -66,7 +67,7 @@ async function reviewClaim(
   const claimId = created.claim.id;
   if (created.claim.derivation.length > 0) await runClaimMethod(context, claimId, 'derivation', {});
   await runClaimMethod(context, claimId, 'recomputation', {});
-  if (created.claim.procedure?.kind !== 'ratio') await runClaimMethod(context, claimId, 'estimators', {});
+  if (fitsLine(created.claim.procedure)) await runClaimMethod(context, claimId, 'estimators', {});
   await runClaimMethod(context, claimId, 'assumptions', {});
   if (minYears !== null) await runClaimMethod(context, claimId, 'claim-sweep', { minYears });
   for (const mark of marks) await claimHandlers['claim.mark']({ claimId, ...mark }, context);

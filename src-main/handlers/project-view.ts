@@ -34,8 +34,8 @@ function claimLine(project: Project, claimId: number): ClaimLine {
     statedValue: statedValue(value),
     recomputed: recomputation && {
       value: recomputation.answer.value,
-      low: recomputation.answer.interval95?.low ?? null,
-      high: recomputation.answer.interval95?.high ?? null,
+      low: recomputation.answer.interval?.low ?? null,
+      high: recomputation.answer.interval?.high ?? null,
     },
     status: finding?.conclusion ?? (recomputation ? 'in review' : 'not begun'),
     isSigned: finding?.isSigned ?? false,

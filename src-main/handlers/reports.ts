@@ -12,6 +12,7 @@ import type { Handlers } from './context.ts';
 import { fileProblem } from './file-problem.ts';
 import { fillIn } from './fill-in.ts';
 import { makeFolder } from './make-folder.ts';
+import { claimSeries } from './procedure-series.ts';
 
 export const reportHandlers: Handlers<'report.render' | 'report.write'> = {
   async 'report.render'({ claimIds }, { workspace, now }) {
@@ -113,12 +114,6 @@ function reportClaim(project: Project, claimId: number): ReportClaim {
 
 /** The series that a claim's procedure and evidence name. */
 function seriesOf(project: Project, claimId: number) {
-  const { procedure, evidence } = project.get('claim', claimId);
-  const ids = [
-    ...(procedure?.kind === 'log-regression' ? [procedure.temperatureSeriesId, procedure.co2SeriesId] : []),
-    ...(procedure?.kind === 'trend' ? [procedure.seriesId] : []),
-    evidence.totalForcingSeriesId,
-    evidence.co2ForcingSeriesId,
-  ];
+  const ids = Object.values(claimSeries(project.get('claim', claimId)));
   return project.list('series').filter((series) => ids.includes(series.id));
 }

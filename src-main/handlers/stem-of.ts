@@ -34,7 +34,7 @@ export function stemOf(
       bound,
       interval: statedInterval(value),
     },
-    recomputed: recomputation && { value: recomputation.value, interval: recomputation.interval95 },
+    recomputed: recomputation && { value: recomputation.value, interval: recomputation.interval },
     rows,
     bands: bandsOf(published, unit),
   };

@@ -1,4 +1,4 @@
-import type { ClaimUnit } from '../contract/claim.ts';
+import type { ClaimUnit } from '../contract/stated.ts';
 import type { QuantityId } from '../contract/primitives.ts';
 
 export interface QuantityName {
@@ -49,10 +49,47 @@ export const quantityNames: Readonly<Record<QuantityId, QuantityName>> = {
     definition: 'Slope of a straight line through temperature against time.',
     units: ['K per decade', 'K per year'],
   },
+  'radiative-forcing': {
+    label: 'radiative forcing',
+    symbol: 'F',
+    definition:
+      'Change of the energy balance at the top of the atmosphere that a change of composition imposes, before the surface has warmed.',
+    units: ['W/m²'],
+  },
+  'climate-feedback': {
+    label: 'climate feedback parameter',
+    symbol: 'λ',
+    definition:
+      'How much more energy the planet gives off for each degree of warming; positive when it restores the balance. The negative of AR6’s α.',
+    units: ['W/m² per K'],
+  },
+  share: {
+    label: 'share of a change',
+    symbol: 'share',
+    definition:
+      'A part of a warming or forcing over the whole of it, in per cent. Parts of opposite sign make shares above 100 %.',
+    units: ['%'],
+  },
   ratio: {
     label: 'ratio of two stated numbers',
     symbol: 'ratio',
     definition: 'A number obtained by dividing one stated number by another.',
-    units: ['1', 'W/m²', 'K per doubling', '°F per doubling', 'K per e-folding', 'K per decade', 'K per year'],
+    units: [
+      '1',
+      '%',
+      'ppm',
+      'W/m²',
+      'W/m² per K',
+      'K per doubling',
+      '°F per doubling',
+      'K per e-folding',
+      'K per decade',
+      'K per year',
+    ],
   },
 };
+
+/** Kinds of number that say how much the planet warms for more CO2. */
+export function isSensitivity(quantity: QuantityId): boolean {
+  return quantityNames[quantity].units.includes('K per doubling') && quantity !== 'ratio';
+}

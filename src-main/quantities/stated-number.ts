@@ -1,4 +1,4 @@
-import type { Bound } from '../contract/claim.ts';
+import type { Bound } from '../contract/stated.ts';
 import type { Agreement } from '../contract/result.ts';
 import { InputError } from '../errors.ts';
 import { formatNumber, formatQuantity } from './notation.ts';

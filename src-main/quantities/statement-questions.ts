@@ -1,4 +1,5 @@
 import type { Claim, StatementQuestion } from '../contract/claim.ts';
+import { isSensitivity } from './quantity-names.ts';
 
 interface Question {
   id: string;
@@ -8,7 +9,7 @@ interface Question {
   applies(statement: Claim['statement']): boolean;
 }
 
-const isSensitivity = ({ quantity }: Claim['statement']) => quantity !== 'trend' && quantity !== 'ratio';
+const speaksOfSensitivity = ({ quantity }: Claim['statement']) => isSensitivity(quantity);
 
 const questions: Question[] = [
   {
@@ -16,21 +17,21 @@ const questions: Question[] = [
     question: 'Which kind of sensitivity does the source say this is?',
     why: 'A slope of a record so far, a transient response and an equilibrium are three numbers; only like may be held against like.',
     options: ['it says so in words', 'only the context suggests it', 'it does not say'],
-    applies: isSensitivity,
+    applies: speaksOfSensitivity,
   },
   {
     id: 'doubling-or-e-folding',
     question: 'Is the number per doubling of CO₂, or per e-folding (per unit of the natural logarithm)?',
     why: 'The two differ by the factor ln 2 = 0.693.',
     options: ['per doubling, as printed', 'per e-folding, as printed', 'not printed: taken from the context'],
-    applies: isSensitivity,
+    applies: speaksOfSensitivity,
   },
   {
     id: 'degrees',
     question: 'Are the degrees Celsius (or kelvin) or Fahrenheit?',
     why: 'A difference of 1 °C is one of 1.8 °F.',
     options: ['°C or K, as printed', '°F, as printed', 'not printed: taken from the context'],
-    applies: ({ quantity }) => quantity !== 'ratio',
+    applies: ({ quantity }) => isSensitivity(quantity) || quantity === 'trend',
   },
   {
     id: 'is-bound',

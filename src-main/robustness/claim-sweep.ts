@@ -77,13 +77,13 @@ function sweptRecord(computation: ClaimComputation): { rows: Omit<WindowSweepReq
         factor: procedure.per === 'decade' ? 10 : 1,
       };
     }
-    case 'ratio':
+    default:
       throw new InputError({
         code: 'no-window',
         where: 'window sweep',
         expected: 'a procedure that fits a line to a record',
-        received: 'a ratio of two stated numbers',
-        hint: 'A ratio has no start and end year: there is nothing to sweep.',
+        received: 'one that works from a few figures',
+        hint: 'Without a record there is no start and end year to sweep.',
       });
   }
 }

@@ -1,4 +1,4 @@
-import type { ClaimUnit } from '../contract/claim.ts';
+import type { ClaimUnit } from '../contract/stated.ts';
 import type { Caveat, QuantityId } from '../contract/primitives.ts';
 import type { AssumptionId, Ladder } from '../contract/result.ts';
 import { isFootingError } from '../errors.ts';

@@ -1,4 +1,4 @@
-import type { Anchor, SlopeCovariance } from '../contract/claim.ts';
+import type { Anchor, SlopeCovariance } from '../contract/procedure.ts';
 import type { WindowSweepRequest } from '../contract/compute.ts';
 import type { Caveat } from '../contract/primitives.ts';
 import type { WindowSweep } from '../contract/result.ts';

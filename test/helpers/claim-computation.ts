@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
-import type { LogRegressionProcedure, Procedure, Statement } from '../../src-main/contract/claim.ts';
+import type { Statement } from '../../src-main/contract/claim.ts';
+import type { LogRegressionProcedure, Procedure } from '../../src-main/contract/procedure.ts';
 import type { ClaimComputation } from '../../src-main/contract/compute.ts';
 import type { SeriesData, SeriesQuantity } from '../../src-main/contract/series.ts';
 

@@ -1,4 +1,5 @@
-import type { EnergyBudgetInputs, LogRegressionProcedure, Statement } from '../../src-main/contract/claim.ts';
+import type { EnergyBudgetInputs, Statement } from '../../src-main/contract/claim.ts';
+import type { LogRegressionProcedure } from '../../src-main/contract/procedure.ts';
 import type { ClaimComputation } from '../../src-main/contract/compute.ts';
 import { randomStream } from '../../src-main/statistics/random-stream.ts';
 import { annualSeries, computationOf, logRegressionProcedure } from './claim-computation.ts';

@@ -31,6 +31,7 @@ export function inventedSheet(change: Partial<ClaimView> = {}): ClaimView {
     sweep: stored(sweep),
     estimators: null,
     obstacles: [],
+    procedureSeriesIds: [1, 2],
     marks: ledger.flatMap(({ mark }) => mark ?? []),
     notes,
     findings: finding ? [{ ...finding, revision: 1, reason: '', isSigned: false }] : [],

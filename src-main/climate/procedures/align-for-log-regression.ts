@@ -1,4 +1,4 @@
-import type { LogRegressionProcedure } from '../../contract/claim.ts';
+import type { LogRegressionProcedure } from '../../contract/procedure.ts';
 import type { ClaimComputation } from '../../contract/compute.ts';
 import type { Caveat, YearSpan } from '../../contract/primitives.ts';
 import { InputError } from '../../errors.ts';

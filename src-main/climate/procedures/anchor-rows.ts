@@ -1,4 +1,4 @@
-import type { Anchor } from '../../contract/claim.ts';
+import type { Anchor } from '../../contract/procedure.ts';
 import type { YearSpan } from '../../contract/primitives.ts';
 import type { AlignedRows } from '../../contract/result.ts';
 import { InputError } from '../../errors.ts';

@@ -1,4 +1,4 @@
-import type { Anchor, SlopeCovariance } from '../../contract/claim.ts';
+import type { Anchor, SlopeCovariance } from '../../contract/procedure.ts';
 import type { AlignedRows, RegressionAnswer } from '../../contract/result.ts';
 import { regression } from '../../statistics/regression.ts';
 import { anchorRows, type AnchorValues, type AnnualRows } from './anchor-rows.ts';

@@ -1,4 +1,4 @@
-import type { LogRegressionProcedure, SlopeCovariance, TrendProcedure } from '../../contract/claim.ts';
+import { fitsLine, type LineProcedure, type SlopeCovariance } from '../../contract/procedure.ts';
 import type { ClaimComputation } from '../../contract/compute.ts';
 import type { Recomputation } from '../../contract/result.ts';
 import { InputError } from '../../errors.ts';
@@ -7,7 +7,7 @@ import { slopeConversion } from './slope-conversion.ts';
 
 /** The line that a claim's number is the slope of. */
 export interface FittedLine {
-  procedure: LogRegressionProcedure | TrendProcedure;
+  procedure: LineProcedure;
   fit: NonNullable<Recomputation['fit']>;
   intercept: boolean;
   /** number = slope × factor, in the claim's unit. */
@@ -30,13 +30,13 @@ export function fittedLine({
   computation: Pick<ClaimComputation, 'procedure' | 'statement'>;
   recomputation: Recomputation;
 }): FittedLine {
-  if (procedure.kind === 'ratio' || !fit) {
+  if (!fitsLine(procedure) || !fit) {
     throw new InputError({
       code: 'no-line',
       where: `procedure ${procedure.kind}`,
       expected: 'a procedure that fits a line to a record',
-      received: 'a ratio of two stated numbers',
-      hint: 'A ratio has no residuals and no other estimators.',
+      received: 'one that works from a few figures',
+      hint: 'Without a line there are no residuals and no other estimators.',
     });
   }
   const { covariance } = procedure;

@@ -1,4 +1,4 @@
-import type { LogRegressionProcedure } from '../../contract/claim.ts';
+import type { LogRegressionProcedure } from '../../contract/procedure.ts';
 import type { ClaimComputation } from '../../contract/compute.ts';
 import type { Caveat } from '../../contract/primitives.ts';
 import type { Recomputation } from '../../contract/result.ts';
@@ -38,7 +38,7 @@ export function logRegression(computation: ClaimComputation, procedure: LogRegre
     unit,
     value,
     standardError: slope.standardError * factor,
-    interval95: { low: (low ?? NaN) * factor, high: (high ?? NaN) * factor, levelPercent: 95 },
+    interval: { low: (low ?? NaN) * factor, high: (high ?? NaN) * factor, levelPercent: 95 },
     agreement: agreementWithStated(statement.value, value, { bound: statement.bound, unit }),
     fit: {
       window: annual.window,
@@ -56,6 +56,7 @@ export function logRegression(computation: ClaimComputation, procedure: LogRegre
       anchorValues,
     },
     conversion: words(slope.value),
+    working: [],
     caveats: [
       ...unitCaveats(unit, statement.unit),
       ...annual.caveats,

@@ -1,4 +1,4 @@
-import type { RatioProcedure } from '../../contract/claim.ts';
+import type { RatioProcedure } from '../../contract/procedure.ts';
 import type { ClaimComputation } from '../../contract/compute.ts';
 import type { Recomputation } from '../../contract/result.ts';
 import { NumericError } from '../../errors.ts';
@@ -54,10 +54,11 @@ export function ratio({ statement }: ClaimComputation, { numerator, denominator 
     unit,
     value,
     standardError: null,
-    interval95: null,
+    interval: null,
     agreement: agreementWithStated(statement.value, value, { bound: statement.bound, unit, computedInterval }),
     fit: null,
     conversion: `${parts} = ${formatQuantity(value, unit, { significantDigits: 4 })}; between ${low} and ${high} when both are taken with their rounding`,
+    working: [],
     caveats: [
       {
         code: 'units-not-computed',

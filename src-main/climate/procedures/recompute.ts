@@ -1,7 +1,11 @@
 import type { ClaimComputation } from '../../contract/compute.ts';
 import type { Recomputation } from '../../contract/result.ts';
 import { logRegression } from './log-regression.ts';
+import { budgetSensitivity } from './budget-sensitivity.ts';
+import { feedbackConversion } from './feedback-conversion.ts';
+import { forcingChange } from './forcing-change.ts';
 import { ratio } from './ratio.ts';
+import { shareOfWhole } from './share-of-whole.ts';
 import { trend } from './trend.ts';
 
 /**
@@ -18,5 +22,13 @@ export function recompute(computation: ClaimComputation): Recomputation {
       return trend(computation, procedure);
     case 'ratio':
       return ratio(computation, procedure);
+    case 'energy-budget':
+      return budgetSensitivity(computation, procedure);
+    case 'forcing':
+      return forcingChange(computation, procedure);
+    case 'feedback':
+      return feedbackConversion(computation, procedure);
+    case 'attribution':
+      return shareOfWhole(computation, procedure);
   }
 }

@@ -1,4 +1,5 @@
-import type { ClaimUnit, LogRegressionProcedure } from '../../contract/claim.ts';
+import type { LogRegressionProcedure } from '../../contract/procedure.ts';
+import type { ClaimUnit } from '../../contract/stated.ts';
 import { InputError } from '../../errors.ts';
 import { fahrenheitPerK } from '../../quantities/check-unit.ts';
 import { formatNumber, formatQuantity } from '../../quantities/notation.ts';

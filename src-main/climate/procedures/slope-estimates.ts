@@ -1,4 +1,4 @@
-import type { SlopeCovariance } from '../../contract/claim.ts';
+import type { SlopeCovariance } from '../../contract/procedure.ts';
 import type { Caveat } from '../../contract/primitives.ts';
 import type { FitDiagnostics, Recomputation, RegressionAnswer } from '../../contract/result.ts';
 import { InputError } from '../../errors.ts';

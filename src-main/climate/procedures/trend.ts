@@ -1,5 +1,5 @@
 import type { ClaimComputation } from '../../contract/compute.ts';
-import type { TrendProcedure } from '../../contract/claim.ts';
+import type { TrendProcedure } from '../../contract/procedure.ts';
 import type { Recomputation } from '../../contract/result.ts';
 import { InputError } from '../../errors.ts';
 import { checkUnit } from '../../quantities/check-unit.ts';
@@ -53,7 +53,7 @@ export function trend(computation: ClaimComputation, procedure: TrendProcedure):
     unit,
     value,
     standardError: slope.standardError * factor,
-    interval95: { low: (low ?? NaN) * factor, high: (high ?? NaN) * factor, levelPercent: 95 },
+    interval: { low: (low ?? NaN) * factor, high: (high ?? NaN) * factor, levelPercent: 95 },
     agreement: agreementWithStated(statement.value, value, { bound: statement.bound, unit }),
     fit: {
       window,
@@ -74,6 +74,7 @@ export function trend(computation: ClaimComputation, procedure: TrendProcedure):
       factor === 10
         ? `${formatNumber(slope.value, { significantDigits: 4 })} K per year × 10 = ${formatQuantity(value, unit, { significantDigits: 4 })}`
         : null,
+    working: [],
     caveats: [...unitCaveats(unit, statement.unit), ...caveats, ...estimates.caveats],
   };
 }

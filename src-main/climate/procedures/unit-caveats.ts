@@ -1,4 +1,4 @@
-import type { ClaimUnit } from '../../contract/claim.ts';
+import type { ClaimUnit } from '../../contract/stated.ts';
 import type { Caveat } from '../../contract/primitives.ts';
 
 /** The procedure may give another unit than the statement names: a slip of the source that the reviewer retraces. */

@@ -17,15 +17,19 @@ export function recomputationLines({ claim, recomputation, derivation }: ClaimVi
     lines.push(`  ${line.line}   ${verdict}`);
   }
   if (!recomputation) return [...lines, '  not recomputed'];
-  const { value, standardError, unit, interval95, agreement, fit, caveats } = recomputation.answer;
+  const { value, standardError, unit, interval, agreement, fit, working, caveats } = recomputation.answer;
   const error = standardError === null ? '' : ` ± ${formatNumber(standardError, { decimals: 4 })}`;
-  const range = interval95 ? ` (95 %: ${intervalText(interval95)})` : '';
+  const range = interval ? ` (${interval.levelPercent} %: ${intervalText(interval)})` : '';
   lines.push(`  ${formatNumber(value, { decimals: 4 })}${error} ${unit}${range}`, `  ${agreement.sentence}`);
   if (fit) {
     const { diagnostics } = fit;
     lines.push(
       `  R² centred ${formatNumber(diagnostics.rSquaredCentred, { decimals: 3 })}, uncentred ${formatNumber(diagnostics.rSquaredUncentred, { decimals: 3 })} · Durbin–Watson ${formatNumber(diagnostics.durbinWatson, { decimals: 2 })} · effective years ${formatNumber(diagnostics.effectiveSampleSize, { decimals: 1 })} of ${diagnostics.nObs}`,
     );
+  }
+  for (const { caption, columns, rows } of working) {
+    const cells = rows.map((row) => row.map((cell) => (typeof cell === 'number' ? formatNumber(cell) : (cell ?? '–'))));
+    lines.push(`  ${caption}`, ...textTable([columns, ...cells]).map((line) => `    ${line}`));
   }
   return [...lines, ...caveats.map((caveat) => `  note: ${caveat.detail}`)];
 }

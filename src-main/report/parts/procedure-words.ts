@@ -1,6 +1,16 @@
-import type { Claim, SlopeCovariance } from '../../contract/claim.ts';
+import type { Claim } from '../../contract/claim.ts';
+import {
+  fitsLine,
+  type AttributionProcedure,
+  type EnergyBudgetProcedure,
+  type FeedbackProcedure,
+  type ForcingProcedure,
+  type SlopeCovariance,
+} from '../../contract/procedure.ts';
 import type { Series } from '../../contract/series.ts';
+import { formulaNames } from '../../quantities/formula-names.ts';
 import { formatYears } from '../../quantities/notation.ts';
+import { quantityNames } from '../../quantities/quantity-names.ts';
 
 /** A procedure in one paragraph: enough to run it again by hand. */
 export function procedureWords({ procedure }: Claim, series: readonly Series[]): string {
@@ -10,6 +20,7 @@ export function procedureWords({ procedure }: Claim, series: readonly Series[]):
     const { numerator, denominator } = procedure;
     return `${numerator.value} ${numerator.unit} divided by ${denominator.value} ${denominator.unit}, both as stated.`;
   }
+  if (!fitsLine(procedure)) return figuresWords(procedure, name);
   const years = procedure.window === null ? 'all years that can be used' : formatYears(procedure.window);
   const common = `${years}; annual means of monthly series need at least ${procedure.minMonths} of 12 months. ${covarianceWords(procedure.covariance)}`;
   if (procedure.kind === 'trend') {
@@ -23,6 +34,26 @@ export function procedureWords({ procedure }: Claim, series: readonly Series[]):
   const conversion =
     procedure.conversion === 'per-doubling' ? 'the slope times ln 2' : 'the slope itself, per e-folding';
   return `Least-squares line ${line} of T − T₀ (${name(procedure.temperatureSeriesId)}) on ln(C/C₀) (${name(procedure.co2SeriesId)}), C₀ and T₀ being ${anchor}; the number is ${conversion}; ${common}`;
+}
+
+/** The procedures that work from a few figures; these stand in the tables below. */
+function figuresWords(
+  procedure: EnergyBudgetProcedure | ForcingProcedure | FeedbackProcedure | AttributionProcedure,
+  name: (id: number) => string,
+): string {
+  switch (procedure.kind) {
+    case 'energy-budget':
+      return `Energy budget between two periods, giving the ${quantityNames[procedure.estimate].label}; the number is that of the central inputs, its range that of ${procedure.draws} draws from the ranges of the inputs.`;
+    case 'forcing': {
+      const source = procedure.co2SeriesId === null ? '' : `, CO₂ from ${name(procedure.co2SeriesId)}`;
+      const adjusted = procedure.isEffective ? ', turned into effective forcing by the adjustments of AR6' : '';
+      return `Forcing of a change of concentrations${source}, by the formulas of ${formulaNames[procedure.formula]}${adjusted}.`;
+    }
+    case 'feedback':
+      return `${procedure.gives === 'sensitivity' ? 'Sensitivity S = F2x/λ from the feedback parameter' : 'Feedback parameter λ = F2x/S from the sensitivity'} and the forcing of a doubling; its range is that of ${procedure.draws} draws.`;
+    case 'attribution':
+      return `Share of a part in a whole, 100 · part/whole; its range is that of ${procedure.draws} draws.`;
+  }
 }
 
 function covarianceWords(covariance: SlopeCovariance): string {

@@ -1,5 +1,5 @@
 import type { ReportClaim } from '../../contract/project.ts';
-import type { Recomputation } from '../../contract/result.ts';
+import type { Recomputation, WorkingTable } from '../../contract/result.ts';
 import {
   formatInterval,
   formatNumber,
@@ -23,19 +23,19 @@ export function recomputationPart(claim: ReportClaim): Html {
     return html`<h2>Recomputation</h2>
       ${procedure}${nothing('The number has not been recomputed, or what was computed is out of date.')}`;
   }
-  const { agreement, fit, unit } = recomputation;
+  const { agreement, fit, unit, working } = recomputation;
   return html`<h2>Recomputation</h2>
     ${procedure}
     <p class="lead">${agreement.sentence}</p>
     ${facts([
       [
         'Recomputed',
-        `${formatWithUncertainty(recomputation.value, recomputation.standardError, unit)} (${quantityNames[recomputation.quantity].label}; ± one standard error)`,
+        `${formatWithUncertainty(recomputation.value, recomputation.standardError, unit)} (${quantityNames[recomputation.quantity].label}${recomputation.standardError === null ? '' : '; ± one standard error'})`,
       ],
       [
-        '95 % interval',
-        recomputation.interval95
-          ? formatInterval(recomputation.interval95, unit)
+        recomputation.interval ? `${recomputation.interval.levelPercent} % interval` : 'Interval',
+        recomputation.interval
+          ? formatInterval(recomputation.interval, unit)
           : 'none: the procedure gives no uncertainty',
       ],
       ['Minus stated', formatQuantity(agreement.difference, unit, { withSign: true, significantDigits: 2 })],
@@ -43,9 +43,20 @@ export function recomputationPart(claim: ReportClaim): Html {
       ['Conversion', recomputation.conversion ?? 'none'],
       ['Full precision', html`<code>${String(recomputation.value)}</code>`],
     ])}
-    ${fit ? fitPart(fit, claim.claim.procedure?.kind === 'trend' ? 'K per year' : 'K per e-folding') : nothing('This procedure has no regression, so there are no diagnostics of a fit.')}
+    ${fit ? fitPart(fit, claim.claim.procedure?.kind === 'trend' ? 'K per year' : 'K per e-folding') : working.map(workingPart)}
     ${caveatsPart([...recomputation.caveats, ...(fit?.regression.caveats ?? [])])}
     ${figuresOf(claim, 'recomputation').map((figure) => figurePart(figure))}`;
+}
+
+function workingPart({ caption, columns, rows }: WorkingTable): Html {
+  const isNumber = (column: number) => rows.every((row) => typeof row[column] === 'number' || row[column] === null);
+  return table(
+    caption,
+    columns.map((heading, column) => ({ heading, isNumber: isNumber(column) })),
+    rows.map((row) =>
+      row.map((cell) => (typeof cell === 'number' ? formatNumber(cell, { significantDigits: 4 }) : (cell ?? ''))),
+    ),
+  );
 }
 
 function fitPart(fit: Fit, slopeUnit: string): HtmlValue {

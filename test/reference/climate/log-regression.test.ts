@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import type { LogRegressionProcedure } from '../../../src-main/contract/claim.ts';
+import type { LogRegressionProcedure } from '../../../src-main/contract/procedure.ts';
 import { alignForLogRegression } from '../../../src-main/climate/procedures/align-for-log-regression.ts';
 import { fitLogRegression } from '../../../src-main/climate/procedures/fit-log-regression.ts';
 import { recompute } from '../../../src-main/climate/procedures/recompute.ts';
@@ -77,7 +77,7 @@ describe('log-regression against R', () => {
           small,
         },
       );
-      const { fit, value, standardError, interval95 } = recompute(computation);
+      const { fit, value, standardError, interval } = recompute(computation);
       if (!fit) throw new Error('expected a fit');
       const { x, y, years, ...lineOfR } = fromR;
 
@@ -112,8 +112,8 @@ describe('log-regression against R', () => {
       const perDoubling = { rel: 1e-10, abs: 0, why: 'the same slope times ln 2' };
       expectClose(value, lineOfR['slope']![0]! * Math.LN2, perDoubling, 'value');
       expectClose(standardError, lineOfR['standardErrors']![own]! * Math.LN2, perDoubling, 'standard error');
-      expectClose(interval95?.low, lineOfR['low']![own]! * Math.LN2, perDoubling, 'low');
-      expectClose(interval95?.high, lineOfR['high']![own]! * Math.LN2, perDoubling, 'high');
+      expectClose(interval?.low, lineOfR['low']![own]! * Math.LN2, perDoubling, 'low');
+      expectClose(interval?.high, lineOfR['high']![own]! * Math.LN2, perDoubling, 'high');
 
       const again = fitLogRegression(alignForLogRegression(computation, procedure), procedure);
       expect(again.slope).toBe(fit.slopes[0]?.value);

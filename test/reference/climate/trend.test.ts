@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import type { TrendProcedure } from '../../../src-main/contract/claim.ts';
+import type { TrendProcedure } from '../../../src-main/contract/procedure.ts';
 import { recompute } from '../../../src-main/climate/procedures/recompute.ts';
 import { computationOf, realTemperature } from '../../helpers/claim-computation.ts';
 import { expectClose } from '../../helpers/close.ts';

@@ -1,3 +1,4 @@
+import { quantityId } from '../../../src-main/contract/primitives.ts';
 import { beforeEach, describe, expect, it } from 'vitest';
 import NewClaimPage from '../../../src-renderer/pages/NewClaimPage.vue';
 import { button, field, mountScreen, settled } from '../../helpers/mount-screen.ts';
@@ -52,7 +53,7 @@ describe('a new claim', () => {
   it('explains every quantity in a line', async () => {
     const { screen } = await mountScreen(NewClaimPage);
     const group = screen.findAll('[role=radiogroup]')[0]!;
-    expect(group.findAll('label')).toHaveLength(6);
+    expect(group.findAll('label')).toHaveLength(quantityId.options.length);
     for (const option of group.findAll('label')) expect(option.find('.quiet-text').text().length).toBeGreaterThan(20);
   });
 

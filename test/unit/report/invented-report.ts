@@ -117,7 +117,8 @@ const recomputation: Recomputation = {
   unit: 'K per doubling',
   value: 1.8743219876,
   standardError: 0.068,
-  interval95: interval(1.74, 2.01, 95),
+  interval: interval(1.74, 2.01, 95),
+  working: [],
   agreement,
   fit: {
     window: { start: 1960, end: 2019 },

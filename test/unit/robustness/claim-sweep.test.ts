@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { recompute } from '../../../src-main/climate/procedures/recompute.ts';
-import type { LogRegressionProcedure, TrendProcedure } from '../../../src-main/contract/claim.ts';
+import type { LogRegressionProcedure, TrendProcedure } from '../../../src-main/contract/procedure.ts';
 import { claimSweep as claimSweepAnswer } from '../../../src-main/contract/result.ts';
 import { claimSweep } from '../../../src-main/robustness/claim-sweep.ts';
 import { quantile } from '../../../src-main/statistics/quantile.ts';

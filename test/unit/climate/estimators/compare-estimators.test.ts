@@ -60,9 +60,9 @@ describe('compareEstimators', () => {
   it('has the recomputed number and its error on the line that the procedure asks for', () => {
     for (const covariance of [{ kind: 'classical' }, { kind: 'newey-west', lag: 5, smallSample: true }] as const) {
       const computation = logRegressionClaim({ ...record, procedure: { covariance } });
-      const { value, standardError, interval95 } = recompute(computation);
+      const { value, standardError, interval } = recompute(computation);
       const own = compareEstimators(computation).estimates.filter(({ isOwn }) => isOwn);
-      expect(own).toMatchObject([{ value, standardError, interval95 }]);
+      expect(own).toMatchObject([{ value, standardError, interval95: interval }]);
     }
   });
 

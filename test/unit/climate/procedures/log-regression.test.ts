@@ -6,7 +6,8 @@ import { recompute } from '../../../../src-main/climate/procedures/recompute.ts'
 import { slopeConversion } from '../../../../src-main/climate/procedures/slope-conversion.ts';
 import { covarianceWords, slopeEstimates } from '../../../../src-main/climate/procedures/slope-estimates.ts';
 import { unitCaveats } from '../../../../src-main/climate/procedures/unit-caveats.ts';
-import type { LogRegressionProcedure, Statement } from '../../../../src-main/contract/claim.ts';
+import type { Statement } from '../../../../src-main/contract/claim.ts';
+import type { LogRegressionProcedure } from '../../../../src-main/contract/procedure.ts';
 import { recomputation } from '../../../../src-main/contract/result.ts';
 import { annualSeries, computationOf, logRegressionProcedure } from '../../../helpers/claim-computation.ts';
 
@@ -95,7 +96,7 @@ describe('logRegression', () => {
     expect(codes(perEFolding)).not.toContain('unit-differs');
     const fahrenheit = run({}, { unit: '°F per doubling' });
     expect(fahrenheit.value).toBeCloseTo(1.8 * perDoubling, 14);
-    expect(fahrenheit.interval95?.high).toBeCloseTo(1.8 * (run().interval95?.high ?? NaN), 14);
+    expect(fahrenheit.interval?.high).toBeCloseTo(1.8 * (run().interval?.high ?? NaN), 14);
     expect(fahrenheit.conversion).toMatch(/K × ln 2 × 1\.8 = .* °F per doubling/);
   });
 

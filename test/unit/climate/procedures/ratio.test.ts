@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { ratio } from '../../../../src-main/climate/procedures/ratio.ts';
 import { recompute } from '../../../../src-main/climate/procedures/recompute.ts';
-import type { RatioProcedure, Statement } from '../../../../src-main/contract/claim.ts';
+import type { Statement } from '../../../../src-main/contract/claim.ts';
+import type { RatioProcedure } from '../../../../src-main/contract/procedure.ts';
 import { recomputation } from '../../../../src-main/contract/result.ts';
 import { computationOf } from '../../../helpers/claim-computation.ts';
 

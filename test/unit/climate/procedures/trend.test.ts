@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { recompute } from '../../../../src-main/climate/procedures/recompute.ts';
 import { trend } from '../../../../src-main/climate/procedures/trend.ts';
-import type { Statement, TrendProcedure } from '../../../../src-main/contract/claim.ts';
+import type { Statement } from '../../../../src-main/contract/claim.ts';
+import type { TrendProcedure } from '../../../../src-main/contract/procedure.ts';
 import { recomputation } from '../../../../src-main/contract/result.ts';
 import { annualSeries, computationOf } from '../../../helpers/claim-computation.ts';
 

@@ -1,6 +1,6 @@
-import type { ClaimUnit } from '../contract/claim.ts';
+import type { ClaimUnit } from '../contract/stated.ts';
 import { InputError } from '../errors.ts';
-import { fahrenheitPerK } from '../quantities/check-unit.ts';
+import { fahrenheitPerK } from './check-unit.ts';
 
 /**
  * Turns K per doubling into the unit of a sensitivity.

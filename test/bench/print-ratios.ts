@@ -15,7 +15,7 @@ export async function printRatios(cases: (() => BenchCase)[]): Promise<boolean> 
   for (const make of cases) {
     const made = unlessMissing(make);
     if (made instanceof PeerMissing) {
-      console.log(`a case is left out, without the record that both sides fit: ${made.message}`);
+      console.log(`a case is left out, for want of what both sides fit: ${made.message}`);
       continue;
     }
     const { name, own, peers, end } = made;

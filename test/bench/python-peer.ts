@@ -55,5 +55,5 @@ function firstAnswer<Answer>(words: string[], read: (line: string) => Answer): A
       reasons.add(problem.message);
     }
   }
-  throw new PeerMissing([...reasons].join('; '));
+  throw new PeerMissing(`${words.join(' ')}: ${[...reasons].join('; ')}`);
 }

@@ -1,8 +1,7 @@
 import type { Claim } from '../contract/claim.ts';
 import type { XyFigure } from '../contract/figure.ts';
 import type { ClaimSweep, Recomputation } from '../contract/result.ts';
-import { isFootingError } from '../errors.ts';
-import { regression } from '../statistics/regression.ts';
+import { straightLine } from '../statistics/straight-line.ts';
 
 type Mark = XyFigure['marks'][number];
 
@@ -31,7 +30,7 @@ export function fitFigure(claim: Claim, { fit }: Recomputation, digests: string[
       'stated',
     ),
   ];
-  const free = hasIntercept ? null : freeLine(x, y);
+  const free = hasIntercept ? null : straightLine(x, y);
   if (free) marks.push(line('line with free intercept', free.intercept, free.slope, 'alternative'));
   return {
     kind: 'xy',
@@ -44,18 +43,6 @@ export function fitFigure(claim: Claim, { fit }: Recomputation, digests: string[
     isXYears: xLabel === 'Year',
     marks,
   };
-}
-
-/** The line that need not pass through zero; null where the record does not decide one. */
-function freeLine(x: number[], y: number[]): { intercept: number; slope: number } | null {
-  try {
-    const { coefficients } = regression({ x, y, intercept: true, covariance: { kind: 'classical' } });
-    const [intercept = 0, slope = 0] = coefficients;
-    return { intercept, slope };
-  } catch (error) {
-    if (isFootingError(error)) return null;
-    throw error;
-  }
 }
 
 /** What the fit leaves over, year by year. */

@@ -1,10 +1,10 @@
-import type { Anchor, SlopeCovariance } from '../contract/procedure.ts';
+import type { Anchor } from '../contract/procedure.ts';
 import type { WindowSweepRequest } from '../contract/compute.ts';
 import type { Caveat } from '../contract/primitives.ts';
 import type { WindowSweep } from '../contract/result.ts';
 import { InputError, NumericError } from '../errors.ts';
 import { finiteNumber, finiteValues } from '../statistics/finite-values.ts';
-import { growingLine } from '../statistics/growing-line.ts';
+import { growingSlope } from '../statistics/growing-slope.ts';
 import { quantileOfSorted } from '../statistics/quantile.ts';
 import { gapsClosedUp } from '../statistics/year-steps.ts';
 
@@ -32,8 +32,8 @@ type SweepWindow = WindowSweep['windows'][number];
  * @throws   InputError wrong-length, not-finite, not-positive, unordered-years, out-of-range, no-window;
  *           NumericError no-spread when x varies in no window
  *
- * Source   least squares in closed form, from running sums (`growingLine`); covariance as in statistics/newey-west.ts (Newey & West 1987), Bartlett
- *          weights, no prewhitening, factor n/(n − k) when `smallSample`
+ * Source   least squares in closed form, from running sums (`growingSlope`); covariance as in statistics/newey-west.ts
+ *          (Newey & West 1987), Bartlett weights, no prewhitening, factor n/(n − k) when `smallSample`
  * Checked  test/unit/robustness/window-sweep.test.ts (C: closed forms); test/reference/robustness (B: R's lm, each window)
  */
 export function windowSweep(request: WindowSweepRequest, onProgress?: (shareDone: number) => void): WindowSweep {
@@ -42,13 +42,13 @@ export function windowSweep(request: WindowSweepRequest, onProgress?: (shareDone
   const nYears = years.length;
   const nWindows = ((nYears - minYears + 1) * (nYears - minYears + 2)) / 2;
   const windows: SweepWindow[] = [];
-  const fitterFrom = slopeFitter(record, intercept, covariance);
+  const slopeFrom = growingSlope(record.x, record.y, { intercept, covariance });
   const anchorOf = anchorFinder(record, anchor);
   let nDone = 0;
   for (let first = 0; first + minYears <= nYears; first++) {
-    const fitTo = fitterFrom(first, anchorOf(first));
+    const slopeTo = slopeFrom(first, anchorOf(first));
     for (let last = first + minYears - 1; last < nYears; last++) {
-      const fit = fitTo(last);
+      const fit = slopeTo(last);
       if (fit) {
         const { slope, standardError } = fit;
         windows.push({ start: years[first]!, end: years[last]!, n: last - first + 1, slope, standardError });
@@ -96,8 +96,6 @@ interface SweepRecord {
   y: Float64Array;
   /** What the anchor of x is averaged over, and how that mean becomes x0. */
   anchored: { values: Float64Array; toX: (mean: number) => number };
-  /** Spread of x below which a window says nothing about a slope. */
-  smallestSpread: number;
 }
 
 function checkedRecord({ years, x, co2Ppm, y, minYears, anchor, covariance }: WindowSweepRequest): SweepRecord {
@@ -139,7 +137,6 @@ function checkedRecord({ years, x, co2Ppm, y, minYears, anchor, covariance }: Wi
     x: predictor,
     y: checkedY,
     anchored: { values: given, toX: co2Ppm ? Math.log : (mean) => mean },
-    smallestSpread: 1e-12 * predictor.reduce((largest, value) => Math.max(largest, Math.abs(value)), 0),
   };
 }
 
@@ -153,37 +150,5 @@ function anchorFinder({ y, anchored }: SweepRecord, anchor: Anchor): (first: num
       ySum += y[row]!;
     }
     return { x0: anchored.toX(xSum / nAnchor), y0: ySum / nAnchor };
-  };
-}
-
-/** For a first row and its anchor: slope and standard error up to a last row; null where x does not vary. */
-function slopeFitter({ x, y, smallestSpread }: SweepRecord, intercept: boolean, covariance: SlopeCovariance) {
-  const lineFrom = growingLine(x, y);
-  const scores = new Float64Array(x.length);
-  const nCoefficients = intercept ? 2 : 1;
-  return (first: number, anchor: { x0: number; y0: number }) => {
-    const lineTo = lineFrom(first, anchor, intercept);
-    return (last: number): Pick<SweepWindow, 'slope' | 'standardError'> | null => {
-      const n = last - first + 1;
-      const { slope, spread, squares, xCentre, yCentre } = lineTo(last);
-      if (!(spread > n * smallestSpread ** 2)) return null;
-      if (covariance.kind === 'classical') {
-        return { slope, standardError: Math.sqrt(squares / (n - nCoefficients) / spread) };
-      }
-      let meat = 0;
-      for (let row = first; row <= last; row++) {
-        const dx = x[row]! - xCentre;
-        const score = dx * (y[row]! - yCentre - slope * dx);
-        scores[row] = score;
-        meat += score * score;
-      }
-      for (let lag = 1; lag <= covariance.lag; lag++) {
-        let product = 0;
-        for (let row = first + lag; row <= last; row++) product += scores[row]! * scores[row - lag]!;
-        meat += 2 * (1 - lag / (covariance.lag + 1)) * product;
-      }
-      const factor = covariance.smallSample ? n / (n - nCoefficients) : 1;
-      return { slope, standardError: Math.sqrt(factor * Math.max(0, meat)) / spread };
-    };
   };
 }

@@ -43,20 +43,19 @@ export function finiteValues(
   const checked = values instanceof Float64Array ? values : Float64Array.from(values);
   for (let i = 0; i < checked.length; i++) {
     const value = checked[i]!;
-    const place = `${name}[${i}]`;
     if (!Number.isFinite(value)) {
       const hint = 'Leave missing values out first, as a step of its own that says which they are.';
-      throw refuse('not-finite', place, 'a finite number', String(values[i]), hint);
+      throw refuse('not-finite', `${name}[${i}]`, 'a finite number', String(values[i]), hint);
     }
     if (Math.abs(value) > LARGEST_MAGNITUDE) {
       const hint = 'Give the values in a larger unit.';
-      throw refuse('too-large', place, `a magnitude of at most ${LARGEST_MAGNITUDE}`, String(value), hint);
+      throw refuse('too-large', `${name}[${i}]`, `a magnitude of at most ${LARGEST_MAGNITUDE}`, String(value), hint);
     }
     if (sign === 'positive' && value <= 0) {
-      throw refuse('not-positive', place, 'a number above 0', String(value), 'Leave the row out instead.');
+      throw refuse('not-positive', `${name}[${i}]`, 'a number above 0', String(value), 'Leave the row out instead.');
     }
     if (sign === 'non-negative' && value < 0) {
-      throw refuse('negative', place, 'a number of at least 0', String(value), 'Check the sign.');
+      throw refuse('negative', `${name}[${i}]`, 'a number of at least 0', String(value), 'Check the sign.');
     }
   }
   return checked;

@@ -1,4 +1,4 @@
-import { sumOfProducts, mean } from './summation.ts';
+import { straightLine } from './straight-line.ts';
 
 export interface WindowLine {
   slope: number;
@@ -30,7 +30,8 @@ const SMALLEST_SHARE = 1e-3;
  * Checked  test/unit/statistics/growing-line.test.ts (C: `leastSquares` on each window, close fits and far levels among them)
  */
 export function growingLine(x: Float64Array, y: Float64Array) {
-  const guide = guidingSlope(x, y);
+  // Any slope would do; that of the whole record leaves little.
+  const guide = straightLine(x, y)?.slope ?? 0;
   // Counted from the first row, so that a far level costs no digits.
   const restAt = (xValue: number, yValue: number) => yValue - y[0]! - guide * (xValue - x[0]!);
   const rest = y.map((value, row) => restAt(x[row]!, value));
@@ -59,14 +60,6 @@ export function growingLine(x: Float64Array, y: Float64Array) {
       return { slope: guide + turn, spread, squares, xCentre: x0 + uSum / n, yCentre: y0 + (rSum + guide * uSum) / n };
     };
   };
-}
-
-/** Of the whole record; any slope would do, this one leaves little. */
-function guidingSlope(x: Float64Array, y: Float64Array): number {
-  const centre = mean(x);
-  const d = x.map((value) => value - centre);
-  const slope = sumOfProducts(d, y) / sumOfProducts(d, d);
-  return Number.isFinite(slope) ? slope : 0;
 }
 
 function summedAnew(

@@ -134,7 +134,9 @@ function powerOfTwoScale(caller: string, name: string, column: Float64Array, roo
 }
 
 function scaled(column: Float64Array, scale: number, rootWeights: Float64Array | null): Float64Array {
-  return column.map((value, i) => value * scale * (rootWeights?.[i] ?? 1));
+  const product = new Float64Array(column.length);
+  for (let i = 0; i < column.length; i++) product[i] = column[i]! * scale * (rootWeights?.[i] ?? 1);
+  return product;
 }
 
 function refuseDependentColumns(caller: string, { pivotRatio, pivot }: PivotedQr): void {
@@ -178,7 +180,7 @@ function pseudoInverse(
     const row = new Float64Array(nObs);
     row.set(solveUpperTransposed(qr, unit));
     multiplyByQ(qr, row);
-    rows[qr.pivot[j]!] = row.map((value, t) => value * scales[qr.pivot[j]!]! * (rootWeights?.[t] ?? 1));
+    rows[qr.pivot[j]!] = scaled(row, scales[qr.pivot[j]!]!, rootWeights);
   }
   return rows;
 }

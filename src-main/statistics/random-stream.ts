@@ -1,5 +1,3 @@
-import { mersenneFromState } from 'pure-rand/generator/mersenne';
-import { skipN } from 'pure-rand/utils/skipN';
 import normalQuantile from '@stdlib/stats-base-dists-normal-quantile';
 import { finiteNumber } from './finite-values.ts';
 
@@ -46,10 +44,30 @@ export function randomStream(seed: number, block: number): RandomStream {
 }
 
 const STATE_LENGTH = 624;
+/** How far behind a word the word lies that it is mixed with. */
+const MIDDLE = 397;
 
-/** MT19937 initialised by an array of 32-bit words: init_by_array of mt19937ar.c. */
+/** MT19937 initialised by an array of 32-bit words: init_by_array and genrand_int32 of mt19937ar.c. */
 export function mersenneTwister(key: readonly number[]): { next(): number } {
-  const state = new Uint32Array(STATE_LENGTH);
+  const state = initialState(key);
+  let place = STATE_LENGTH;
+  return {
+    next: () => {
+      if (place === STATE_LENGTH) {
+        twist(state);
+        place = 0;
+      }
+      let word = state[place++]!;
+      word ^= word >>> 11;
+      word ^= (word << 7) & 0x9d2c5680;
+      word ^= (word << 15) & 0xefc60000;
+      return (word ^ (word >>> 18)) >>> 0;
+    },
+  };
+}
+
+function initialState(key: readonly number[]): Int32Array {
+  const state = new Int32Array(STATE_LENGTH);
   state[0] = 19_650_218;
   for (let i = 1; i < STATE_LENGTH; i++) state[i] = mixed(state, i - 1, 1_812_433_253) + i;
 
@@ -69,15 +87,26 @@ export function mersenneTwister(key: readonly number[]): { next(): number } {
     state[place] = (state[place]! ^ mixed(state, place - 1, 1_566_083_941)) - place;
     advance();
   }
-  state[0] = 2 ** 31;
-
-  // The library holds states that have been twisted once already: its first pass over a fresh state does just that.
-  const generator = mersenneFromState([0, ...state]);
-  skipN(generator, STATE_LENGTH);
-  return generator;
+  state[0] = -(2 ** 31);
+  return state;
 }
 
-function mixed(state: Uint32Array, place: number, multiplier: number): number {
+function mixed(state: Int32Array, place: number, multiplier: number): number {
   const word = state[place]!;
   return Math.imul(word ^ (word >>> 30), multiplier);
+}
+
+/** The next 624 words, before they are tempered. */
+function twist(state: Int32Array): void {
+  for (let i = 0; i < STATE_LENGTH - MIDDLE; i++) state[i] = state[i + MIDDLE]! ^ twisted(state[i]!, state[i + 1]!);
+  for (let i = STATE_LENGTH - MIDDLE; i < STATE_LENGTH - 1; i++) {
+    state[i] = state[i + MIDDLE - STATE_LENGTH]! ^ twisted(state[i]!, state[i + 1]!);
+  }
+  state[STATE_LENGTH - 1] = state[MIDDLE - 1]! ^ twisted(state[STATE_LENGTH - 1]!, state[0]!);
+}
+
+/** The top bit of one word and the rest of the next, times the matrix A. */
+function twisted(word: number, next: number): number {
+  const joined = (word & 0x80000000) | (next & 0x7fffffff);
+  return (joined >>> 1) ^ (-(joined & 1) & 0x9908b0df);
 }

@@ -18,13 +18,21 @@ export function caseOfOpening(): BenchCase {
   const holder = { reviewer: 'bench', host: 'bench', engineVersion: 'bench' };
   return {
     name: 'opening a project',
-    peerName: 'the driver alone: open, quick_check',
-    own: () => openProject(path, { holder }).close(),
-    peer: () => {
-      const db = new Database(path);
-      db.pragma('quick_check');
-      db.close();
+    own: () => {
+      openProject(path, { holder }).close();
+      return [];
     },
+    peers: [
+      {
+        name: 'the driver alone: open, quick_check',
+        work: () => {
+          const db = new Database(path);
+          db.pragma('quick_check');
+          db.close();
+          return [];
+        },
+      },
+    ],
     end: () => rmSync(folder, { recursive: true }),
   };
 }

@@ -2,6 +2,7 @@ import { recompute } from '../../src-main/climate/procedures/recompute.ts';
 import { claimComputation } from '../../src-main/contract/compute.ts';
 import { regression } from '../../src-main/statistics/regression.ts';
 import type { BenchCase } from './bench-case.ts';
+import { sameNumbers } from './comparison.ts';
 
 const nYears = 70;
 const years = Array.from({ length: nYears }, (_, place) => 1950 + place);
@@ -61,9 +62,13 @@ export function caseOfRecomputing(): BenchCase {
   const y = years.map((_, place) => warming(place) - warming(0));
   return {
     name: 'recomputing a claim, 70 years',
-    peerName: 'one least-squares fit with its table',
-    own: () => void recompute(computation),
-    peer: () => void regression({ x, y, intercept: false, covariance: { kind: 'classical' } }),
-    end: () => undefined,
+    own: () => recompute(computation).fit?.regression.coefficients ?? [],
+    peers: [
+      {
+        name: 'one least-squares fit with its table',
+        work: () => regression({ x, y, intercept: false, covariance: { kind: 'classical' } }).coefficients,
+        compare: sameNumbers({ rel: 1e-10, why: 'the same rows; logarithms of quotients' }),
+      },
+    ],
   };
 }

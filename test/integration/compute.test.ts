@@ -30,6 +30,7 @@ async function compute(method: string, input: object): Promise<{ value?: unknown
 }
 
 const valid = {
+  regression: { x, y, intercept: true, covariance: { kind: 'newey-west', lag: 2 } },
   'residual-tests': { x, y, intercept: true, lags: 3 },
   'gls-ar1': { x, y, intercept: true, estimator: 'ml' },
   'gls-arma11': { x, y, intercept: true, estimator: 'ml' },
@@ -80,7 +81,16 @@ describe.each(methods)('compute %s', (method) => {
 });
 
 /** Each parameter away from its plain value, twice: the answer moves, so the parameter arrives. */
+const errors = (covariance: object) => ({ covariance: { kind: 'newey-west', lag: 2, ...covariance } });
 const parameters: [Method, string, readonly [object, object]][] = [
+  ['regression', 'lag', [errors({ lag: 4 }), errors({ lag: 'newey-west-1994' })]],
+  ['regression', 'lag', [errors({ lag: 0 }), errors({ lag: 3 })]],
+  ['regression', 'prewhiten', [errors({ prewhiten: 'var1' }), errors({})]],
+  ['regression', 'smallSample', [errors({ smallSample: true }), errors({ smallSample: false })]],
+  ['regression', 'kind', [{ covariance: { kind: 'hc0' } }, { covariance: { kind: 'hc3' } }]],
+  ['regression', 'years', [{ years: withGapAt(5) }, { years: withGapAt(15) }]],
+  ['regression', 'intercept', [{ intercept: false }, { intercept: true }]],
+  ['regression', 'weights', [{ weights: x.map((_, t) => 1 + t) }, { weights: x.map((_, t) => 30 - t) }]],
   ['residual-tests', 'lags', [{ lags: 2 }, { lags: 5 }]],
   ['residual-tests', 'breuschPaganKind', [{ breuschPaganKind: 'original' }, { breuschPaganKind: 'studentised' }]],
   ['residual-tests', 'fitdf', [{ fitdf: 1 }, { fitdf: 2 }]],

@@ -19,7 +19,6 @@ import { chowTest } from '../statistics/chow-test.ts';
 import { cusum } from '../statistics/cusum.ts';
 import { deming } from '../statistics/deming.ts';
 import { designColumns } from '../statistics/design-columns.ts';
-import { deviations } from '../statistics/deviations.ts';
 import { engleGranger } from '../statistics/engle-granger.ts';
 import { glsArma11 } from '../statistics/gls-arma11.ts';
 import { huber } from '../statistics/huber.ts';
@@ -71,8 +70,6 @@ export const methods: Methods = {
 };
 
 function theilSenAt95(input: ComputeInput<'theil-sen'>): ComputeValue<'theil-sen'> {
-  // Where all y are tied, every pair slope is 0 and the interval would claim to know that exactly.
-  deviations('theilSen', 'y', input.y, { atLeast: 3 });
   const { confidence: confidence95, ...fit } = theilSen({ ...input, levelPercent: 95 });
   return { ...fit, confidence95 };
 }

@@ -19,6 +19,7 @@ import { chowTest } from '../statistics/chow-test.ts';
 import { cusum } from '../statistics/cusum.ts';
 import { deming } from '../statistics/deming.ts';
 import { designColumns } from '../statistics/design-columns.ts';
+import { effectiveSampleSizes } from '../statistics/effective-sample-sizes.ts';
 import { engleGranger } from '../statistics/engle-granger.ts';
 import { glsArma11 } from '../statistics/gls-arma11.ts';
 import { huber } from '../statistics/huber.ts';
@@ -43,6 +44,7 @@ type Methods = {
 /** The pure function behind each method: data in, data out, the same digits wherever it runs. */
 export const methods: Methods = {
   regression: (input) => regression(input),
+  'effective-sample-size': (input) => effectiveSampleSizes(input),
   'residual-tests': (input) => residualTests(input),
   'gls-ar1': (input) => ar1Line(input),
   'gls-arma11': (input) => glsArma11(input),

@@ -9,6 +9,8 @@ const x = Array.from({ length: 24 }, (_, t) => t / 10);
 const y = x.map((value, t) =>
   Number((0.4 + 1.7 * value + 0.2 * Math.sin(t * 0.9) + 0.05 * Math.cos(t * 2.3)).toFixed(4)),
 );
+/** The wiggle alone. */
+const wiggle = x.map((value, t) => y[t]! - 0.4 - 1.7 * value);
 const same = <Value>(value: Value, length = x.length): Value[] => Array.from({ length }, () => value);
 const without = (at: number) => y.map((value, t) => (t === at ? null : value));
 const withGapAt = (at: number) => x.map((_, t) => 1960 + t + (t < at ? 0 : 2));
@@ -31,6 +33,7 @@ async function compute(method: string, input: object): Promise<{ value?: unknown
 
 const valid = {
   regression: { x, y, intercept: true, covariance: { kind: 'newey-west', lag: 2 } },
+  'effective-sample-size': { values: wiggle, lags: 3 },
   'residual-tests': { x, y, intercept: true, lags: 3 },
   'gls-ar1': { x, y, intercept: true, estimator: 'ml' },
   'gls-arma11': { x, y, intercept: true, estimator: 'ml' },
@@ -73,7 +76,7 @@ describe.each(methods)('compute %s', (method) => {
   });
 
   it('refuses a missing value, and says how one is left out', async () => {
-    const column = method === 'phase-surrogates' ? 'values' : 'y';
+    const column = 'values' in valid[method] ? 'values' : 'y';
     const { error } = await compute(method, { ...valid[method], [column]: without(5) });
     expect(error).toMatchObject({ code: 'input-form', where: `${method}.${column}[5]`, received: 'null' });
     expect(error?.hint).toContain('Leave a row with a missing value out');
@@ -83,6 +86,8 @@ describe.each(methods)('compute %s', (method) => {
 /** Each parameter away from its plain value, twice: the answer moves, so the parameter arrives. */
 const errors = (covariance: object) => ({ covariance: { kind: 'newey-west', lag: 2, ...covariance } });
 const parameters: [Method, string, readonly [object, object]][] = [
+  ['effective-sample-size', 'lags', [{ lags: 1 }, { lags: 4 }]],
+  ['effective-sample-size', 'years', [{ years: withGapAt(5) }, {}]],
   ['regression', 'lag', [errors({ lag: 4 }), errors({ lag: 'newey-west-1994' })]],
   ['regression', 'lag', [errors({ lag: 0 }), errors({ lag: 3 })]],
   ['regression', 'prewhiten', [errors({ prewhiten: 'var1' }), errors({})]],

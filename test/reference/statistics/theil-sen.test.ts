@@ -74,6 +74,10 @@ describe('theilSen', () => {
     ['unequal lengths', { x: [1, 2, 3], y: [1, 2] }, 'theilSen, y: expected 3 values'],
     ['a level of 100 %', { ...sen, levelPercent: 100 }, 'levelPercent'],
     ['a missing value', { ...sen, y: sen.y.with(1, NaN) }, 'theilSen, y[1]'],
-    ['too many rows', { x: Array.from({ length: 5001 }, (_, i) => i), y: Array.from({ length: 5001 }, (_, i) => i % 7) }, 'at most 5000'],
+    [
+      'too many rows',
+      { x: Array.from({ length: 5001 }, (_, i) => i), y: Array.from({ length: 5001 }, (_, i) => i % 7) },
+      'at most 5000',
+    ],
   ])('refuses %s', (_, request, sentence) => expect(() => theilSen(request)).toThrow(sentence));
 });

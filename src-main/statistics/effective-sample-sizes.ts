@@ -8,6 +8,8 @@ import {
   effectiveSampleSizeOfMean,
   effectiveSampleSizeToLag,
 } from './effective-sample-size.ts';
+import { finiteNumber } from './finite-values.ts';
+import { varyingValues } from './varying-values.ts';
 import { gapsClosedUp } from './year-steps.ts';
 
 /**
@@ -25,8 +27,11 @@ import { gapsClosedUp } from './year-steps.ts';
  * Checked  test/reference/statistics/effective-sample-size.test.ts (B: R, through the single definitions)
  */
 export function effectiveSampleSizes({ values, lags, years }: EffectiveSampleSizeInput): EffectiveSampleSizeValue {
-  const nObs = values.length;
-  const closedUp = gapsClosedUp('effectiveSampleSizes', years, nObs, 'Effective sample sizes');
+  const caller = 'effectiveSampleSizes';
+  const nObs = varyingValues(caller, 'values', values, { atLeast: 3 }).length;
+  const hint = 'Take fewer lags or a longer series.';
+  finiteNumber(caller, 'lags', lags, { isWhole: true, atLeast: 1, atMost: nObs - 1, hint });
+  const closedUp = gapsClosedUp(caller, years, nObs, 'Effective sample sizes');
   const found = autocorrelations(values, [...values.keys()], lags);
   const [lag1 = NaN] = found;
   const caveats: Caveat[] = [];

@@ -34,7 +34,12 @@ export interface NeweyWestOptions extends NeweyWestSetting {
  *          newey-west.test.ts (B: base R, prewhitening and gaps)
  */
 export function neweyWest(fit: LeastSquaresFit, { lag, smallSample, ...setting }: NeweyWestOptions): Float64Array {
-  finiteNumber('neweyWest', 'lag', lag, { isWhole: true, atLeast: 0, atMost: fit.nObs - 1 });
+  finiteNumber('neweyWest', 'lag', lag, {
+    isWhole: true,
+    atLeast: 0,
+    atMost: fit.nObs - 1,
+    hint: 'Choose a smaller lag or a longer window.',
+  });
   const k = fit.nCoefficients;
   const { influence } = neweyWestRows(fit, setting);
   const covariance = laggedCrossProduct(influence, 0);

@@ -124,7 +124,7 @@ describe('refusals', () => {
     [() => effectiveSampleSizeToLag(9, [0.1, 1.2]), 'autocorrelations[1]'],
     [() => effectiveSampleSizeToLag(9, [-0.9]), 'autocorrelations that leave the mean a variance'],
     [() => effectiveSampleSizeNychka2000(9, 0.8), 'r + 0.68/√n below 1, but found 1.03'],
-    [() => effectiveSampleSizes({ values: [1, 2, 4], lags: 3 }), 'maxLag'],
+    [() => effectiveSampleSizes({ values: [1, 2, 4], lags: 3 }), 'effectiveSampleSizes, lags'],
     [() => effectiveSampleSizes({ values: [2, 2, 2], lags: 1 }), 'not all equal'],
   ])('%s', (compute, sentence) => expect(compute).toThrow(sentence));
 });

@@ -88,16 +88,17 @@ const errors = (covariance: object) => ({ covariance: { kind: 'newey-west', lag:
 const parameters: [Method, string, readonly [object, object]][] = [
   ['effective-sample-size', 'lags', [{ lags: 1 }, { lags: 4 }]],
   ['effective-sample-size', 'years', [{ years: withGapAt(5) }, {}]],
-  ['regression', 'lag', [errors({ lag: 4 }), errors({ lag: 'newey-west-1994' })]],
-  ['regression', 'lag', [errors({ lag: 0 }), errors({ lag: 3 })]],
-  ['regression', 'prewhiten', [errors({ prewhiten: 'var1' }), errors({})]],
-  ['regression', 'smallSample', [errors({ smallSample: true }), errors({ smallSample: false })]],
-  ['regression', 'kind', [{ covariance: { kind: 'hc0' } }, { covariance: { kind: 'hc3' } }]],
+  ['regression', 'covariance.lag', [errors({ lag: 4 }), errors({ lag: 'newey-west-1994' })]],
+  ['regression', 'covariance.lag', [errors({ lag: 0 }), errors({ lag: 3 })]],
+  ['regression', 'covariance.prewhiten', [errors({ prewhiten: 'var1' }), errors({})]],
+  ['regression', 'covariance.smallSample', [errors({ smallSample: true }), errors({ smallSample: false })]],
+  ['regression', 'covariance.kind', [{ covariance: { kind: 'hc0' } }, { covariance: { kind: 'hc3' } }]],
   ['regression', 'years', [{ years: withGapAt(5) }, { years: withGapAt(15) }]],
   ['regression', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['regression', 'weights', [{ weights: x.map((_, t) => 1 + t) }, { weights: x.map((_, t) => 30 - t) }]],
   ['residual-tests', 'lags', [{ lags: 2 }, { lags: 5 }]],
   ['residual-tests', 'breuschPaganKind', [{ breuschPaganKind: 'original' }, { breuschPaganKind: 'studentised' }]],
+  ['residual-tests', 'years', [{ years: withGapAt(5) }, {}]],
   ['residual-tests', 'fitdf', [{ fitdf: 1 }, { fitdf: 2 }]],
   ['residual-tests', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['gls-ar1', 'estimator', [{ estimator: 'reml' }, { estimator: 'prais-winsten' }]],
@@ -120,6 +121,7 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['adf', 'lags', [{ lags: 0 }, { lags: 3 }]],
   ['adf', 'deterministic', [{ deterministic: 'none' }, { deterministic: 'constant' }]],
   ['engle-granger', 'lags', [{ lags: 0 }, { lags: 3 }]],
+  ['engle-granger', 'years', [{ years: withGapAt(5) }, {}]],
   ['engle-granger', 'deterministic', [{ x: y.toReversed() }, { x: y.toReversed(), deterministic: 'trend' }]],
   ['deming', 'delta', [{ delta: 0.5 }, { delta: 4 }]],
   ['attenuation', 'xErrorStandardDeviation', [{ xErrorStandardDeviation: 0.2 }, { xErrorStandardDeviation: 0.3 }]],
@@ -137,6 +139,19 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['kpss', 'lags', [{ lags: 0 }, { lags: 4 }]],
   ['kpss', 'deterministic', [{ deterministic: 'trend' }, { deterministic: 'constant' }]],
 ];
+
+/** Data, and what has one value only. */
+const noParameters = ['x', 'y', 'values', 'gls-arma11.estimator'];
+
+it.each(methods)('every parameter of %s is tried', (method) => {
+  const named = (name: string) => !noParameters.includes(name) && !noParameters.includes(`${method}.${name}`);
+  const covariance = Object.keys(computeMethods.regression.input.shape.covariance.shape);
+  const asked = Object.keys(computeMethods[method].input.shape)
+    .filter(named)
+    .flatMap((name) => (name === 'covariance' ? covariance.map((option) => `covariance.${option}`) : [name]));
+  const tried = new Set(parameters.filter(([of]) => of === method).map(([, name]) => name));
+  expect([...tried].sort()).toEqual(asked.sort());
+});
 
 it.each(parameters)('compute %s uses %s', async (method, _, [one, other]) => {
   const answers = await Promise.all([one, other].map((change) => compute(method, { ...valid[method], ...change })));

@@ -35,8 +35,9 @@ import { gapsClosedUp } from './year-steps.ts';
  *           AIC = −2 logL + 2k, BIC = −2 logL + k log n; Durbin–Watson of √w·e; Cook's distance with classical σ².
  *           chosenLag where the lag was chosen from the data, with the caveat automatic-lag.
  *           null stands for what does not exist (exact fit, constant y, a row with leverage 1), with a caveat
- * @throws   InputError wrong-length, not-finite, too-few-observations, lag-missing, option-unused, out-of-range;
- *           NumericError rank-deficient, ill-conditioned, leverage-of-one
+ * @throws   InputError wrong-length, not-finite, too-few-observations, lag-missing, option-unused, gap-in-years,
+ *           out-of-range; NumericError rank-deficient, ill-conditioned, leverage-of-one, and for a chosen lag or
+ *           prewhitening exact-fit, no-automatic-lag, not-stationary
  *
  * Differs  R's AIC and BIC count σ as a coefficient: larger by 2 and by log n. Without an intercept, R's and
  *          statsmodels' "R²" is the uncentred one. statsmodels' F under a robust covariance is a Wald test

@@ -28,9 +28,11 @@ const record: Data = { x: co2Ppm.map((ppm) => Math.log(ppm / co2Ppm[0]!)), y: te
 async function series(): Promise<Data[]> {
   const lake = await r.numbers('list(x = time(LakeHuron), y = LakeHuron)');
   const co2 = await r.numbers('list(x = 1959:1997, y = aggregate(co2, FUN = mean))');
+  const monthly = await r.numbers('list(x = time(co2) - 1978, y = co2 - mean(co2))');
   return [
     { x: lake['x']!, y: lake['y']!, years: lake['x']! },
     { x: co2['x']!.map((year) => year - 1978), y: co2['y']!, years: co2['x']! },
+    { x: monthly['x']!, y: monthly['y']!, years: monthly['y']!.map((_, row) => row) },
     record,
     { ...record, weights: years.map((_, i) => [0.25, 1, 3][i % 3]!) },
     { ...record, x: [record.x as number[], years.map((year) => Math.sin(year))] },
@@ -81,7 +83,7 @@ async function compare({ years, ...data }: Data, options: Options): Promise<numb
   return nRefused;
 }
 
-describe('Newey–West against base R: LakeHuron, co2, the real record plain, weighted and with two predictors', () => {
+describe('Newey–West against base R: LakeHuron, co2 by year and by month, the real record plain, weighted and with two predictors', () => {
   it.each<Options>([
     { lag: 'newey-west-1994' },
     { lag: 'newey-west-1994', smallSample: true },

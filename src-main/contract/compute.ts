@@ -21,7 +21,10 @@ import { specificationTestMethods } from './specification-tests.ts';
 
 const covariance = z.object({
   kind: z.enum(['classical', 'hc0', 'hc1', 'hc2', 'hc3', 'newey-west']),
-  lag: z.int().min(0).optional(),
+  /** Newey–West only: rows, or the automatic choice of Newey & West 1994 for Bartlett weights. */
+  lag: z.union([z.int().min(0), z.literal('newey-west-1994')]).optional(),
+  /** Newey–West only: a VAR(1) of the scores, without a limit on its singular values; none unless given. */
+  prewhiten: z.literal('var1').optional(),
   smallSample: z.boolean().optional(),
 });
 const seed = z.int().min(0).max(4_294_967_295);

@@ -6,6 +6,7 @@ export const estimatorId = z.enum([
   'ols-classical',
   'ols-hc3',
   'ols-newey-west',
+  'ols-newey-west-1994',
   'ols-free-intercept',
   'gls-ar1-ml',
   'gls-ar1-reml',

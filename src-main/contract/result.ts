@@ -30,6 +30,8 @@ export const regressionAnswer = z.object({
   fitted: numbers,
   leverage: numbers,
   cooksDistance: z.array(z.number().nullable()),
+  /** Where the lag of Newey–West errors was chosen from the data. */
+  chosenLag: z.int().optional(),
   caveats: z.array(caveat),
 });
 export type RegressionAnswer = z.infer<typeof regressionAnswer>;

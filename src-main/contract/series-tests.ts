@@ -23,7 +23,7 @@ export type ResidualTestsInput = z.infer<typeof residualTestsInput>;
 const residualTestsValue = z.object({
   /** Lag-one correlation of the residuals, demeaned. */
   lag1: z.number(),
-  /** n (1 − r)/(1 + r). */
+  /** n (1 − r)/(1 + r), Santer et al. 2000. */
   nEff: z.number(),
   durbinWatson: z.number(),
   /** Exact for this design, one-sided against likeness, with the bounds of the 5 % test; null beyond 400 rows. */
@@ -37,6 +37,31 @@ const residualTestsValue = z.object({
   caveats,
 });
 export type ResidualTestsValue = z.infer<typeof residualTestsValue>;
+
+const effectiveSampleSizeInput = z.object({
+  /** Residuals of a fit, or a series without trend. */
+  values: column,
+  /** How far back the definition looks that takes the autocorrelations as they are. */
+  lags: z.int().min(1),
+  years: rowYears.optional(),
+});
+export type EffectiveSampleSizeInput = z.infer<typeof effectiveSampleSizeInput>;
+
+const effectiveSampleSizeValue = z.object({
+  nObs: z.int(),
+  /** Lag-one correlation, demeaned. */
+  lag1: z.number(),
+  /** n (1 − r)/(1 + r): of a mean or a trend in a long record. */
+  santer2000: z.number(),
+  /** n / [1 + 2 Σ (1 − k/n) r^k] over all lags: of the mean of an AR(1) process. */
+  ar1Mean: z.number(),
+  /** n / [1 + 2 Σ (1 − k/n) r_k] up to the given lags; null where the sum is not positive. */
+  bayleyHammersley1946: z.number().nullable(),
+  /** n (1 − r − 0.68/√n)/(1 + r + 0.68/√n): of a trend in a short record; null where r + 0.68/√n reaches 1. */
+  nychka2000: z.number().nullable(),
+  caveats,
+});
+export type EffectiveSampleSizeValue = z.infer<typeof effectiveSampleSizeValue>;
 
 const adfInput = z.object({ y: column, lags, deterministic: z.enum(['none', 'constant', 'trend']) });
 
@@ -76,6 +101,7 @@ const kpssValue = z.object({
 
 /** Tests of a series in time, and of what a line leaves over. */
 export const seriesTestMethods = {
+  'effective-sample-size': { input: effectiveSampleSizeInput, value: effectiveSampleSizeValue },
   'residual-tests': { input: residualTestsInput, value: residualTestsValue },
   adf: { input: adfInput, value: adfValue },
   kpss: { input: kpssInput, value: kpssValue },

@@ -20,7 +20,7 @@ import { chowTest } from '../statistics/chow-test.ts';
 import { cusum } from '../statistics/cusum.ts';
 import { deming } from '../statistics/deming.ts';
 import { designColumns } from '../statistics/design-columns.ts';
-import { deviations } from '../statistics/deviations.ts';
+import { effectiveSampleSizes } from '../statistics/effective-sample-sizes.ts';
 import { engleGranger } from '../statistics/engle-granger.ts';
 import { glsArma11 } from '../statistics/gls-arma11.ts';
 import { huber } from '../statistics/huber.ts';
@@ -45,6 +45,7 @@ type Methods = {
 /** The pure function behind each method: data in, data out, the same digits wherever it runs. */
 export const methods: Methods = {
   regression: (input) => regression(input),
+  'effective-sample-size': (input) => effectiveSampleSizes(input),
   'residual-tests': (input) => residualTests(input),
   'gls-ar1': (input) => ar1Line(input),
   'gls-arma11': (input) => glsArma11(input),
@@ -73,8 +74,6 @@ export const methods: Methods = {
 };
 
 function theilSenAt95(input: ComputeInput<'theil-sen'>): ComputeValue<'theil-sen'> {
-  // Where all y are tied, every pair slope is 0 and the interval would claim to know that exactly.
-  deviations('theilSen', 'y', input.y, { atLeast: 3 });
   const { confidence: confidence95, ...fit } = theilSen({ ...input, levelPercent: 95 });
   return { ...fit, confidence95 };
 }

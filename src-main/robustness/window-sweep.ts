@@ -63,6 +63,7 @@ export function windowSweep(request: WindowSweepRequest, onProgress?: (shareDone
       where: 'windowSweep, x',
       expected: 'a predictor that varies within the windows',
       received: `one value in each of ${nWindows} windows`,
+      hint: 'A slope needs a predictor that varies: check that the right series was chosen.',
     });
   }
   const nLeftOut = nWindows - windows.length;
@@ -126,7 +127,12 @@ function checkedRecord({ years, x, co2Ppm, y, minYears, anchor, covariance }: Wi
     finiteNumber(caller, 'anchor.years', anchor.years, { isWhole: true, atLeast: 1, atMost: minYears });
   }
   if (covariance?.kind === 'newey-west') {
-    finiteNumber(caller, 'covariance.lag', covariance.lag, { isWhole: true, atLeast: 0, atMost: minYears - 1 });
+    finiteNumber(caller, 'covariance.lag', covariance.lag, {
+      isWhole: true,
+      atLeast: 0,
+      atMost: minYears - 1,
+      hint: 'Choose a smaller lag or longer windows.',
+    });
   }
   const checkedY = finiteValues(caller, 'y', y, { length: nYears });
   const given = co2Ppm

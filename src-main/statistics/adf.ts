@@ -1,8 +1,8 @@
 import type { Caveat } from '../contract/primitives.ts';
 import { dickeyFullerT } from './dickey-fuller-t.ts';
-import { finiteValues } from './finite-values.ts';
 import type { Deterministic } from './mackinnon-tables.ts';
 import { mackinnonCritical, mackinnonP, type CriticalValues } from './mackinnon.ts';
+import { varyingValues } from './varying-values.ts';
 import { gapsClosedUp } from './year-steps.ts';
 
 export interface AdfRequest {
@@ -32,11 +32,11 @@ export interface AdfTest {
  *          distribution under γ = 0 is not Student's
  * Assumes  values in order of time, equally spaced, without gaps
  *
- * @param y     [nObs] finite
+ * @param y     [nObs] finite, not all equal
  * @param lags  L, 0 or more; every lag costs a row
  * @returns  p after MacKinnon 1994 (asymptotic); critical values after MacKinnon 2010 at the rows used;
  *           caveat gaps-closed-up
- * @throws   InputError too-few-values, not-finite, out-of-range, unordered-years; NumericError rank-deficient, exact-fit
+ * @throws   InputError too-few-values, not-finite, out-of-range, unordered-years; NumericError constant, rank-deficient, exact-fit
  *
  * Differs  R's tseries::adf.test always has a trend and interpolates p in a table; statsmodels' adfuller chooses the lags
  *          itself unless autolag=None
@@ -44,7 +44,7 @@ export interface AdfTest {
  * Checked  test/reference/statistics/unit-root.test.ts (B: base R)
  */
 export function adf({ y, lags, deterministic, years }: AdfRequest): AdfTest {
-  const series = finiteValues('adf', 'y', y, { atLeast: 6 });
+  const series = varyingValues('adf', 'y', y, { atLeast: 6 });
   const { statistic, nObs } = dickeyFullerT('adf', series, lags, deterministic);
   return {
     statistic,

@@ -23,7 +23,12 @@ import { sum, sumOfProducts } from './summation.ts';
 export function autocorrelations(values: ArrayLike<number>, times: ArrayLike<number>, maxLag: number): number[] {
   const e = deviations('autocorrelations', 'values', values, { atLeast: 3 });
   const at = finiteValues('autocorrelations', 'times', times, { length: e.length });
-  finiteNumber('autocorrelations', 'maxLag', maxLag, { isWhole: true, atLeast: 1, atMost: e.length - 1 });
+  finiteNumber('autocorrelations', 'maxLag', maxLag, {
+    isWhole: true,
+    atLeast: 1,
+    atMost: e.length - 1,
+    hint: 'Take fewer lags or a longer series.',
+  });
   const rowAt = new Map(Array.from(at, (time, row) => [time, row]));
   const squares = sumOfProducts(e, e);
   return Array.from({ length: maxLag }, (_, k) => {

@@ -34,7 +34,12 @@ export function breuschGodfrey(
 ): LagTest {
   const residuals = finiteValues('breuschGodfrey', 'residuals', fit.residuals, { atLeast: 3 });
   const nObs = residuals.length;
-  finiteNumber('breuschGodfrey', 'lags', lags, { isWhole: true, atLeast: 1, atMost: nObs - fit.columns.length - 1 });
+  finiteNumber('breuschGodfrey', 'lags', lags, {
+    isWhole: true,
+    atLeast: 1,
+    atMost: nObs - fit.columns.length - 1,
+    hint: 'Take fewer lags or a longer series.',
+  });
   const squares = sumOfProducts(residuals, residuals);
   refuseExactFit('breuschGodfrey', squares);
   const lagged = Array.from({ length: lags }, (_, j) => residuals.map((_, t) => residuals[t - j - 1] ?? 0));

@@ -39,7 +39,12 @@ export function chowTest({ x, y: givenY, intercept, breakRow }: ChowRequest): Ch
   const y = finiteValues(caller, 'y', givenY);
   const columns = designColumns(caller, x, y.length, intercept);
   const k = columns.length;
-  finiteNumber(caller, 'breakRow', breakRow, { isWhole: true, atLeast: k + 1, atMost: y.length - k - 1 });
+  finiteNumber(caller, 'breakRow', breakRow, {
+    isWhole: true,
+    atLeast: k + 1,
+    atMost: y.length - k - 1,
+    hint: 'Each part needs more rows than coefficients: put the break elsewhere, or take a longer window.',
+  });
   const fitOf = (from: number, to: number) =>
     leastSquares({ columns: columns.map((column) => column.subarray(from, to)), y: y.subarray(from, to), caller });
   const [all, before, after] = [fitOf(0, y.length), fitOf(0, breakRow), fitOf(breakRow, y.length)];

@@ -22,6 +22,7 @@ export function designColumns(
       where: `${caller}, x`,
       expected: 'at least one column',
       received: 'none',
+      hint: 'Give one column as numbers, or several as a list of columns.',
     });
   }
   const names = predictors.length === 1 ? ['x'] : predictors.map((_, j) => `x[${j}]`);

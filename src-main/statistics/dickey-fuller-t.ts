@@ -25,7 +25,12 @@ export function dickeyFullerT(
 ): { statistic: number; nObs: number } {
   const nDeterministic = { none: 0, constant: 1, trend: 2 }[deterministic];
   const mostLags = Math.floor((series.length - nDeterministic - 3) / 2);
-  finiteNumber(caller, 'lags', lags, { isWhole: true, atLeast: 0, atMost: mostLags });
+  finiteNumber(caller, 'lags', lags, {
+    isWhole: true,
+    atLeast: 0,
+    atMost: mostLags,
+    hint: 'Take fewer lags or a longer series.',
+  });
 
   const differences = series.subarray(1).map((value, t) => value - series[t]!);
   const response = differences.subarray(lags);

@@ -69,6 +69,8 @@ export interface NumberRequirement {
   atLeast?: number;
   atMost?: number;
   isWhole?: boolean;
+  /** The way out, where there is a better one than another number. */
+  hint?: string;
 }
 
 /** The same door for a single number. @throws InputError out-of-range */
@@ -82,6 +84,7 @@ export function finiteNumber(
     atLeast = -Infinity,
     atMost = Infinity,
     isWhole = false,
+    hint,
   }: NumberRequirement = {},
 ): number {
   const isInside = value > above && value < below && value >= atLeast && value <= atMost;
@@ -97,5 +100,6 @@ export function finiteNumber(
     where: `${caller}, ${name}`,
     expected: [isWhole ? 'a whole number' : 'a finite number', bounds.join(' and ')].filter(Boolean).join(' '),
     received: String(value),
+    hint: hint ?? `Give ${isWhole ? 'a whole number' : 'a number'}${bounds.length > 0 ? ' within these bounds' : ''}.`,
   });
 }

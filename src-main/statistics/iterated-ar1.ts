@@ -49,7 +49,7 @@ export function iteratedAr1(
 ): IteratedAr1Fit {
   const y = Float64Array.from(request.y);
   const columns = designColumns(caller, request.x, y.length, request.intercept);
-  refuseTooFew(caller, freed(y, 0).length, columns.length);
+  refuseTooFew(caller, y.length, freed(y, 0).length, columns.length);
   let rho = 0;
   for (let nIterations = 1; nIterations <= MOST_ITERATIONS; nIterations++) {
     const fit = leastSquares({ columns: columns.map((c) => freed(c, rho)), y: freed(y, rho), caller });
@@ -88,15 +88,22 @@ export function iteratedAr1(
   });
 }
 
-function refuseTooFew(caller: string, nRows: number, nCoefficients: number): void {
-  if (nRows > nCoefficients) return;
-  throw new InputError({
-    code: 'too-few-observations',
-    where: caller,
-    expected: `more than ${nCoefficients} freed rows for ${nCoefficients} coefficients`,
-    received: `${nRows}`,
-    hint: 'Take a longer window or fewer predictors.',
-  });
+/** ρ takes a degree of freedom of its own. */
+function refuseTooFew(caller: string, nObs: number, nFreed: number, nCoefficients: number): void {
+  const refuse = (expected: string, received: number) =>
+    new InputError({
+      code: 'too-few-observations',
+      where: caller,
+      expected,
+      received: String(received),
+      hint: 'Take a longer window or fewer predictors.',
+    });
+  if (nFreed <= nCoefficients) {
+    throw refuse(`more than ${nCoefficients} freed rows for ${nCoefficients} coefficients`, nFreed);
+  }
+  if (nObs <= nCoefficients + 1) {
+    throw refuse(`more than ${nCoefficients + 1} rows for ${nCoefficients} coefficients and ρ`, nObs);
+  }
 }
 
 function lagOneShare(

@@ -50,7 +50,12 @@ const CRITICAL = {
 export function kpss({ y, lags, deterministic, years }: KpssRequest): KpssTest {
   const series = finiteValues('kpss', 'y', y, { atLeast: 4 });
   const n = series.length;
-  finiteNumber('kpss', 'lags', lags, { isWhole: true, atLeast: 0, atMost: n - 1 });
+  finiteNumber('kpss', 'lags', lags, {
+    isWhole: true,
+    atLeast: 0,
+    atMost: n - 1,
+    hint: 'Take fewer lags or a longer series.',
+  });
   const columns = [series.map(() => 1), ...(deterministic === 'trend' ? [series.map((_, t) => t + 1)] : [])];
   const { residuals: e, residualSumOfSquares } = leastSquares({ columns, y: series, caller: 'kpss' });
   refuseExactFit('kpss', residualSumOfSquares, sumOfProducts(series, series));

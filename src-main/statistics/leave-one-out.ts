@@ -1,6 +1,8 @@
 import type { Caveat } from '../contract/primitives.ts';
+import { refuseExactFit } from './exact-fit.ts';
 import { finiteNumber } from './finite-values.ts';
 import { LEVERAGE_OF_ONE, type LeastSquaresFit } from './least-squares.ts';
+import { sumOfProducts } from './summation.ts';
 
 export interface LeaveOneOut {
   /** [nObs] the coefficient of the fit without that row; null where the row alone decides some coefficient. */
@@ -19,13 +21,16 @@ export interface LeaveOneOut {
  * @param fit    a least-squares fit, weighted or not
  * @param place  which coefficient, counted from 0 in the order of the fit's columns
  * @returns  caveat leverage-of-one names the rows (counted from 1) without which the columns are dependent
- * @throws   InputError out-of-range
+ * @throws   InputError out-of-range; NumericError exact-fit, whose most influential row would be one of rounding
  *
  * Source   Miller 1974, Ann. Stat. 2, 880–891; Belsley, Kuh & Welsch 1980, Regression Diagnostics, equation 2.1
  * Checked  test/unit/statistics/leave-one-out.test.ts (C: refits), test/reference/statistics/leave-one-out.test.ts (B: R's lm.influence)
  */
 export function leaveOneOut(fit: LeastSquaresFit, place: number): LeaveOneOut {
   finiteNumber('leaveOneOut', 'place', place, { isWhole: true, atLeast: 0, atMost: fit.nCoefficients - 1 });
+  if (fit.nObs > fit.nCoefficients) {
+    refuseExactFit('leaveOneOut', fit.residualSumOfSquares, sumOfProducts(fit.y, fit.y));
+  }
   const whole = fit.coefficients[place]!;
   const influence = fit.observationInfluence[place]!;
   const coefficients = Array.from(fit.residuals, (residual, i) => {

@@ -23,7 +23,12 @@ import { upperTailChiSquared } from './upper-tail-chi-squared.ts';
 export function ljungBox(values: ArrayLike<number>, lags: number, fitdf = 0): LagTest {
   const e = deviations('ljungBox', 'values', values, { atLeast: 3 });
   const nObs = e.length;
-  finiteNumber('ljungBox', 'lags', lags, { isWhole: true, atLeast: 1, atMost: nObs - 1 });
+  finiteNumber('ljungBox', 'lags', lags, {
+    isWhole: true,
+    atLeast: 1,
+    atMost: nObs - 1,
+    hint: 'Take fewer lags or a longer series.',
+  });
   finiteNumber('ljungBox', 'fitdf', fitdf, { isWhole: true, atLeast: 0, atMost: lags - 1 });
   const squares = sumOfProducts(e, e);
   let total = 0;

@@ -48,7 +48,12 @@ export function movingBlockBootstrap(
   const caller = 'movingBlockBootstrap';
   const y = finiteValues(caller, 'y', request.y, { atLeast: 3 });
   const columns = designColumns(caller, request.x, y.length, intercept);
-  finiteNumber(caller, 'blockLength', blockLength, { isWhole: true, atLeast: 1, atMost: y.length - 1 });
+  finiteNumber(caller, 'blockLength', blockLength, {
+    isWhole: true,
+    atLeast: 1,
+    atMost: y.length - 1,
+    hint: 'Take shorter blocks or a longer series.',
+  });
   finiteNumber(caller, 'draws', draws, { isWhole: true, atLeast: 2 });
   const fit = leastSquares({ columns, y, caller });
   refuseExactFit(caller, fit.residualSumOfSquares, sumOfProducts(y, y));

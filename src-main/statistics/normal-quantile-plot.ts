@@ -1,6 +1,6 @@
 import normalQuantile from '@stdlib/stats-base-dists-normal-quantile';
-import { deviations } from './deviations.ts';
 import { quantileOfSorted } from './quantile.ts';
+import { varyingValues } from './varying-values.ts';
 
 export interface NormalQuantilePlot {
   /** [nObs] of the standard normal, ascending. */
@@ -23,7 +23,7 @@ export interface NormalQuantilePlot {
  * Checked  test/reference/statistics/residual-plots.test.ts (B: R's qqnorm and qqline)
  */
 export function normalQuantilePlot(values: ArrayLike<number>): NormalQuantilePlot {
-  deviations('normalQuantilePlot', 'values', values, { atLeast: 3 });
+  varyingValues('normalQuantilePlot', 'values', values, { atLeast: 3 });
   const sorted = Float64Array.from(values).sort();
   const n = sorted.length;
   const a = n <= 10 ? 3 / 8 : 1 / 2;

@@ -6,7 +6,9 @@ import { varianceInflation } from './variance-inflation.ts';
 interface RegressionDoubts {
   fit: LeastSquaresFit;
   hasIntercept: boolean;
-  covariance: RegressionRequest['covariance'];
+  kind: RegressionRequest['covariance']['kind'];
+  /** Of Newey–West errors; null for others. */
+  lag: number | null;
   isExact: boolean;
   isConstant: boolean;
 }
@@ -19,7 +21,7 @@ interface RegressionDoubts {
  *          Welsch 1981, Am. Stat. 35, 234–242 (from memory)
  * Checked  test/unit/statistics/regression-caveats.test.ts, level C: each caveat on and off at its bound
  */
-export function regressionCaveats({ fit, hasIntercept, covariance, isExact, isConstant }: RegressionDoubts): Caveat[] {
+export function regressionCaveats({ fit, hasIntercept, kind, lag, isExact, isConstant }: RegressionDoubts): Caveat[] {
   const { nObs, nCoefficients, leverage } = fit;
   const caveats: Caveat[] = [];
   const add = (isDoubtful: boolean, code: string, detail: string) => {
@@ -68,19 +70,13 @@ export function regressionCaveats({ fit, hasIntercept, covariance, isExact, isCo
     `The columns are nearly dependent (pivot ratio ${fit.pivotRatio.toExponential(1)}): standard errors carry about ${Math.floor(15 + Math.log10(fit.pivotRatio))} digits.`,
   );
 
-  const lag = covariance.lag ?? 0;
   add(
-    covariance.kind === 'newey-west' && (lag + 1) / nObs > 0.1,
+    lag !== null && (lag + 1) / nObs > 0.1,
     'short-series-for-lag',
     `${nObs} rows are few for lag ${lag}: Newey–West errors are then too small on average.`,
   );
   add(
-    covariance.kind !== 'newey-west' && (covariance.lag !== undefined || covariance.smallSample !== undefined),
-    'option-unused',
-    `Lag and small-sample factor belong to newey-west; ${covariance.kind} does not use them.`,
-  );
-  add(
-    covariance.kind !== 'classical' && !isExact,
+    kind !== 'classical' && !isExact,
     'classical-f',
     'F and its p assume independent errors of one variance, unlike the standard errors beside them.',
   );

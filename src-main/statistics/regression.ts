@@ -2,12 +2,11 @@ import tQuantile from '@stdlib/stats-base-dists-t-quantile';
 import type { RegressionRequest } from '../contract/compute.ts';
 import type { RegressionAnswer } from '../contract/result.ts';
 import { InputError } from '../errors.ts';
+import { coefficientCovariance } from './coefficient-covariance.ts';
 import { designColumns } from './design-columns.ts';
 import { durbinWatson } from './durbin-watson.ts';
 import { isExactFit } from './exact-fit.ts';
-import { heteroskedasticCovariance } from './heteroskedastic-covariance.ts';
 import { LEVERAGE_OF_ONE, leastSquares, type LeastSquaresFit } from './least-squares.ts';
-import { neweyWest } from './newey-west.ts';
 import { regressionCaveats } from './regression-caveats.ts';
 import { sum, sumOfProducts } from './summation.ts';
 import { twoSidedP } from './two-sided-p.ts';
@@ -23,9 +22,10 @@ import { gapsClosedUp } from './year-steps.ts';
  * @param x        [nObs] or nPredictors × [nObs], finite, any unit
  * @param y        [nObs] finite
  * @param weights  [nObs] above 0; inverse error variances up to a common factor
- * @param years    [nObs] whole, increasing: with a gap among them, the caveat gaps-closed-up
- * @param covariance  of the coefficients; lag is required for newey-west; smallSample (false unless given) multiplies
- *                 the newey-west covariance by n/(n − k)
+ * @param years    [nObs] whole, increasing: with a gap among them newey-west counts the calendar, with the caveat
+ *                 gaps-by-calendar; Durbin–Watson does not, with the caveat gaps-closed-up
+ * @param covariance  of the coefficients; for newey-west alone: lag, a number of rows or newey-west-1994 to have it chosen
+ *                 from the data; prewhiten, by a VAR(1); smallSample (false unless given) multiplies by n/(n − k)
  * @returns  arrays in the order intercept, predictors. With k coefficients:
  *           t distribution with n − k degrees of freedom for p and the 95 % intervals, whatever the covariance;
  *           R² centred 1 − RSS/Σw(y − ȳ)² and uncentred 1 − RSS/Σwy², both always; adjusted R² is 1 − (1 − R²)(n − 1)/(n − k)
@@ -33,9 +33,11 @@ import { gapsClosedUp } from './year-steps.ts';
  *           F from sums of squares under classical assumptions, whatever the covariance: against the mean alone with an
  *           intercept, against zero without; log-likelihood of normal errors at σ² = RSS/n;
  *           AIC = −2 logL + 2k, BIC = −2 logL + k log n; Durbin–Watson of √w·e; Cook's distance with classical σ².
+ *           chosenLag where the lag was chosen from the data, with the caveat automatic-lag.
  *           null stands for what does not exist (exact fit, constant y, a row with leverage 1), with a caveat
- * @throws   InputError wrong-length, not-finite, too-few-observations, lag-missing, option-unused, out-of-range;
- *           NumericError rank-deficient, ill-conditioned, leverage-of-one
+ * @throws   InputError wrong-length, not-finite, too-few-observations, lag-missing, option-unused, gap-in-years,
+ *           out-of-range; NumericError rank-deficient, ill-conditioned, leverage-of-one, and for a chosen lag or
+ *           prewhitening exact-fit, no-automatic-lag, not-stationary
  *
  * Differs  R's AIC and BIC count σ as a coefficient: larger by 2 and by log n. Without an intercept, R's and
  *          statsmodels' "R²" is the uncentred one. statsmodels' F under a robust covariance is a Wald test
@@ -65,7 +67,8 @@ export function regression({ x, y, intercept, weights, covariance, years }: Regr
   const squares = sumsOfSquares(fit);
   const isExact = isExactFit(residualSumOfSquares, squares.aboutZero);
   const isConstant = isExactFit(squares.aboutMean, squares.aboutZero);
-  const covarianceMatrix = coefficientCovariance(fit, covariance, residualSumOfSquares / degreesOfFreedom);
+  const { matrix, lag, caveats } = coefficientCovariance(fit, { covariance, hasIntercept: intercept, years });
+  const covarianceMatrix = squareRows(matrix, nCoefficients);
   const coefficients = [...fit.coefficients];
   const standardErrors = coefficients.map((_, j) => Math.sqrt(covarianceMatrix[j]![j]!));
   const t = coefficients.map((value, j) => (isExact || standardErrors[j] === 0 ? null : value / standardErrors[j]!));
@@ -106,16 +109,17 @@ export function regression({ x, y, intercept, weights, covariance, years }: Regr
     fitted: [...fit.fitted],
     leverage: [...fit.leverage],
     cooksDistance: isExact ? Array<null>(nObs).fill(null) : cooksDistance(fit, residualSumOfSquares / degreesOfFreedom),
+    ...(covariance.lag === 'newey-west-1994' && lag !== null ? { chosenLag: lag } : {}),
     caveats: [
-      ...regressionCaveats({ fit, hasIntercept: intercept, covariance, isExact, isConstant }),
-      ...gapsClosedUp('regression', years, nObs, orderedFigures(covariance.kind)),
+      ...regressionCaveats({ fit, hasIntercept: intercept, kind: covariance.kind, lag, isExact, isConstant }),
+      ...caveats,
+      ...gapsClosedUp('regression', years, nObs, 'Terms of Durbin–Watson'),
     ],
   };
 }
 
-/** Those that take a row's neighbours for the years beside it. */
-function orderedFigures(kind: RegressionRequest['covariance']['kind']): string {
-  return kind === 'newey-west' ? 'Newey–West errors and Durbin–Watson' : 'Terms of Durbin–Watson';
+function squareRows(flat: Float64Array, k: number): number[][] {
+  return Array.from({ length: k }, (_, j) => [...flat.subarray(j * k, (j + 1) * k)]);
 }
 
 /** Σ w·y² and Σ w·(y − ȳ)², ȳ the weighted mean. */
@@ -124,43 +128,6 @@ function sumsOfSquares({ y, weights }: LeastSquaresFit): { aboutZero: number; ab
   const centre = sumOfProducts(y, ones) / sum(ones);
   const aboutCentre = (c: number) => sum(y.map((value, i) => ones[i]! * (value - c) ** 2));
   return { aboutZero: aboutCentre(0), aboutMean: aboutCentre(centre) };
-}
-
-function coefficientCovariance(
-  fit: LeastSquaresFit,
-  { kind, lag, smallSample = false }: RegressionRequest['covariance'],
-  residualVariance: number,
-): number[][] {
-  const k = fit.nCoefficients;
-  const flat = covarianceByKind();
-  return Array.from({ length: k }, (_, j) => [...flat.subarray(j * k, (j + 1) * k)]);
-
-  function covarianceByKind(): Float64Array {
-    if (kind !== 'newey-west') refuseUnused({ kind, lag, smallSample });
-    if (kind === 'classical') return fit.unscaledCovariance.map((value) => value * residualVariance);
-    if (kind !== 'newey-west') return heteroskedasticCovariance(fit, kind);
-    if (lag !== undefined) return neweyWest(fit, { lag, smallSample });
-    throw new InputError({
-      code: 'lag-missing',
-      where: 'regression, covariance.lag',
-      expected: 'a whole number of rows for newey-west',
-      received: 'none',
-      hint: 'A common rule of thumb is floor(4 (n/100)^(2/9)); state the lag beside the figure.',
-    });
-  }
-}
-
-/** Options of Newey–West errors would be passed over: whoever gives them takes the errors to allow for them. */
-function refuseUnused({ kind, lag, smallSample }: RegressionRequest['covariance']): void {
-  if (lag === undefined && !smallSample) return;
-  const option = lag === undefined ? 'smallSample' : 'lag';
-  throw new InputError({
-    code: 'option-unused',
-    where: `regression, covariance.${option}`,
-    expected: `none for ${kind} errors`,
-    received: String(lag ?? smallSample),
-    hint: 'Ask for newey-west, or leave it out.',
-  });
 }
 
 function normalLogLikelihood({ nObs, residualSumOfSquares, weights }: LeastSquaresFit): number {

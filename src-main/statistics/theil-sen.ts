@@ -1,8 +1,9 @@
 import normalQuantile from '@stdlib/stats-base-dists-normal-quantile';
 import type { Caveat } from '../contract/primitives.ts';
-import { InputError, NumericError } from '../errors.ts';
-import { finiteNumber, finiteValues } from './finite-values.ts';
+import { InputError } from '../errors.ts';
+import { finiteNumber } from './finite-values.ts';
 import { quantileOfSorted } from './quantile.ts';
+import { varyingValues } from './varying-values.ts';
 
 export interface TheilSenRequest {
   x: ArrayLike<number>;
@@ -30,7 +31,7 @@ const MOST_ROWS = 5000;
  *          σ² = [n(n−1)(2n+5) − Σ_ties k(k−1)(2k+5)]/18 of Kendall's statistic, ties of x and of y taken off
  * Assumes  independent errors for the interval: with positively correlated errors it is too narrow
  *
- * @param x, y  [3 ≤ nObs ≤ 5000] finite; x not constant
+ * @param x, y  [3 ≤ nObs ≤ 5000] finite; neither constant
  * @returns  caveats no-interval, tied
  * @throws   InputError wrong-length, too-few-values, too-many-values, not-finite, out-of-range; NumericError constant
  *
@@ -40,8 +41,9 @@ const MOST_ROWS = 5000;
  * Checked  test/reference/statistics/theil-sen.test.ts (A: Sen's example; B: base R)
  */
 export function theilSen({ x: givenX, y: givenY, levelPercent = 95 }: TheilSenRequest): TheilSenFit {
-  const x = finiteValues('theilSen', 'x', givenX, { atLeast: 3 });
-  const y = finiteValues('theilSen', 'y', givenY, { length: x.length });
+  const x = varyingValues('theilSen', 'x', givenX, { atLeast: 3 });
+  // Where all y are tied, every pair slope is 0 and the interval would claim to know that exactly.
+  const y = varyingValues('theilSen', 'y', givenY, { length: x.length });
   finiteNumber('theilSen', 'levelPercent', levelPercent, { above: 0, below: 100 });
   if (x.length > MOST_ROWS) {
     throw new InputError({
@@ -53,15 +55,6 @@ export function theilSen({ x: givenX, y: givenY, levelPercent = 95 }: TheilSenRe
     });
   }
   const slopes = pairSlopes(x, y);
-  if (slopes.length === 0) {
-    throw new NumericError({
-      code: 'constant',
-      where: 'theilSen, x',
-      expected: 'values that are not all equal',
-      received: `${x.length} times ${x[0]}`,
-      hint: 'A slope needs two different x.',
-    });
-  }
   const slope = quantileOfSorted(slopes, 0.5);
   const intercept = quantileOfSorted(y.slice().sort(), 0.5) - slope * quantileOfSorted(x.slice().sort(), 0.5);
   const confidence = senInterval(x, y, slopes, levelPercent);
@@ -107,7 +100,8 @@ function caveatsOf(
     caveats.push({ code: 'no-interval', detail });
   }
   const nSame = slopes.filter((value) => value === slope).length;
-  if (nSame > slopes.length / 10) {
+  // One of them is the median itself.
+  if (nSame > 1 && nSame > slopes.length / 10) {
     const detail = `${nSame} of ${slopes.length} pair slopes equal the median: rounded data make the interval coarse.`;
     caveats.push({ code: 'tied', detail });
   }

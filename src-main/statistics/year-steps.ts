@@ -45,14 +45,22 @@ export function gapsClosedUp(
   nObs: number,
   figures: string,
 ): Caveat[] {
+  const missing = missingYears(caller, years, nObs);
+  if (missing === null) return [];
+  return [
+    { code: 'gaps-closed-up', detail: `${missing} ${figures} take the years on either side of a gap for neighbours.` },
+  ];
+}
+
+/**
+ * How many years are missing between the first row and the last, as a sentence; null for none.
+ *
+ * @throws   as `yearSteps`
+ */
+export function missingYears(caller: string, years: ArrayLike<number> | undefined, nObs: number): string | null {
   const steps = yearSteps(caller, years, nObs);
   const nGaps = steps.filter((step) => step > 1).length;
-  if (nGaps === 0) return [];
+  if (nGaps === 0) return null;
   const nMissing = steps.reduce((total, step) => total + step - 1, 0);
-  return [
-    {
-      code: 'gaps-closed-up',
-      detail: `${nMissing} ${nMissing === 1 ? 'year is' : 'years are'} missing in ${nGaps} ${nGaps === 1 ? 'gap' : 'gaps'}. ${figures} take the years on either side of a gap for neighbours.`,
-    },
-  ];
+  return `${nMissing} ${nMissing === 1 ? 'year is' : 'years are'} missing in ${nGaps} ${nGaps === 1 ? 'gap' : 'gaps'}.`;
 }

@@ -2,6 +2,7 @@ import { InputError, NumericError } from '../errors.ts';
 import { finiteNumber, finiteValues } from './finite-values.ts';
 import { leastSquares } from './least-squares.ts';
 import { sum, sumOfProducts } from './summation.ts';
+import { varyingValues } from './varying-values.ts';
 
 type OneOrEach = number | ArrayLike<number>;
 
@@ -47,7 +48,7 @@ const MOST_ITERATIONS = 1000;
  * @param sx, sy at least 0, not both 0 in a row; in the units of x and y
  * @param r      −1 < r < 1
  * @throws   InputError wrong-length, not-finite, negative, no-error, out-of-range; NumericError rank-deficient for a
- *           constant x, not-converged
+ *           constant x, constant for tied y, not-converged
  *
  * Differs  several standard errors are published for this line. slopeStandardError is that of York et al. 2004,
  *          equation 13, at the adjusted points (also the maximum-likelihood one); the scaled one is the same times
@@ -58,7 +59,8 @@ const MOST_ITERATIONS = 1000;
 export function york(request: YorkRequest): YorkFit {
   const x = finiteValues('york', 'x', request.x, { atLeast: 3 });
   const n = x.length;
-  const y = finiteValues('york', 'y', request.y, { length: n });
+  // The errors scaled to the scatter of tied y would claim to know the slope exactly.
+  const y = varyingValues('york', 'y', request.y, { length: n });
   const sx = forEachRow('sx', request.sx, n, true);
   const sy = forEachRow('sy', request.sy, n, true);
   const r = forEachRow('r', request.r ?? 0, n, false);

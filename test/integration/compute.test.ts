@@ -9,6 +9,8 @@ const x = Array.from({ length: 24 }, (_, t) => t / 10);
 const y = x.map((value, t) =>
   Number((0.4 + 1.7 * value + 0.2 * Math.sin(t * 0.9) + 0.05 * Math.cos(t * 2.3)).toFixed(4)),
 );
+/** The wiggle alone. */
+const wiggle = x.map((value, t) => y[t]! - 0.4 - 1.7 * value);
 const same = <Value>(value: Value, length = x.length): Value[] => Array.from({ length }, () => value);
 const co2Ppm = x.map((_, t) => 380 + t);
 const methane = { ch4Ppb: 1850, ch4RefPpb: 729 };
@@ -33,6 +35,8 @@ async function compute(method: string, input: object): Promise<{ value?: unknown
 }
 
 const valid = {
+  regression: { x, y, intercept: true, covariance: { kind: 'newey-west', lag: 2 } },
+  'effective-sample-size': { values: wiggle, lags: 3 },
   'residual-tests': { x, y, intercept: true, lags: 3 },
   'gls-ar1': { x, y, intercept: true, estimator: 'ml' },
   'gls-arma11': { x, y, intercept: true, estimator: 'ml' },
@@ -76,7 +80,7 @@ describe.each(methods)('compute %s', (method) => {
   });
 
   it('refuses a missing value, and says how one is left out', async () => {
-    const column = method === 'phase-surrogates' ? 'values' : method === 'forcing' ? 'co2Ppm' : 'y';
+    const column = 'values' in valid[method] ? 'values' : 'co2Ppm' in valid[method] ? 'co2Ppm' : 'y';
     const { error } = await compute(method, { ...valid[method], [column]: without(5) });
     expect(error).toMatchObject({ code: 'input-form', where: `${method}.${column}[5]`, received: 'null' });
     expect(error?.hint).toContain('Leave a row with a missing value out');
@@ -84,9 +88,21 @@ describe.each(methods)('compute %s', (method) => {
 });
 
 /** Each parameter away from its plain value, twice: the answer moves, so the parameter arrives. */
+const errors = (covariance: object) => ({ covariance: { kind: 'newey-west', lag: 2, ...covariance } });
 const parameters: [Method, string, readonly [object, object]][] = [
+  ['effective-sample-size', 'lags', [{ lags: 1 }, { lags: 4 }]],
+  ['effective-sample-size', 'years', [{ years: withGapAt(5) }, {}]],
+  ['regression', 'covariance.lag', [errors({ lag: 4 }), errors({ lag: 'newey-west-1994' })]],
+  ['regression', 'covariance.lag', [errors({ lag: 0 }), errors({ lag: 3 })]],
+  ['regression', 'covariance.prewhiten', [errors({ prewhiten: 'var1' }), errors({})]],
+  ['regression', 'covariance.smallSample', [errors({ smallSample: true }), errors({ smallSample: false })]],
+  ['regression', 'covariance.kind', [{ covariance: { kind: 'hc0' } }, { covariance: { kind: 'hc3' } }]],
+  ['regression', 'years', [{ years: withGapAt(5) }, { years: withGapAt(15) }]],
+  ['regression', 'intercept', [{ intercept: false }, { intercept: true }]],
+  ['regression', 'weights', [{ weights: x.map((_, t) => 1 + t) }, { weights: x.map((_, t) => 30 - t) }]],
   ['residual-tests', 'lags', [{ lags: 2 }, { lags: 5 }]],
   ['residual-tests', 'breuschPaganKind', [{ breuschPaganKind: 'original' }, { breuschPaganKind: 'studentised' }]],
+  ['residual-tests', 'years', [{ years: withGapAt(5) }, {}]],
   ['residual-tests', 'fitdf', [{ fitdf: 1 }, { fitdf: 2 }]],
   ['residual-tests', 'intercept', [{ intercept: false }, { intercept: true }]],
   ['gls-ar1', 'estimator', [{ estimator: 'reml' }, { estimator: 'prais-winsten' }]],
@@ -109,6 +125,7 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['adf', 'lags', [{ lags: 0 }, { lags: 3 }]],
   ['adf', 'deterministic', [{ deterministic: 'none' }, { deterministic: 'constant' }]],
   ['engle-granger', 'lags', [{ lags: 0 }, { lags: 3 }]],
+  ['engle-granger', 'years', [{ years: withGapAt(5) }, {}]],
   ['engle-granger', 'deterministic', [{ x: y.toReversed() }, { x: y.toReversed(), deterministic: 'trend' }]],
   ['deming', 'delta', [{ delta: 0.5 }, { delta: 4 }]],
   ['attenuation', 'xErrorStandardDeviation', [{ xErrorStandardDeviation: 0.2 }, { xErrorStandardDeviation: 0.3 }]],
@@ -135,6 +152,19 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['kpss', 'lags', [{ lags: 0 }, { lags: 4 }]],
   ['kpss', 'deterministic', [{ deterministic: 'trend' }, { deterministic: 'constant' }]],
 ];
+
+/** Data, and what has one value only. */
+const noParameters = ['x', 'y', 'values', 'gls-arma11.estimator'];
+
+it.each(methods)('every parameter of %s is tried', (method) => {
+  const named = (name: string) => !noParameters.includes(name) && !noParameters.includes(`${method}.${name}`);
+  const covariance = Object.keys(computeMethods.regression.input.shape.covariance.shape);
+  const asked = Object.keys(computeMethods[method].input.shape)
+    .filter(named)
+    .flatMap((name) => (name === 'covariance' ? covariance.map((option) => `covariance.${option}`) : [name]));
+  const tried = new Set(parameters.filter(([of]) => of === method).map(([, name]) => name));
+  expect([...tried].sort()).toEqual(asked.sort());
+});
 
 it.each(parameters)('compute %s uses %s', async (method, _, [one, other]) => {
   const answers = await Promise.all([one, other].map((change) => compute(method, { ...valid[method], ...change })));

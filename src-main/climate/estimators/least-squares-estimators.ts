@@ -1,4 +1,5 @@
 import type { RegressionRequest } from '../../contract/compute.ts';
+import type { RegressionAnswer } from '../../contract/result.ts';
 import { regression } from '../../statistics/regression.ts';
 import { covarianceWords } from '../procedures/slope-estimates.ts';
 import { tWords, type ComparedLine, type Estimator, type SlopeEstimate } from './estimator.ts';
@@ -12,7 +13,10 @@ function leastSquaresSlope(
   covariance: RegressionRequest['covariance'],
   words: string,
 ): SlopeEstimate {
-  const answer = regression({ x, y, intercept, covariance });
+  return slopeEstimate(regression({ x, y, intercept, covariance }), intercept, words);
+}
+
+function slopeEstimate(answer: RegressionAnswer, intercept: boolean, words: string): SlopeEstimate {
   const place = intercept ? 1 : 0;
   const [low, high] = answer.confidence95[place] ?? [NaN, NaN];
   return {
@@ -22,6 +26,10 @@ function leastSquaresSlope(
     convention: `${words}; ${tWords(answer.degreesOfFreedom)}`,
     caveats: answer.caveats.filter(({ code }) => telling.includes(code)),
   };
+}
+
+function scoreWords(intercept: boolean): string {
+  return intercept ? 'the products of x and residual, the constant’s left out' : 'the products of x and residual';
 }
 
 const classical = covarianceWords({ kind: 'classical' });
@@ -61,6 +69,21 @@ export const leastSquaresEstimators: readonly Estimator[] = [
         line.intercept,
         serialCovariance,
         `${covarianceWords(serialCovariance)}; ${origin}`,
+      );
+    },
+  },
+  {
+    id: 'ols-newey-west-1994',
+    label: 'Least squares, Newey–West, lag from the data',
+    order: 'calendar',
+    estimate({ fit: { x, y, years }, intercept }) {
+      const covariance = { kind: 'newey-west', lag: 'newey-west-1994' } as const;
+      const answer = regression({ x, y, years, intercept, covariance });
+      const words = covarianceWords({ kind: 'newey-west', lag: answer.chosenLag ?? NaN, smallSample: false });
+      return slopeEstimate(
+        answer,
+        intercept,
+        `${words}; the lag is that of Newey & West 1994 for ${scoreWords(intercept)}`,
       );
     },
   },

@@ -24,7 +24,7 @@ export function recomputationLines({ claim, recomputation, derivation }: ClaimVi
   if (fit) {
     const { diagnostics } = fit;
     lines.push(
-      `  R² centred ${formatNumber(diagnostics.rSquaredCentred, { decimals: 3 })}, uncentred ${formatNumber(diagnostics.rSquaredUncentred, { decimals: 3 })} · Durbin–Watson ${formatNumber(diagnostics.durbinWatson, { decimals: 2 })} · effective years ${formatNumber(diagnostics.effectiveSampleSize, { decimals: 1 })} of ${diagnostics.nObs}`,
+      `  R² centred ${formatNumber(diagnostics.rSquaredCentred, { decimals: 3 })}, uncentred ${formatNumber(diagnostics.rSquaredUncentred, { decimals: 3 })} · Durbin–Watson ${formatNumber(diagnostics.durbinWatson, { decimals: 2 })} · effective years ${formatNumber(diagnostics.effectiveSampleSize, { decimals: 1 })} of ${diagnostics.nObs} (Santer et al. 2000)`,
     );
   }
   for (const { caption, columns, rows } of working) {

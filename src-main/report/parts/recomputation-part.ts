@@ -108,7 +108,11 @@ function fitPart(fit: Fit, slopeUnit: string): HtmlValue {
         ['Correlation r', optional(d.correlation), 'of the two variables'],
         ['Durbin–Watson', optional(d.durbinWatson), 'near 2 when neighbouring residuals are unrelated'],
         ['Lag-1 autocorrelation', optional(d.lag1Autocorrelation), 'of the residuals'],
-        ['Effective sample size', optional(d.effectiveSampleSize), `n (1 − r₁)/(1 + r₁), of n = ${d.nObs}`],
+        [
+          'Effective sample size',
+          optional(d.effectiveSampleSize),
+          `n (1 − r₁)/(1 + r₁), of n = ${d.nObs} (Santer et al. 2000)`,
+        ],
         ['Residual standard deviation', formatNumber(d.residualStandardDeviation), 'in the unit of the vertical axis'],
       ],
     ),

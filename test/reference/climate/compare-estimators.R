@@ -1,6 +1,6 @@
 # The slope under each estimator and its 95 % interval, in base R: lm, and the functions beside the tests of the single
 # estimators (gls-ar1.R, prais-winsten.R, cochrane-orcutt.R,
-# huber.R, theil-sen.R). Everything is in the slope's own unit.
+# huber.R, theil-sen.R, newey-west.R). Everything is in the slope's own unit.
 slope_of <- function(estimate, se, df) c(estimate, se, estimate - qt(0.975, df) * se, estimate + qt(0.975, df) * se)
 
 estimators_in_r <- function(x, y, intercept, lag, small, times) {
@@ -28,6 +28,10 @@ estimators_in_r <- function(x, y, intercept, lag, small, times) {
     `ols-classical` = slope_of(b, sqrt(vcov(fit)[place, place]), df),
     `ols-hc3` = slope_of(b, sandwich(t(X) %*% diag((e / (1 - h))^2) %*% X), df),
     `ols-newey-west` = slope_of(b, sandwich(t(X) %*% (kernel * outer(e, e)) %*% X) * (if (small) sqrt(n / df) else 1), df),
+    `ols-newey-west-1994` = {
+      hac <- newey_west(x, y, 1, intercept, rep(1, n), -1, FALSE, FALSE, times)
+      slope_of(b, sqrt(matrix(hac$covariance, place)[place, place]), df)
+    },
     `ols-free-intercept` = slope_of(coef(free)[2], sqrt(vcov(free)[2, 2]), n - 2),
     `gls-ar1-ml` = ar1(FALSE),
     `gls-ar1-reml` = ar1(TRUE),

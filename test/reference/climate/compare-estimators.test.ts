@@ -14,7 +14,15 @@ let r: RSession;
 let test: TestCore;
 beforeAll(async () => {
   const beside = (name: string) => new URL(name, import.meta.url);
-  const statistics = ['gls-ar1.R', 'prais-winsten.R', 'cochrane-orcutt.R', 'gls-arma11.R', 'huber.R', 'theil-sen.R'];
+  const statistics = [
+    'gls-ar1.R',
+    'prais-winsten.R',
+    'cochrane-orcutt.R',
+    'gls-arma11.R',
+    'huber.R',
+    'theil-sen.R',
+    'newey-west.R',
+  ];
   r = await startR(beside('compare-estimators.R'), ...statistics.map((name) => beside(`../statistics/${name}`)));
   test = await testCore();
   await test.ask('project.create', { title: 'Real record' });
@@ -38,6 +46,7 @@ const inOneCall: EstimatorId[] = [
   'ols-classical',
   'ols-hc3',
   'ols-newey-west',
+  'ols-newey-west-1994',
   'ols-free-intercept',
   'gls-ar1-ml',
   'gls-ar1-reml',

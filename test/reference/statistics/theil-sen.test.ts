@@ -47,18 +47,37 @@ describe('theilSen', () => {
     expect(caveats.map(({ code }) => code)).toEqual(['no-interval']);
   });
 
-  it('a constant y has slope 0, interval [0, 0] and a caveat', () => {
-    const fit = theilSen({ x: [1, 2, 3, 4, 5], y: [2, 2, 2, 2, 2] });
-    expect(fit).toMatchObject({ slope: 0, intercept: 2, confidence: [0, 0] });
-    expect(fit.caveats.map(({ code }) => code)).toEqual(['tied']);
+  it('does not call a short series tied whose pair slopes all differ, though one of few is the median', () => {
+    for (const y of [
+      [1, 3, 2],
+      [1, 3, 2, 7.3],
+      [1, 3, 2, 7.3, 4.6],
+    ]) {
+      const slopes = y.flatMap((later, j) => y.slice(0, j).map((earlier, i) => (later - earlier) / (j - i)));
+      expect(new Set(slopes).size).toBe(slopes.length);
+      expect(theilSen({ x: y.map((_, i) => i), y }).caveats.map(({ code }) => code)).not.toContain('tied');
+    }
+  });
+
+  it('calls a short series tied from the second equal pair slope on, beyond a tenth of them', () => {
+    const codes = (y: number[]) => theilSen({ x: y.map((_, i) => i), y }).caveats.map(({ code }) => code);
+    expect(codes([1, 2, 3])).toContain('tied');
+    // 21 pairs: two of them, then three have the median’s slope, 2.
+    expect(codes([0, 3, 7, 9, 5, 12, 12])).not.toContain('tied');
+    expect(codes([-2, 3, 7, 9, 11, 7, 11])).toContain('tied');
   });
 
   it.each([
     ['a constant x', { x: [3, 3, 3], y: [1, 2, 4] }, 'theilSen, x: expected values that are not all equal'],
+    ['nothing but ties in y', { x: [1, 2, 3], y: [2, 2, 2] }, 'theilSen, y: expected values that are not all equal'],
     ['two points', { x: [1, 2], y: [1, 2] }, 'at least 3'],
     ['unequal lengths', { x: [1, 2, 3], y: [1, 2] }, 'theilSen, y: expected 3 values'],
     ['a level of 100 %', { ...sen, levelPercent: 100 }, 'levelPercent'],
     ['a missing value', { ...sen, y: sen.y.with(1, NaN) }, 'theilSen, y[1]'],
-    ['too many rows', { x: Array.from({ length: 5001 }, (_, i) => i), y: new Float64Array(5001) }, 'at most 5000'],
+    [
+      'too many rows',
+      { x: Array.from({ length: 5001 }, (_, i) => i), y: Array.from({ length: 5001 }, (_, i) => i % 7) },
+      'at most 5000',
+    ],
   ])('refuses %s', (_, request, sentence) => expect(() => theilSen(request)).toThrow(sentence));
 });

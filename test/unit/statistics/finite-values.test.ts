@@ -47,6 +47,14 @@ describe('finiteValues', () => {
 });
 
 describe('finiteNumber', () => {
+  it('names the way out: its caller’s, or the bounds', () => {
+    const sentence = (requirement: Parameters<typeof finiteNumber>[3]) => () =>
+      finiteNumber('f', 'lag', 2.5, requirement);
+    expect(sentence({ isWhole: true, atMost: 9 })).toThrow(/2\.5\. Give a whole number within these bounds\.$/);
+    expect(sentence({ isWhole: true })).toThrow(/Give a whole number\.$/);
+    expect(sentence({ above: 3, hint: 'Take a longer series.' })).toThrow(/2\.5\. Take a longer series\.$/);
+  });
+
   it.each([
     ['none', 3, { isWhole: true, atLeast: 3, atMost: 3 }],
     ['out-of-range', 2.5, { isWhole: true }],

@@ -55,6 +55,11 @@ describe('leaveOneOut', () => {
     expect(leaveOneOut(fit, 1)).toMatchObject({ coefficients: [null, null], mostInfluential: null });
   });
 
+  it('refuses an exact fit, whose most influential row would be one of rounding', () => {
+    const fit = leastSquares({ columns, y: columns[1]!.map((value) => 3 - 2 * value) });
+    expect(() => leaveOneOut(fit, 1)).toThrow('leaveOneOut: expected residuals that are more than rounding');
+  });
+
   it('refuses a coefficient that the fit does not have', () => {
     expect(() => leaveOneOut(leastSquares({ columns, y }), 3)).toThrow('leaveOneOut, place');
   });

@@ -12,6 +12,12 @@ describe('praisWinsten', () => {
     expect(() => praisWinsten({ x, y: [0, 1, 2, 4, 8], intercept: false })).toThrow(/carry-over between −1 and 1/);
   });
 
+  it('refuses three rows for a line and ρ', () => {
+    expect(() => praisWinsten({ x: [0, 1, 3], y: [1, 3, 2], intercept: true })).toThrow(
+      'praisWinsten: expected more than 3 rows for 2 coefficients and ρ, but found 3',
+    );
+  });
+
   it('refuses a missing value, naming the place', () => {
     expect(() => praisWinsten({ x: [0, 1, 2, NaN], y: [1, 3, 5, 7], intercept: true })).toThrow(/x\[3\]/);
   });

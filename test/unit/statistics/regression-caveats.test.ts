@@ -3,16 +3,19 @@ import type { RegressionRequest } from '../../../src-main/contract/compute.ts';
 import { leastSquares } from '../../../src-main/statistics/least-squares.ts';
 import { regressionCaveats } from '../../../src-main/statistics/regression-caveats.ts';
 
+type Kind = RegressionRequest['covariance']['kind'];
+
 const wave = (nObs: number) => Array.from({ length: nObs }, (_, i) => [0, 1, -1, 2, -2, 1, 0][i % 7]! + i / 100);
 
 /** Caveats of a fit on alternating ±1, where every row has the same leverage. */
-function caveats(nObs: number, change: { covariance?: RegressionRequest['covariance']; x?: number[][] } = {}) {
+function caveats(nObs: number, change: { kind?: Kind; lag?: number; x?: number[][] } = {}) {
   const alternating = Array.from({ length: nObs }, (_, i) => (i % 2 === 0 ? 1 : -1));
   const columns = [Array<number>(nObs).fill(1), ...(change.x ?? [alternating])];
   return regressionCaveats({
     fit: leastSquares({ columns, y: wave(nObs) }),
     hasIntercept: true,
-    covariance: change.covariance ?? { kind: 'classical' },
+    kind: change.kind ?? 'classical',
+    lag: change.lag ?? null,
     isExact: false,
     isConstant: false,
   });
@@ -58,20 +61,16 @@ describe('regressionCaveats', () => {
   });
 
   it('short-series-for-lag when L + 1 exceeds a tenth of the rows', () => {
-    expect(codes(40, { covariance: { kind: 'newey-west', lag: 3 } })).toEqual(['classical-f']);
-    expect(codes(40, { covariance: { kind: 'newey-west', lag: 4 } })).toEqual(['short-series-for-lag', 'classical-f']);
-  });
-
-  it('option-unused for a lag or factor that the covariance has no use for', () => {
-    expect(codes(40, { covariance: { kind: 'classical', lag: 3 } })).toEqual(['option-unused']);
-    expect(codes(40, { covariance: { kind: 'hc3', smallSample: true } })).toEqual(['option-unused', 'classical-f']);
+    expect(codes(40, { kind: 'newey-west', lag: 3 })).toEqual(['classical-f']);
+    expect(codes(40, { kind: 'newey-west', lag: 4 })).toEqual(['short-series-for-lag', 'classical-f']);
   });
 
   it('ill-conditioned below a pivot ratio of 1e-7, with the digits that are left', () => {
     const fit = leastSquares({ columns: [Array<number>(40).fill(1), wave(40)], y: wave(40).toReversed() });
     const doubts = {
       hasIntercept: true,
-      covariance: { kind: 'classical' as const },
+      kind: 'classical' as const,
+      lag: null,
       isExact: false,
       isConstant: false,
     };
@@ -87,7 +86,8 @@ describe('regressionCaveats', () => {
     const found = regressionCaveats({
       fit,
       hasIntercept: false,
-      covariance: { kind: 'hc0' },
+      kind: 'hc0',
+      lag: null,
       isExact: true,
       isConstant: true,
     });

@@ -90,21 +90,90 @@ describe('regression', () => {
     expect(cooksDistance.slice(0, 4)).not.toContain(null);
   });
 
-  it('says which figures close gaps between the years up', () => {
-    const asked = { ...line, x: [1, 2, 4, 5], y: [1, 2, 6, 5] };
-    const details = (change: Partial<RegressionRequest>) =>
-      regression({ ...asked, ...change })
-        .caveats.filter(({ code }) => code === 'gaps-closed-up')
-        .map(({ detail }) => detail);
-    const years = [1990, 1991, 1993, 1994];
-    expect(details({ years })).toEqual([expect.stringContaining('Terms of Durbin–Watson take the years')]);
+  describe('with years', () => {
+    const asked = { ...line, x: [1, 2, 4, 5, 7, 8], y: [1, 2, 6, 5, 9, 8] };
+    const gapped = [1990, 1991, 1993, 1994, 1995, 1996];
+    const consecutive = [1990, 1991, 1992, 1993, 1994, 1995];
     const covariance = { kind: 'newey-west', lag: 1 } as const;
-    expect(details({ years, covariance })).toEqual([
-      expect.stringContaining('Newey–West errors and Durbin–Watson take'),
-    ]);
-    expect(details({ years: [1, 2, 3, 4], covariance })).toEqual([]);
-    expect(details({ covariance })).toEqual([]);
-    expect(() => regression({ ...asked, years: [1990, 1990, 1991, 1992] })).toThrow('regression, years[1]');
+    const aboutGaps = (change: Partial<RegressionRequest>) =>
+      regression({ ...asked, ...change })
+        .caveats.filter(({ code }) => code.startsWith('gaps'))
+        .map(({ code, detail }) => `${code}: ${detail}`);
+
+    it('says which figures close gaps up and which count the calendar', () => {
+      const closedUp = expect.stringMatching(
+        /^gaps-closed-up: 1 year is missing in 1 gap\. Terms of Durbin–Watson/,
+      ) as string;
+      expect(aboutGaps({ years: gapped })).toEqual([closedUp]);
+      expect(aboutGaps({ years: gapped, covariance })).toEqual([
+        expect.stringMatching(
+          /^gaps-by-calendar: 1 year is missing in 1 gap\. Newey–West errors take rows as lagged by j/,
+        ),
+        closedUp,
+      ]);
+      expect(aboutGaps({ years: consecutive, covariance })).toEqual([]);
+      expect(aboutGaps({ covariance })).toEqual([]);
+      expect(() => regression({ ...asked, years: [1990, 1990, 1991, 1992, 1993, 1994] })).toThrow(
+        'regression, years[1]',
+      );
+    });
+
+    it('counts a product of Newey–West errors only between years that are its lag apart, by hand', () => {
+      // Through the origin: influence ψ = x e / Σx². Pairs one year apart: all but rows 2 and 3, two years: (2,3), (3,5), (4,6).
+      const { residuals, coefficients } = regression({ ...asked, intercept: false });
+      const influence = residuals.map((e, t) => (asked.x[t]! * e) / 159);
+      expectClose(coefficients, [(1 + 4 + 24 + 25 + 63 + 64) / 159], rounding);
+      const products = (pairs: number[][]) =>
+        pairs.reduce((total, [a = 0, b = 0]) => total + influence[a]! * influence[b]!, 0);
+      const squares = products([0, 1, 2, 3, 4, 5].map((t) => [t, t]));
+      const apart = {
+        one: [
+          [0, 1],
+          [2, 3],
+          [3, 4],
+          [4, 5],
+        ],
+        two: [
+          [1, 2],
+          [2, 4],
+          [3, 5],
+        ],
+      };
+      const answer = regression({
+        ...asked,
+        intercept: false,
+        years: gapped,
+        covariance: { kind: 'newey-west', lag: 2 },
+      });
+      const variance = squares + 2 * ((2 / 3) * products(apart.one) + (1 / 3) * products(apart.two));
+      expectClose(answer.covarianceMatrix, [[variance]], rounding);
+    });
+
+    it('gives the same errors with consecutive years as without', () => {
+      const { caveats, ...figures } = regression({ ...asked, covariance, years: consecutive });
+      expect({ ...figures, caveats }).toEqual(regression({ ...asked, covariance }));
+    });
+  });
+
+  it('says which lag was chosen from the data, and from what', () => {
+    const y = [1, 3, 4, 3, 5, 8, 8, 7, 9, 12, 11, 13];
+    const asked = { ...line, x: y.map((_, t) => t), y };
+    const chosen = regression({ ...asked, covariance: { kind: 'newey-west', lag: 'newey-west-1994' } });
+    const lag = chosen.chosenLag ?? NaN;
+    const given = regression({ ...asked, covariance: { kind: 'newey-west', lag } });
+    expect(given).not.toHaveProperty('chosenLag');
+    expect(given.covarianceMatrix).toEqual(chosen.covarianceMatrix);
+    const detail = ({ caveats }: typeof chosen, code: string) => caveats.find((one) => one.code === code)?.detail;
+    // floor(4 (12/100)^(2/9)) = floor(2.50)
+    expect(detail(chosen, 'automatic-lag')).toMatch(
+      new RegExp(
+        `^Lag ${lag} was chosen from the data after Newey & West 1994 .* from 2 autocovariances, giving weight 1 to the score of each predictor and 0 to that of the constant\\.$`,
+      ),
+    );
+    expect(detail(chosen, 'short-series-for-lag')).toContain(`few for lag ${lag}`);
+    expect(detail(given, 'prewhitened')).toBeUndefined();
+    const whitened = regression({ ...asked, covariance: { kind: 'newey-west', lag: 2, prewhiten: 'var1' } });
+    expect(detail(whitened, 'prewhitened')).toContain('without a limit on its singular values');
   });
 
   it('takes Durbin–Watson of √w·e', () => {
@@ -125,6 +194,27 @@ describe('regression', () => {
     ['out-of-range', { covariance: { kind: 'newey-west', lag: 3 } }, 'lag'],
     ['option-unused', { covariance: { kind: 'classical', lag: 0 } }, 'covariance.lag: expected none for classical'],
     ['option-unused', { covariance: { kind: 'hc1', smallSample: true } }, 'covariance.smallSample: expected none'],
+    [
+      'option-unused',
+      { covariance: { kind: 'hc3', prewhiten: 'var1' } },
+      'covariance.prewhiten: expected none for hc3',
+    ],
+    ['option-unused', { covariance: { kind: 'classical', lag: 'newey-west-1994' } }, 'but found newey-west-1994'],
+    [
+      'exact-fit',
+      { y: [3, 5, 9], covariance: { kind: 'newey-west', lag: 'newey-west-1994' } },
+      'neweyWestAutomaticLag',
+    ],
+    [
+      'too-few-observations',
+      { covariance: { kind: 'newey-west', lag: 1, prewhiten: 'var1' } },
+      'prewhitenedScores: expected more than 3 rows',
+    ],
+    [
+      'gap-in-years',
+      { covariance: { kind: 'newey-west', lag: 1, prewhiten: 'var1' }, years: [1, 2, 5] },
+      'neweyWest, prewhiten: expected consecutive years, each foretold by the one before, but found 2 years are missing',
+    ],
     ['not-finite', { y: [1, NaN, 6] }, 'regression, y[1]: expected a finite number, but found NaN'],
     ['not-finite', { x: [1, 2, Infinity] }, 'regression, x[2]'],
     ['not-finite', { weights: [1, 1, NaN] }, 'regression, weights[2]'],

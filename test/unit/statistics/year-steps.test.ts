@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { gapsClosedUp, yearSteps } from '../../../src-main/statistics/year-steps.ts';
+import { gapsClosedUp, missingYears, yearSteps } from '../../../src-main/statistics/year-steps.ts';
 
 describe('yearSteps', () => {
   it('level C: distances from the row before, by hand', () => {
@@ -28,5 +28,13 @@ describe('gapsClosedUp', () => {
     expect(gapsClosedUp('test', [1958, 1960], 2, 'They')[0]?.detail).toMatch(/^1 year is missing in 1 gap\. They take/);
     expect(gapsClosedUp('test', [1958, 1959, 1960], 3, 'They')).toEqual([]);
     expect(gapsClosedUp('test', undefined, 3, 'They')).toEqual([]);
+  });
+});
+
+describe('missingYears', () => {
+  it('is null where every year has its row', () => {
+    expect(missingYears('test', [1958, 1959], 2)).toBeNull();
+    expect(missingYears('test', undefined, 2)).toBeNull();
+    expect(missingYears('test', [1958, 1961], 2)).toBe('2 years are missing in 1 gap.');
   });
 });

@@ -7,6 +7,7 @@ import { recompute } from '../../../../src-main/climate/procedures/recompute.ts'
 import type { ClaimComputation } from '../../../../src-main/contract/compute.ts';
 import { estimatorComparison, type EstimatorId } from '../../../../src-main/contract/estimator-comparison.ts';
 import { movingBlockBootstrap } from '../../../../src-main/statistics/moving-block-bootstrap.ts';
+import { regression } from '../../../../src-main/statistics/regression.ts';
 import { residualTests } from '../../../../src-main/statistics/residual-tests.ts';
 import { computationOf } from '../../../helpers/claim-computation.ts';
 import { ar1Noise, inventedCo2, logRegressionClaim } from '../../../helpers/log-regression-claim.ts';
@@ -74,6 +75,27 @@ describe('compareEstimators', () => {
     expect(convention({ kind: 'newey-west', lag: 5, smallSample: true })).toMatch(/lag 5,.*with the factor.*own/);
   });
 
+  it('says which lag was chosen from the data, the same that the regression chooses', () => {
+    const computation = logRegressionClaim(record);
+    const { fit } = recompute(computation);
+    const { chosenLag, standardErrors } = regression({
+      x: fit?.x ?? [],
+      y: fit?.y ?? [],
+      intercept: false,
+      covariance: { kind: 'newey-west', lag: 'newey-west-1994' },
+    });
+    const { convention, standardError, order } = of(computation, 'ols-newey-west-1994');
+    expect(convention).toMatch(
+      new RegExp(
+        `lag ${chosenLag}, no prewhitening.*; the lag is that of Newey & West 1994 for the products of x and residual; t`,
+      ),
+    );
+    expect(standardError).toBeCloseTo((standardErrors[0] ?? NaN) * Math.LN2, 14);
+    expect(order).toBe('calendar');
+    const withIntercept = of(logRegressionClaim({ ...record, procedure: { intercept: true } }), 'ols-newey-west-1994');
+    expect(withIntercept.convention).toContain('the constant’s left out');
+  });
+
   it('turns every number into the claim’s unit by the same factor', () => {
     const numbers = (unit: 'K per doubling' | 'K per e-folding', conversion: 'per-doubling' | 'per-e-folding') =>
       compareEstimators(
@@ -106,7 +128,7 @@ describe('compareEstimators', () => {
     const { notComputed, estimates } = compareEstimators(logRegressionClaim(record));
     expect(notComputed.map(({ ids }) => ids)).toEqual([['york', 'york-scaled']]);
     expect(notComputed[0]?.reason).toContain('series air: expected annual values with limits');
-    expect(estimates).toHaveLength(12);
+    expect(estimates).toHaveLength(13);
   });
 
   it('has neither likelihoods nor tests for an exact line, and says so', () => {
@@ -147,7 +169,9 @@ describe('compareEstimators', () => {
     const { gaps, estimates, residualTests: tests } = compareEstimators(gapped);
     expect(gaps.years).toEqual([1970, 1971]);
     expect(gaps.sentence).toMatch(/No value in 1970–1971\. Taking .* without the calendar distance: .*Newey–West/);
-    expect(gaps.sentence).toMatch(/The calendar distance is used by AR\(1\), .*likelihood; ARMA\(1,1\)/);
+    expect(gaps.sentence).toMatch(
+      /The calendar distance is used by Least squares, Newey–West, lag from the data; AR\(1\), .*likelihood; ARMA\(1,1\)/,
+    );
     const warned = estimates.filter(({ caveats }) => caveats.some(({ code }) => code === 'gap-in-window'));
     expect(warned.map(({ id }) => id)).toEqual([
       'ols-newey-west',

@@ -126,7 +126,7 @@ describe('the published values', () => {
 
   it('show both readings of a publication that says two things, with the reason and the one that is followed', async () => {
     const { screen } = await open();
-    const readings = screen.get('section[aria-label="What Aldwick says of 3.3"]');
+    const readings = screen.get('article[aria-label="What Aldwick says of 3.3"]');
     expect(readings.findAll('li').map((reading) => reading.text())).toEqual(['a mean §4.1', 'a median §4.2']);
     expect(readings.text()).toContain('Only one can be.');
     expect(readings.text()).toContain('Followed here: The mean.');
@@ -141,7 +141,7 @@ describe('the published values', () => {
     await field(screen, 'Words').setValue('co2 forcing');
     expect(labels()).toEqual(['Aldwick forcing, CO₂']);
     expect(screen.get('[role=status]').text()).toBe('1 of 3 values');
-    expect(screen.find('section[aria-label]').exists()).toBe(false);
+    expect(screen.find('article[aria-label]').exists()).toBe(false);
     await field(screen, 'Words').setValue('');
     await field(screen, 'Edition').findAll('option')[2]!.setValue();
     expect(labels()).toEqual(['Brock ECS']);
@@ -158,7 +158,7 @@ describe('the published values', () => {
     expect(details[0]).toContain('Warming in the end.');
     expect(details[1]).toContain('more likely than notabove 50–100 %');
     expect(details[2]).toContain('1.125');
-    expect(details[2]).toContain('2.00 – 3.00 (90 %)');
+    expect(details[2]).toContain('2.00 – 3.00 90 %');
   });
 
   it('copies a citation that names number, level, edition, place and mark', async () => {

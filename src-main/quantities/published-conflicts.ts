@@ -61,7 +61,7 @@ export const publishedConflicts: readonly PublishedConflict[] = [
       },
     ],
     reason:
-      'The printed value is the middle of a distribution, from inputs with more digits and skewed forcing; the inputs’ rounding alone reaches 1.855, which is still printed as 1.9.',
+      'The report does not say. The range of its forcing is skewed, and the rounding of the inputs alone reaches 1.855, which would be printed as 1.9.',
     taken:
       '1.9 where the report is quoted, 1.84 where its budget is recomputed. The difference is no mistake of a claim.',
   },
@@ -94,7 +94,7 @@ export const publishedConflicts: readonly PublishedConflict[] = [
       { words: '1.82 ± 0.19', source: 'AR5 WG1, chapter 8 (from memory)', value: 0.19, unit: 'W/m²' },
       { words: '1.82 ± 0.38', source: 'AR6 WG1, chapter 7, quoting AR5', value: 0.38, unit: 'W/m²' },
     ],
-    reason: 'The second is twice the first; 0.19 is the 10 % that AR5 gives for well-mixed gases.',
-    taken: 'The first.',
+    reason: 'The second is twice the first. AR5 itself was not at hand, so it is not known here which one slipped.',
+    taken: 'The first, from memory: look it up before it decides.',
   },
 ];

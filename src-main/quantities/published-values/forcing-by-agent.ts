@@ -68,7 +68,7 @@ function igccRow(id: string, agent: string, year: number, best: number): Publish
     edition: igcc,
     source: 'Table of effective radiative forcing, best estimates',
     provenance: 'seen',
-    remark: 'An update with AR6’s methods, not an assessment; its range is in the same data set.',
+    remark: 'An update with AR6’s methods, not an assessment; no range is on record here.',
   });
 }
 

@@ -1,10 +1,10 @@
-import type { Interval, QuantityId } from '../contract/primitives.ts';
+import type { Interval, PublishedQuantityId, QuantityId } from '../contract/primitives.ts';
 import type { PublishedValue } from '../contract/finding.ts';
 import type { AssumptionOutcome } from '../contract/result.ts';
 import { InputError } from '../errors.ts';
 import { formatInterval, formatNumber } from '../quantities/notation.ts';
 import { publishedFor, publishedValues } from '../quantities/published-values.ts';
-import { isSensitivity, quantityNames } from '../quantities/quantity-names.ts';
+import { publishedQuantityNames, sensitivities } from '../quantities/quantity-names.ts';
 import { interval90 } from '../robustness/ladder.ts';
 import { outcome, untestable, type Assumption } from './assumption.ts';
 import { footingOf, numberOnFooting } from './footing.ts';
@@ -49,10 +49,10 @@ export const likeForLike: Assumption = {
     }
     const others = [...new Set([presented, compared?.quantity ?? null])].filter((q) => q !== null && q !== own);
     const [target] = others.filter((quantity) => quantity !== null);
-    const ownLabel = quantityNames[own].label;
+    const ownLabel = publishedQuantityNames[own].label;
     const table = publishedTable([own, ...(presented ? [presented] : []), ...(compared ? [compared.quantity] : [])]);
     const comparedText = compared
-      ? ` It is held against ${compared.label} (${quantityNames[compared.quantity].label}).`
+      ? ` It is held against ${compared.label} (${publishedQuantityNames[compared.quantity].label}).`
       : '';
     if (target === undefined) {
       const reason = `The number is ${withArticle(ownLabel)} and is ${presented ? 'presented as' : 'held against'} one.`;
@@ -64,7 +64,7 @@ export const likeForLike: Assumption = {
         table,
       });
     }
-    const targetLabel = quantityNames[target].label;
+    const targetLabel = publishedQuantityNames[target].label;
     const role = presented === target ? 'presented as' : 'held against';
     const mismatch = `The number is ${withArticle(ownLabel)} and is ${role} ${withArticle(targetLabel)}.`;
     const conversion = converted(context, own, target);
@@ -111,7 +111,7 @@ function comparison({ computation }: TestContext): PublishedValue | null {
 }
 
 /** The first entry of a quantity is its current assessment. */
-function best(quantity: QuantityId): PublishedValue | null {
+function best(quantity: PublishedQuantityId): PublishedValue | null {
   return publishedFor(quantity)[0] ?? null;
 }
 
@@ -126,10 +126,10 @@ interface Conversion {
 }
 
 /** The number as the other kind of quantity, as far as heat uptake makes the difference; null where nothing converts. */
-function converted(context: TestContext, own: QuantityId, target: QuantityId): Conversion | null {
+function converted(context: TestContext, own: QuantityId, target: PublishedQuantityId): Conversion | null {
   const { computation, recomputation, draws } = context;
   const { evidence, procedure } = computation;
-  if (!evidence.energyBudget || !isSensitivity(own) || !isSensitivity(target)) return null;
+  if (!evidence.energyBudget || !sensitivities.includes(own) || !sensitivities.includes(target)) return null;
   if (isEquilibrium(own) === isEquilibrium(target)) return null;
   const ratio = heatUptakeRatio(evidence, draws);
   if (!Number.isFinite(ratio.value)) return null;
@@ -146,15 +146,15 @@ function converted(context: TestContext, own: QuantityId, target: QuantityId): C
     factor,
     ratio: ratio.value,
     quantity,
-    label: quantityNames[quantity].label,
+    label: publishedQuantityNames[quantity].label,
   };
 }
 
-function whyNotConverted(own: QuantityId, target: QuantityId): string {
+function whyNotConverted(own: QuantityId, target: PublishedQuantityId): string {
   if (isEquilibrium(own) && isEquilibrium(target)) {
     return 'Between the two lies the change of feedback with the pattern of warming; no conversion is made.';
   }
-  if (!isSensitivity(own) || !isSensitivity(target)) return 'There is no conversion between them.';
+  if (!sensitivities.includes(own) || !sensitivities.includes(target)) return 'There is no conversion between them.';
   if (isEquilibrium(own) === isEquilibrium(target)) {
     return 'Between the two lie the forcings other than CO₂; see that assumption for the number on all forcings.';
   }
@@ -174,16 +174,16 @@ function publishedText({ recomputation }: TestContext, value: PublishedValue | n
   return `${text}; as ${kind} by the same budget ${formatInterval(back, value.unit)}.`;
 }
 
-function remainder(reached: QuantityId | null, target: QuantityId): string {
+function remainder(reached: QuantityId | null, target: PublishedQuantityId): string {
   return reached === 'effective-climate-sensitivity' && target === 'equilibrium-climate-sensitivity'
     ? ' Between effective and equilibrium sensitivity remains the change of feedback with the pattern of warming.'
     : '';
 }
 
-function publishedTable(quantities: readonly QuantityId[]): AssumptionOutcome['table'] {
+function publishedTable(quantities: readonly PublishedQuantityId[]): AssumptionOutcome['table'] {
   const rows = [...new Set(quantities)].flatMap((quantity) => {
     const values = publishedFor(quantity);
-    const { label } = quantityNames[quantity];
+    const { label } = publishedQuantityNames[quantity];
     if (values.length === 0) return [[label, 'no published assessment', null, null, null, null]];
     return values.flatMap(({ label: name, best: central, ranges, edition }) =>
       ranges.map(({ interval, words }) => [label, name, edition, central, formatInterval(interval), words]),

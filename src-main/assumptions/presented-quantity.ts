@@ -1,5 +1,5 @@
 import type { ClaimComputation } from '../contract/compute.ts';
-import type { QuantityId } from '../contract/primitives.ts';
+import type { PublishedQuantityId, QuantityId } from '../contract/primitives.ts';
 import type { Recomputation } from '../contract/result.ts';
 
 /** The kind of number that the procedure gives: a ratio is what its statement says; a line is what a line can be. */
@@ -15,6 +15,6 @@ export function presentedQuantity(computation: ClaimComputation, recomputation: 
 }
 
 /** Whether a kind of sensitivity speaks of a planet that has stopped taking up heat. */
-export function isEquilibrium(quantity: QuantityId): boolean {
+export function isEquilibrium(quantity: PublishedQuantityId): boolean {
   return quantity === 'effective-climate-sensitivity' || quantity === 'equilibrium-climate-sensitivity';
 }

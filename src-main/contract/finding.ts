@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { interval, longText, quantityId, recordId, sha256, shortText, timestamp } from './primitives.ts';
+import { interval, longText, publishedQuantityId, recordId, sha256, shortText, timestamp } from './primitives.ts';
 import { assumptionId, markValue } from './result.ts';
 
 export const mark = z.object({
@@ -29,12 +29,37 @@ export const conclusion = z.enum([
 ]);
 export type Conclusion = z.infer<typeof conclusion>;
 
+/** Words of the IPCC's calibrated language. */
+export const likelihoodTerm = z.enum([
+  'virtually certain',
+  'extremely likely',
+  'very likely',
+  'likely',
+  'more likely than not',
+  'about as likely as not',
+  'unlikely',
+  'very unlikely',
+  'extremely unlikely',
+  'exceptionally unlikely',
+]);
+export type LikelihoodTerm = z.infer<typeof likelihoodTerm>;
+
 export const publishedValue = z.object({
   id: z.string(),
-  quantity: quantityId,
+  quantity: publishedQuantityId,
+  /** What it is the quantity of, where the quantity alone does not say: an agent, a place, a period; else empty. */
+  subject: z.string(),
   label: z.string(),
   best: z.number().nullable(),
-  ranges: z.array(z.object({ interval, words: z.string() })),
+  /** From narrow to wide. A level of null: the publication gives none. */
+  ranges: z.array(
+    z.object({
+      interval: interval.extend({ levelPercent: interval.shape.levelPercent.nullable() }),
+      words: z.string(),
+    }),
+  ),
+  /** One-sided statements: very unlikely above 6. */
+  limits: z.array(z.object({ term: likelihoodTerm, side: z.enum(['above', 'below']), value: z.number() })),
   unit: z.string(),
   edition: z.string(),
   source: z.string(),

@@ -34,9 +34,28 @@ export const quantityId = z.enum([
   'equilibrium-climate-sensitivity',
   'transient-climate-response',
   'trend',
+  'effective-radiative-forcing',
   'radiative-forcing',
   'climate-feedback',
   'share',
   'ratio',
 ]);
 export type QuantityId = z.infer<typeof quantityId>;
+
+/** Kinds of number that publications state: those of claims, and those that claims are made of. */
+export const publishedQuantityId = z.enum([
+  ...quantityId.options,
+  'feedback-parameter',
+  'feedback-term',
+  'pattern-effect',
+  'ocean-uptake-damping',
+  'effective-doubling-forcing',
+  'adjusted-doubling-forcing',
+  'tropospheric-adjustment',
+  'energy-imbalance',
+  'energy-inventory',
+  'inventory-share',
+  'warming',
+  'attributed-warming',
+]);
+export type PublishedQuantityId = z.infer<typeof publishedQuantityId>;

@@ -35,6 +35,7 @@ export const requestNames = [
   'finding.save',
   'finding.sign',
   'finding.revise',
+  'published.list',
   'trail.list',
   'trail.entry',
   'trail.undo',

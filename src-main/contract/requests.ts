@@ -4,6 +4,7 @@ import { figure } from './figure.ts';
 import { conclusion, reviewer, signatureMeaning } from './finding.ts';
 import { longText, recordId, shortText, yearSpan } from './primitives.ts';
 import { claimView, projectView, report, session, source } from './project.ts';
+import { publishedLibrary } from './published.ts';
 import type { RequestName } from './request-names.ts';
 import { assumptionId, markValue } from './result.ts';
 import { importPreview, readOptions, series, seriesChoice, seriesQuantity, seriesValues } from './series.ts';
@@ -130,6 +131,9 @@ export const requests = {
     answer: claimView,
   },
   'finding.revise': { input: onClaim.extend({ reason: z.string().trim().min(1).max(20_000) }), answer: claimView },
+
+  /** Needs no project. */
+  'published.list': { input: nothing, answer: publishedLibrary },
 
   'trail.list': {
     input: z.object({

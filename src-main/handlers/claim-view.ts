@@ -38,7 +38,7 @@ export function claimView(project: Project, claimId: number): ClaimView {
   const digests = digestsOf(project, claim);
   const recomputation = results.recomputation?.answer ?? null;
   const sweep = results.sweep?.answer ?? null;
-  const published = publishedForClaim(claim);
+  const published = publishedForClaim(claim, findings.at(-1)?.publishedValueIds);
   const view = {
     claim,
     questions: statementQuestions(claim.statement, claim.answers),

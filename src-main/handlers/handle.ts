@@ -15,6 +15,7 @@ import { errorAnswer } from './error-answer.ts';
 import { figureHandlers } from './figures.ts';
 import { findingHandlers } from './findings.ts';
 import { projectHandlers } from './projects.ts';
+import { publishedHandlers } from './published.ts';
 import { reportHandlers } from './reports.ts';
 import { sessionHandlers } from './session.ts';
 import { sourceHandlers } from './sources.ts';
@@ -28,6 +29,7 @@ const handlers: Handlers = {
   ...dataHandlers,
   ...claimHandlers,
   ...findingHandlers,
+  ...publishedHandlers,
   ...trailHandlers,
   ...reportHandlers,
   ...figureHandlers,

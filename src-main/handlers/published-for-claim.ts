@@ -1,17 +1,18 @@
 import type { Claim } from '../contract/claim.ts';
 import type { PublishedValue } from '../contract/finding.ts';
-import type { QuantityId } from '../contract/primitives.ts';
-import { publishedFor } from '../quantities/published-values.ts';
+import { publishedFor, publishedValues } from '../quantities/published-values.ts';
+import { sensitivities } from '../quantities/quantity-names.ts';
 
-const sensitivities: QuantityId[] = [
-  'apparent-sensitivity',
-  'transient-climate-response',
-  'effective-climate-sensitivity',
-  'equilibrium-climate-sensitivity',
-];
-
-/** Published ranges that a claim may be held against: of the quantity it is presented as first, then of its own, then the rest. */
-export function publishedForClaim({ statement: { quantity, presentedAs } }: Claim): PublishedValue[] {
+/**
+ * Published values that a claim may be held against: of the quantity it is presented as first, then of its own, then the
+ * rest; after them whatever else the finding quotes.
+ */
+export function publishedForClaim(
+  { statement: { quantity, presentedAs } }: Claim,
+  quotedIds: readonly string[] = [],
+): PublishedValue[] {
   const quantities = sensitivities.includes(quantity) ? [presentedAs, quantity, ...sensitivities] : [quantity];
-  return [...new Set(quantities)].flatMap((one) => (one === null ? [] : publishedFor(one)));
+  const comparable = [...new Set(quantities)].flatMap((one) => (one === null ? [] : publishedFor(one)));
+  const others = publishedValues.filter((value) => quotedIds.includes(value.id) && !comparable.includes(value));
+  return [...comparable, ...others];
 }

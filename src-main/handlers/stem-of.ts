@@ -2,6 +2,7 @@ import { catalogueEntries } from '../assumptions/catalogue.ts';
 import type { Claim } from '../contract/claim.ts';
 import type { StemFigure } from '../contract/figure.ts';
 import type { PublishedValue } from '../contract/finding.ts';
+import type { QuantityId } from '../contract/primitives.ts';
 import type { AssumptionsAnswer, Recomputation } from '../contract/result.ts';
 import { quantityNames } from '../quantities/quantity-names.ts';
 import { statedInterval, statedValue } from '../quantities/stated-number.ts';
@@ -9,7 +10,10 @@ import { statedInterval, statedValue } from '../quantities/stated-number.ts';
 const fahrenheitPerKelvin = 1.8;
 
 /** Assessed ranges that a reader of a stem should have before his eyes. */
-const bandIds = ['ar6-tcr', 'ar6-ecs'];
+const bandQuantities: Readonly<Record<string, QuantityId>> = {
+  'ar6-tcr': 'transient-climate-response',
+  'ar6-ecs': 'equilibrium-climate-sensitivity',
+};
 
 /** The stem of a sheet: what is stated, what comes out, and where each changed assumption moves it. */
 export function stemOf(
@@ -70,18 +74,18 @@ function rowsOf(assumptions: AssumptionsAnswer | null, claim: Claim): StemFigure
 function bandsOf(published: readonly PublishedValue[], unit: Claim['statement']['unit']): StemFigure['bands'] {
   const factor = unit === 'K per doubling' ? 1 : unit === '°F per doubling' ? fahrenheitPerKelvin : null;
   if (factor === null) return [];
-  return published
-    .filter((value) => bandIds.includes(value.id))
-    .flatMap(({ quantity, ranges }) =>
-      ranges
-        .filter(({ interval }) => interval.levelPercent === 66 && interval.low !== null && interval.high !== null)
-        .map(({ interval }) => ({
-          label: `${quantityNames[quantity].symbol}, likely (AR6)`,
-          low: (interval.low ?? 0) * factor,
-          high: (interval.high ?? 0) * factor,
-          quantity,
-        })),
-    );
+  return published.flatMap(({ id, ranges }) => {
+    const quantity = bandQuantities[id];
+    if (quantity === undefined) return [];
+    return ranges
+      .filter(({ interval }) => interval.levelPercent === 66 && interval.low !== null && interval.high !== null)
+      .map(({ interval }) => ({
+        label: `${quantityNames[quantity].symbol}, likely (AR6)`,
+        low: (interval.low ?? 0) * factor,
+        high: (interval.high ?? 0) * factor,
+        quantity,
+      }));
+  });
 }
 
 function captionOf(rows: StemFigure['rows'], isRecomputed: boolean): string {

@@ -59,11 +59,17 @@ export function decimalsFor(uncertainty: number): number {
   return Math.max(0, -lastPlaceShown(uncertainty));
 }
 
+/** The fewest decimals, up to six, that show every one of these numbers as it is. */
+export function decimalsOf(values: readonly (number | null)[]): number {
+  const decimals = values.map((value) => /\.(\d+)$/.exec((value ?? 0).toFixed(6).replace(/0+$/, ''))?.[1]?.length ?? 0);
+  return Math.max(0, ...decimals);
+}
+
 export interface FormattableInterval {
   /** null: unbounded. */
   low: number | null;
   high: number | null;
-  levelPercent?: number;
+  levelPercent?: number | null;
 }
 
 /** `1.6 – 4.8 K per doubling`; an open end is called unbounded. */

@@ -1,5 +1,5 @@
+import type { PublishedQuantityId, QuantityId } from '../contract/primitives.ts';
 import type { ClaimUnit } from '../contract/stated.ts';
-import type { QuantityId } from '../contract/primitives.ts';
 
 export interface QuantityName {
   label: string;
@@ -49,11 +49,18 @@ export const quantityNames: Readonly<Record<QuantityId, QuantityName>> = {
     definition: 'Slope of a straight line through temperature against time.',
     units: ['K per decade', 'K per year'],
   },
+  'effective-radiative-forcing': {
+    label: 'effective radiative forcing',
+    symbol: 'ERF',
+    definition:
+      'Change of the net downward flux at the top of the atmosphere after the atmosphere has adjusted, surface temperature left as it was.',
+    units: ['W/m²'],
+  },
   'radiative-forcing': {
     label: 'radiative forcing',
-    symbol: 'F',
+    symbol: 'RF',
     definition:
-      'Change of the energy balance at the top of the atmosphere that a change of composition imposes, before the surface has warmed.',
+      'The older measure: change of the net downward flux after the temperatures of the stratosphere alone have adjusted.',
     units: ['W/m²'],
   },
   'climate-feedback': {
@@ -89,7 +96,92 @@ export const quantityNames: Readonly<Record<QuantityId, QuantityName>> = {
   },
 };
 
-/** Kinds of number that say how much the planet warms for more CO2. */
-export function isSensitivity(quantity: QuantityId): boolean {
-  return quantityNames[quantity].units.includes('K per doubling') && quantity !== 'ratio';
-}
+/** The kinds of sensitivity, from the slope of a record to the settled climate. */
+export const sensitivities: readonly PublishedQuantityId[] = [
+  'apparent-sensitivity',
+  'transient-climate-response',
+  'effective-climate-sensitivity',
+  'equilibrium-climate-sensitivity',
+];
+
+/** The same for all that publications state; their units are those of the table of published values. */
+export const publishedQuantityNames: Readonly<
+  Record<PublishedQuantityId, Omit<QuantityName, 'units'> & { units: readonly string[] }>
+> = {
+  ...quantityNames,
+  'feedback-parameter': {
+    label: 'net climate feedback',
+    symbol: 'α',
+    definition:
+      'Change of the net downward flux at the top of the atmosphere per kelvin of surface warming. In AR6’s sign a negative one restores; λ = −α.',
+    units: ['W/m² per K'],
+  },
+  'feedback-term': {
+    label: 'feedback term',
+    symbol: 'αᵢ',
+    definition: 'The part of the net climate feedback that one process makes up.',
+    units: ['W/m² per K'],
+  },
+  'pattern-effect': {
+    label: 'pattern effect',
+    symbol: 'α′',
+    definition:
+      'How much less restoring the feedback of the settled climate is than that of the historical period, because the pattern of warming changes.',
+    units: ['W/m² per K'],
+  },
+  'ocean-uptake-damping': {
+    label: 'ocean heat uptake damping',
+    symbol: 'κ',
+    definition: 'Heat taken up by the ocean per kelvin of surface warming, its efficacy included, while forcing rises.',
+    units: ['W/m² per K'],
+  },
+  'effective-doubling-forcing': {
+    label: 'effective forcing of a CO₂ doubling',
+    symbol: 'F₂ₓ',
+    definition:
+      'Effective radiative forcing of doubled CO₂: after the atmosphere has adjusted, before the surface warms.',
+    units: ['W/m²'],
+  },
+  'adjusted-doubling-forcing': {
+    label: 'stratospherically adjusted forcing of a CO₂ doubling',
+    symbol: 'F₂ₓ (adjusted)',
+    definition: 'Radiative forcing of doubled CO₂ after the temperatures of the stratosphere alone have adjusted.',
+    units: ['W/m²'],
+  },
+  'tropospheric-adjustment': {
+    label: 'tropospheric adjustment',
+    symbol: 'adjustment',
+    definition: 'By how much the effective forcing of an agent differs from its stratospherically adjusted one.',
+    units: ['%'],
+  },
+  'energy-imbalance': {
+    label: 'Earth’s energy imbalance',
+    symbol: 'N',
+    definition: 'Net downward flux at the top of the atmosphere: heat that the planet takes up.',
+    units: ['W/m²'],
+  },
+  'energy-inventory': {
+    label: 'Earth’s energy gain',
+    symbol: 'ΔH',
+    definition: 'Heat that ocean, land, ice and air have taken up over a period; 1 ZJ = 10²¹ J.',
+    units: ['ZJ'],
+  },
+  'inventory-share': {
+    label: 'share of the energy gain',
+    symbol: 'share',
+    definition: 'The part of the energy gain that one of ocean, land, ice and air took up.',
+    units: ['%'],
+  },
+  warming: {
+    label: 'observed warming',
+    symbol: 'ΔT',
+    definition: 'Change of mean surface temperature between two periods, as observed.',
+    units: ['K'],
+  },
+  'attributed-warming': {
+    label: 'attributed warming',
+    symbol: 'ΔT (cause)',
+    definition: 'The part of a warming that is assessed to come from one cause.',
+    units: ['K'],
+  },
+};

@@ -1,5 +1,5 @@
 import type { Claim, StatementQuestion } from '../contract/claim.ts';
-import { isSensitivity } from './quantity-names.ts';
+import { sensitivities } from './quantity-names.ts';
 
 interface Question {
   id: string;
@@ -9,7 +9,7 @@ interface Question {
   applies(statement: Claim['statement']): boolean;
 }
 
-const speaksOfSensitivity = ({ quantity }: Claim['statement']) => isSensitivity(quantity);
+const speaksOfSensitivity = ({ quantity }: Claim['statement']) => sensitivities.includes(quantity);
 
 const questions: Question[] = [
   {
@@ -31,7 +31,7 @@ const questions: Question[] = [
     question: 'Are the degrees Celsius (or kelvin) or Fahrenheit?',
     why: 'A difference of 1 °C is one of 1.8 °F.',
     options: ['°C or K, as printed', '°F, as printed', 'not printed: taken from the context'],
-    applies: ({ quantity }) => isSensitivity(quantity) || quantity === 'trend',
+    applies: ({ quantity }) => sensitivities.includes(quantity) || quantity === 'trend',
   },
   {
     id: 'is-bound',

@@ -34,6 +34,11 @@ export function useFrameCommands({
             place('Go to Sources', { page: 'sources' }, 'material talks decks papers'),
             place('Go to Series', { page: 'series' }, 'data datasets files import'),
             place('Go to Claims', { page: 'claims' }),
+            place(
+              'Go to the Published values',
+              { page: 'published', claimId: null },
+              'assessed ranges ECS TCR forcing feedback IPCC AR6 likelihood',
+            ),
             place('Go to the Trail', { page: 'trail', sequence: null }, 'history record'),
             place('Go to the Report', { page: 'report' }, 'save write export'),
             ...(open.undo ? [{ label: `Undo: ${open.undo}`, keys: 'Ctrl Z', words: 'take back', run: undo }] : []),

@@ -10,6 +10,7 @@ export type Route =
   | { page: 'claims' }
   | { page: 'new-claim' }
   | { page: 'claim'; claimId: number; section: SectionId | null }
+  | { page: 'published'; claimId: number | null }
   | { page: 'trail'; sequence: number | null }
   | { page: 'report' };
 
@@ -38,6 +39,8 @@ export function routeOfHash(hash: string): Route {
     case 'claims':
       if (first === 'new') return { page: 'new-claim' };
       return id ? { page: 'claim', claimId: id, section: isSection(second) ? second : null } : { page };
+    case 'published':
+      return { page, claimId: id };
     case 'trail':
       return { page, sequence: id };
     case 'report':
@@ -60,6 +63,8 @@ export function hashOfRoute(route: Route): string {
       return '#/claims/new';
     case 'claim':
       return `#/claims/${route.claimId}${route.section ? `/${route.section}` : ''}`;
+    case 'published':
+      return route.claimId ? `#/published/${route.claimId}` : '#/published';
     case 'trail':
       return route.sequence ? `#/trail/${route.sequence}` : '#/trail';
     default:
@@ -86,6 +91,8 @@ export function placeOfRoute(route: Route): string {
       return 'Claims › New';
     case 'claim':
       return `Claims › ${route.claimId}`;
+    case 'published':
+      return 'Published values';
     case 'trail':
       return route.sequence ? `Trail › ${route.sequence}` : 'Trail';
     case 'report':

@@ -12,6 +12,7 @@ const places = [
   { name: 'claims', hash: '#/claims' },
   { name: 'a new claim', hash: '#/claims/new' },
   { name: 'the sheet of a trend', hash: '#/claims/2' },
+  { name: 'the published values', hash: '#/published/1' },
   { name: 'the trail', hash: '#/trail' },
   { name: 'an entry of the trail', hash: '#/trail/9' },
   { name: 'the report', hash: '#/report' },

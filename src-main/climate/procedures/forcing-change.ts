@@ -44,7 +44,7 @@ export function forcingChange(computation: ClaimComputation, procedure: ForcingP
   const answer = under(formula);
   const value = scalar(answer.totalWm2);
   return {
-    quantity: 'radiative-forcing',
+    quantity: isEffective ? 'effective-radiative-forcing' : 'radiative-forcing',
     unit: 'W/m²',
     value,
     standardError: null,

@@ -11,6 +11,8 @@ const places: [string, Route, string][] = [
   ['#/claims/new', { page: 'new-claim' }, 'Claims › New'],
   ['#/claims/2', { page: 'claim', claimId: 2, section: null }, 'Claims › 2'],
   ['#/claims/2/assumptions', { page: 'claim', claimId: 2, section: 'assumptions' }, 'Claims › 2'],
+  ['#/published', { page: 'published', claimId: null }, 'Published values'],
+  ['#/published/2', { page: 'published', claimId: 2 }, 'Published values'],
   ['#/trail', { page: 'trail', sequence: null }, 'Trail'],
   ['#/trail/217', { page: 'trail', sequence: 217 }, 'Trail › 217'],
   ['#/report', { page: 'report' }, 'Report'],

@@ -2,6 +2,7 @@ import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import {
   decimalsFor,
+  decimalsOf,
   formatInterval,
   formatLevel,
   formatNumber,
@@ -129,4 +130,19 @@ describe('small settings', () => {
 it('imports nothing, so that the screens can use it', () => {
   const source = readFileSync(new URL('../../../src-main/quantities/notation.ts', import.meta.url), 'utf8');
   expect(source).not.toMatch(/\bimport\b/);
+});
+
+describe('decimalsOf', () => {
+  it.each([
+    [[3, 2.5, 4], 1],
+    [[0.08, 0, 0.18], 2],
+    [[153, 101, null], 0],
+    [[2.33136], 5],
+    [[1 / 3], 6],
+    [[0.1 + 0.2], 1],
+    [[null], 0],
+    [[], 0],
+  ])('%j need %d', (values, decimals) => {
+    expect(decimalsOf(values)).toBe(decimals);
+  });
 });

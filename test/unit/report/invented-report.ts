@@ -414,12 +414,14 @@ export const inventedClaim: ReportClaim = {
     {
       id: 'ar6-ecs',
       quantity: 'equilibrium-climate-sensitivity',
+      subject: '',
       label: 'AR6 assessed ECS',
       best: 3,
       ranges: [
         { interval: interval(2.5, 4, 66), words: 'likely (66 %)' },
         { interval: interval(2, 5), words: 'very likely (5–95 %)' },
       ],
+      limits: [{ term: 'virtually certain', side: 'above', value: 1.5 }],
       unit: 'K per doubling',
       edition: 'IPCC AR6 WG1 (2021)',
       source: 'Chapter 7, §7.5.5',
@@ -429,9 +431,11 @@ export const inventedClaim: ReportClaim = {
     {
       id: 'ar6-tcr',
       quantity: 'transient-climate-response',
+      subject: '',
       label: 'AR6 assessed TCR',
       best: 1.8,
       ranges: [{ interval: interval(1.4, 2.2, 66), words: 'likely (66 %)' }],
+      limits: [],
       unit: 'K per doubling',
       edition: 'IPCC AR6 WG1 (2021)',
       source: 'Chapter 7, §7.5.5',

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { carbonMethods } from './carbon.ts';
 import { anchor, evidence, procedure, slopeCovariance, statement, tolerance } from './claim.ts';
 import { energyBudgetAnswer, energyBudgetRequest } from './energy-budget.ts';
 import { estimatorComparison } from './estimator-comparison.ts';
@@ -76,6 +77,7 @@ export const computeMethods = {
   ...specificationTestMethods,
   ...resamplingMethods,
   'window-sweep': { input: windowSweepRequest, value: windowSweep },
+  ...carbonMethods,
   'energy-budget': { input: energyBudgetRequest, value: energyBudgetAnswer },
   derivation: { input: derivationRequest, value: derivationAnswer },
   recomputation: { input: claimComputation, value: recomputation },

@@ -1,4 +1,6 @@
 import { testAssumptions } from '../assumptions/test-assumptions.ts';
+import { carbonBudget } from '../climate/carbon/carbon-budget.ts';
+import { exchange } from '../climate/carbon/exchange.ts';
 import { energyBudget } from '../climate/energy-budget.ts';
 import { compareEstimators } from '../climate/estimators/compare-estimators.ts';
 import { recompute } from '../climate/procedures/recompute.ts';
@@ -62,6 +64,8 @@ export const methods: Methods = {
   chow: (input) => chowTest(input),
   cusum: (input) => cusum(input),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
+  exchange: (input) => exchange(input),
+  'carbon-budget': (input) => carbonBudget(input),
   'energy-budget': (input, onProgress) => energyBudget(input, onProgress),
   derivation: ({ lines }) => evaluateDerivation(lines),
   recomputation: (input) => recompute(input),

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { evidence, statement, tolerance } from './claim.ts';
 import { anchor, procedure, slopeCovariance } from './procedure.ts';
+import { carbonMethods } from './carbon.ts';
 import { energyBudgetAnswer, energyBudgetRequest } from './energy-budget.ts';
 import { estimatorComparison } from './estimator-comparison.ts';
 import { forcingMethods } from './forcing.ts';
@@ -82,6 +83,7 @@ export const computeMethods = {
   ...resamplingMethods,
   'window-sweep': { input: windowSweepRequest, value: windowSweep },
   ...forcingMethods,
+  ...carbonMethods,
   'energy-budget': { input: energyBudgetRequest, value: energyBudgetAnswer },
   derivation: { input: derivationRequest, value: derivationAnswer },
   recomputation: { input: claimComputation, value: recomputation },

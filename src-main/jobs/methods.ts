@@ -1,4 +1,6 @@
 import { testAssumptions } from '../assumptions/test-assumptions.ts';
+import { carbonBudget } from '../climate/carbon/carbon-budget.ts';
+import { exchange } from '../climate/carbon/exchange.ts';
 import { energyBudget } from '../climate/energy-budget.ts';
 import { compareEstimators } from '../climate/estimators/compare-estimators.ts';
 import { forcing } from '../climate/forcing/forcing.ts';
@@ -65,6 +67,8 @@ export const methods: Methods = {
   cusum: (input) => cusum(input),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
   forcing: (input) => forcing(input),
+  exchange: (input) => exchange(input),
+  'carbon-budget': (input) => carbonBudget(input),
   'energy-budget': (input, onProgress) => energyBudget(input, onProgress),
   derivation: ({ lines }) => evaluateDerivation(lines),
   recomputation: (input) => recompute(input),

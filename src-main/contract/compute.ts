@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { anchor, evidence, procedure, slopeCovariance, statement, tolerance } from './claim.ts';
+import { climateResponseMethods } from './climate-response.ts';
 import { estimatorComparison } from './estimator-comparison.ts';
 import { column, lineMethods, predictors, rowYears } from './line-estimators.ts';
 import { year } from './primitives.ts';
@@ -88,6 +89,7 @@ export const computeMethods = {
   ...seriesTestMethods,
   ...specificationTestMethods,
   ...resamplingMethods,
+  ...climateResponseMethods,
   'window-sweep': { input: windowSweepRequest, value: windowSweep },
   'energy-budget': { input: energyBudgetRequest, value: energyBudgetAnswer },
   derivation: { input: derivationRequest, value: derivationAnswer },

@@ -2,6 +2,7 @@ import { testAssumptions } from '../assumptions/test-assumptions.ts';
 import { energyBudget } from '../climate/energy-budget.ts';
 import { compareEstimators } from '../climate/estimators/compare-estimators.ts';
 import { recompute } from '../climate/procedures/recompute.ts';
+import { twoLayer } from '../climate/two-layer/two-layer.ts';
 import type {
   LeaveOneOutInput,
   LeaveOneOutValue,
@@ -61,6 +62,7 @@ export const methods: Methods = {
   reset: (input) => resetTest(input),
   chow: (input) => chowTest(input),
   cusum: (input) => cusum(input),
+  'two-layer': (input) => twoLayer(input),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
   'energy-budget': (input, onProgress) => energyBudget(input, onProgress),
   derivation: ({ lines }) => evaluateDerivation(lines),

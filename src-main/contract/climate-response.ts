@@ -4,6 +4,8 @@ import { caveat } from './primitives.ts';
 
 const caveats = z.array(caveat);
 const numbers = z.array(z.number());
+const seed = z.int().min(0).max(4_294_967_295);
+const random = z.object({ generator: z.string(), seed: z.int(), nDraws: z.int() });
 /** From a start in balance. */
 const forcing = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('step'), wm2: z.number() }),
@@ -58,7 +60,33 @@ const twoLayerValue = z.object({
 });
 export type TwoLayerValue = z.infer<typeof twoLayerValue>;
 
+const coupledSlopeInput = z.object({
+  /** γ: warming for one e-folding of CO2, K. */
+  response: z.number(),
+  /** τ: warming that raises CO2 by one e-folding, K. */
+  exchange: z.number(),
+  /** σ_e: of temperature that CO2 does not cause, K. */
+  sdTemperature: z.number(),
+  /** σ_v: of ln CO2 that temperature does not cause. */
+  sdCarbon: z.number(),
+  simulation: z.object({ draws: z.int().min(100).max(10_000_000), seed }).optional(),
+});
+export type CoupledSlopeInput = z.infer<typeof coupledSlopeInput>;
+
+const coupledSlopeValue = z.object({
+  /** Least-squares slope of T on ln CO2 in a large sample, K per e-folding. */
+  slope: z.number(),
+  /** w in slope = wγ + (1 − w)τ. */
+  weightOnResponse: z.number(),
+  /** 1/(1 − γ/τ): what the loop makes of a disturbance. */
+  gain: z.number(),
+  simulated: z.object({ slope: z.number(), standardError: z.number(), random }).nullable(),
+  caveats,
+});
+export type CoupledSlopeValue = z.infer<typeof coupledSlopeValue>;
+
 /** How warming, imbalance and CO2 answer to each other. */
 export const climateResponseMethods = {
   'two-layer': { input: twoLayerInput, value: twoLayerValue },
+  'coupled-slope': { input: coupledSlopeInput, value: coupledSlopeValue },
 } as const;

@@ -1,4 +1,5 @@
 import { testAssumptions } from '../assumptions/test-assumptions.ts';
+import { coupledSlope } from '../climate/coupled-slope.ts';
 import { energyBudget } from '../climate/energy-budget.ts';
 import { compareEstimators } from '../climate/estimators/compare-estimators.ts';
 import { recompute } from '../climate/procedures/recompute.ts';
@@ -63,6 +64,7 @@ export const methods: Methods = {
   chow: (input) => chowTest(input),
   cusum: (input) => cusum(input),
   'two-layer': (input) => twoLayer(input),
+  'coupled-slope': (input, onProgress) => coupledSlope(input, onProgress),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
   'energy-budget': (input, onProgress) => energyBudget(input, onProgress),
   derivation: ({ lines }) => evaluateDerivation(lines),

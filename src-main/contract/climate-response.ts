@@ -6,6 +6,14 @@ const caveats = z.array(caveat);
 const numbers = z.array(z.number());
 const seed = z.int().min(0).max(4_294_967_295);
 const random = z.object({ generator: z.string(), seed: z.int(), nDraws: z.int() });
+/** null at an end: unbounded there, or not within the range that was searched; a caveat says which. */
+const openInterval = z.object({
+  low: z.number().nullable(),
+  high: z.number().nullable(),
+  levelPercent: z.number(),
+});
+export type OpenInterval = z.infer<typeof openInterval>;
+
 /** From a start in balance. */
 const forcing = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('step'), wm2: z.number() }),
@@ -60,6 +68,67 @@ const twoLayerValue = z.object({
 });
 export type TwoLayerValue = z.infer<typeof twoLayerValue>;
 
+const yearRange = z.object({ from: z.number(), to: z.number() });
+
+const gregoryInput = z.object({
+  /** Annual means after an abrupt change, in order of time. */
+  imbalanceWm2: column,
+  warmingK: column,
+  /** Since the change; 1, 2, 3, … unless given. */
+  years: column.optional(),
+  /** 1–20 and 21–150 unless given. */
+  split: z.object({ early: yearRange, late: yearRange }).optional(),
+  /** What the forcing and the equilibrium of the change are divided by to give those of a doubling: 2 for 4×CO2. */
+  doublingDivisor: z.number().optional(),
+  /** classical unless given. */
+  covariance: z
+    .discriminatedUnion('kind', [
+      z.object({ kind: z.literal('classical') }),
+      z.object({ kind: z.literal('newey-west'), lag: z.int().min(0), smallSample: z.boolean() }),
+    ])
+    .optional(),
+  /** Variance of the scatter of N over that of ΔT for the line of total least squares, (W m⁻² K⁻¹)²; 1 unless given. */
+  delta: z.number().optional(),
+});
+export type GregoryInput = z.infer<typeof gregoryInput>;
+
+const gregoryLine = z.object({
+  nYears: z.int(),
+  forcingWm2: z.number(),
+  feedbackWm2PerK: z.number(),
+  /** null where the feedback cannot be told from none. */
+  equilibriumK: z.number().nullable(),
+  forcingStandardErrorWm2: z.number(),
+  feedbackStandardErrorWm2PerK: z.number(),
+  /** By the delta method. */
+  equilibriumStandardErrorK: z.number().nullable(),
+  /** Fieller's interval; null where it is not an interval. */
+  equilibriumFieller95: openInterval.nullable(),
+});
+export type GregoryLine = z.infer<typeof gregoryLine>;
+const bracketLine = z.object({
+  forcingWm2: z.number(),
+  feedbackWm2PerK: z.number(),
+  equilibriumK: z.number().nullable(),
+});
+
+const gregoryValue = gregoryLine.extend({
+  /** forcingWm2 and equilibriumK over the divisor; null without one. */
+  perDoubling: z
+    .object({ forcingWm2: z.number(), equilibriumK: z.number().nullable(), divisor: z.number() })
+    .nullable(),
+  /** null where the years hold fewer than three points. */
+  early: gregoryLine.nullable(),
+  late: gregoryLine.nullable(),
+  /** The same points with the scatter laid to N, to ΔT, or to both. null where N and ΔT do not vary together. */
+  bracket: z
+    .object({ imbalanceOnWarming: bracketLine, warmingOnImbalance: bracketLine, totalLeastSquares: bracketLine })
+    .nullable(),
+  convention: z.string(),
+  caveats,
+});
+export type GregoryValue = z.infer<typeof gregoryValue>;
+
 const coupledSlopeInput = z.object({
   /** γ: warming for one e-folding of CO2, K. */
   response: z.number(),
@@ -88,5 +157,6 @@ export type CoupledSlopeValue = z.infer<typeof coupledSlopeValue>;
 /** How warming, imbalance and CO2 answer to each other. */
 export const climateResponseMethods = {
   'two-layer': { input: twoLayerInput, value: twoLayerValue },
+  gregory: { input: gregoryInput, value: gregoryValue },
   'coupled-slope': { input: coupledSlopeInput, value: coupledSlopeValue },
 } as const;

@@ -2,6 +2,7 @@ import { testAssumptions } from '../assumptions/test-assumptions.ts';
 import { coupledSlope } from '../climate/coupled-slope.ts';
 import { energyBudget } from '../climate/energy-budget.ts';
 import { compareEstimators } from '../climate/estimators/compare-estimators.ts';
+import { gregory } from '../climate/gregory.ts';
 import { recompute } from '../climate/procedures/recompute.ts';
 import { twoLayer } from '../climate/two-layer/two-layer.ts';
 import type {
@@ -64,6 +65,7 @@ export const methods: Methods = {
   chow: (input) => chowTest(input),
   cusum: (input) => cusum(input),
   'two-layer': (input) => twoLayer(input),
+  gregory: (input) => gregory(input),
   'coupled-slope': (input, onProgress) => coupledSlope(input, onProgress),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
   'energy-budget': (input, onProgress) => energyBudget(input, onProgress),

@@ -23,8 +23,18 @@ const forcingWm2 = Array.from({ length: 40 }, (_, i) => Number((0.05 * i + 0.2 *
 const annual = { kind: 'annual', wm2: forcingWm2 };
 const loop = { response: 1.5, exchange: 25, sdTemperature: 0.1, sdCarbon: 0.01 };
 
+/** Invented: an imbalance that falls as it warms, the sooner the more. */
+const warmingK = Array.from({ length: 40 }, (_, i) =>
+  Number((4 * (1 - Math.exp(-(i + 1) / 9)) + 0.1 * Math.sin(3 * i)).toFixed(3)),
+);
+const imbalanceWm2 = warmingK.map((value, i) =>
+  Number((7 - 1.3 * value + 0.2 * Math.cos(2 * i) + (i < 20 ? 0.1 : 0)).toFixed(3)),
+);
+const plot = { imbalanceWm2, warmingK, doublingDivisor: 2 };
+
 const valid = {
   'two-layer': { ...layers, forcing: annual, years: [1, 2.5, 40], doublingWm2: 3.9 },
+  gregory: plot,
   'coupled-slope': { ...loop, simulation: { draws: 1000, seed: 5 } },
 } as const;
 type Method = keyof typeof valid;
@@ -65,6 +75,27 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['two-layer', 'forcing', [{ forcing: { kind: 'step', wm2: 4 } }, { forcing: { kind: 'ramp', wm2PerYr: 0.05 } }]],
   ['two-layer', 'years', [{ years: [3] }, { years: [4] }]],
   ['two-layer', 'doublingWm2', [{ doublingWm2: 3.7 }, { doublingWm2: undefined }]],
+  ['gregory', 'years', [{ years: warmingK.map((_, i) => i + 5) }, { years: undefined }]],
+  [
+    'gregory',
+    'split',
+    [5, 12].map((to) => ({ split: { early: { from: 1, to }, late: { from: 21, to: 40 } } })) as [object, object],
+  ],
+  ['gregory', 'doublingDivisor', [{ doublingDivisor: 2.1 }, { doublingDivisor: 1 }]],
+  [
+    'gregory',
+    'covariance',
+    [2, 5].map((lag) => ({ covariance: { kind: 'newey-west', lag, smallSample: false } })) as [object, object],
+  ],
+  [
+    'gregory',
+    'smallSample',
+    [true, false].map((smallSample) => ({ covariance: { kind: 'newey-west', lag: 3, smallSample } })) as [
+      object,
+      object,
+    ],
+  ],
+  ['gregory', 'delta', [{ delta: 0.5 }, { delta: 3 }]],
   ['coupled-slope', 'response', [{ response: 2 }, { response: 3 }]],
   ['coupled-slope', 'exchange', [{ exchange: 11 }, { exchange: 40 }]],
   ['coupled-slope', 'sdTemperature', [{ sdTemperature: 0.2 }, { sdTemperature: 0.4 }]],
@@ -87,6 +118,17 @@ const bad: [Method, string, object, Partial<ErrorAnswer>][] = [
   ['two-layer', 'a doubling that cools', { doublingWm2: -3.7 }, { code: 'out-of-range' }],
   ['two-layer', 'another kind of forcing', { forcing: { kind: 'pulse', wm2: 1 } }, { code: 'input-form' }],
   ['two-layer', 'a missing year', { forcing: { kind: 'annual', wm2: [1, null] } }, { code: 'input-form' }],
+  ['gregory', 'two years', { imbalanceWm2: [7, 6], warmingK: [0, 1] }, { code: 'too-few-values' }],
+  ['gregory', 'columns of different lengths', { warmingK: warmingK.slice(1) }, { code: 'wrong-length' }],
+  ['gregory', 'years that go back', { years: warmingK.map((_, i) => 40 - i) }, { code: 'unordered-years' }],
+  ['gregory', 'a warming that stays', { warmingK: warmingK.map(() => 2) }, { code: 'rank-deficient' }],
+  ['gregory', 'a divisor of zero', { doublingDivisor: 0 }, { code: 'out-of-range', where: 'gregory, doublingDivisor' }],
+  [
+    'gregory',
+    'a lag beyond the rows',
+    { covariance: { kind: 'newey-west', lag: 40, smallSample: false } },
+    { code: 'out-of-range' },
+  ],
   ['coupled-slope', 'a loop that runs away', { exchange: 1.2 }, { code: 'runaway', where: 'coupledSlope, response' }],
   ['coupled-slope', 'nothing that varies', { sdTemperature: 0, sdCarbon: 0 }, { code: 'no-variation' }],
   ['coupled-slope', 'too few draws', { simulation: { draws: 3, seed: 1 } }, { code: 'input-form' }],

@@ -4,6 +4,7 @@ import { caveat } from './primitives.ts';
 
 const caveats = z.array(caveat);
 const numbers = z.array(z.number());
+const oneOrEach = z.union([z.number(), column]);
 const seed = z.int().min(0).max(4_294_967_295);
 const random = z.object({ generator: z.string(), seed: z.int(), nDraws: z.int() });
 /** null at an end: unbounded there, or not within the range that was searched; a caveat says which. */
@@ -67,6 +68,36 @@ const twoLayerValue = z.object({
   caveats,
 });
 export type TwoLayerValue = z.infer<typeof twoLayerValue>;
+
+const twoLayerEnsembleInput = z.object({
+  /** Parameters as for one run: one value for each member, or one for all. */
+  heatCapacity: oneOrEach,
+  deepHeatCapacity: oneOrEach,
+  exchange: oneOrEach,
+  feedback: oneOrEach,
+  efficacy: oneOrEach.optional(),
+  forcing,
+  /** As for one run; whole years, in order, where the forcing is annual. */
+  years: z.array(z.number()).min(1).max(10_000),
+  /** In order; 0.05, 0.17, 0.5, 0.83 and 0.95 unless given. */
+  probabilities: z.array(z.number().min(0).max(1)).min(1).max(100).optional(),
+  doublingWm2: oneOrEach.optional(),
+});
+export type TwoLayerEnsembleInput = z.infer<typeof twoLayerEnsembleInput>;
+
+const twoLayerEnsembleValue = z.object({
+  nMembers: z.int(),
+  years: numbers,
+  probabilities: numbers,
+  /** By year, then by probability: exact quantiles of all members (type 7), each year for itself. */
+  surfaceK: z.array(numbers),
+  imbalanceWm2: z.array(numbers),
+  /** By probability. */
+  ecsK: numbers.nullable(),
+  tcrK: numbers.nullable(),
+  caveats,
+});
+export type TwoLayerEnsembleValue = z.infer<typeof twoLayerEnsembleValue>;
 
 const yearRange = z.object({ from: z.number(), to: z.number() });
 
@@ -157,6 +188,7 @@ export type CoupledSlopeValue = z.infer<typeof coupledSlopeValue>;
 /** How warming, imbalance and CO2 answer to each other. */
 export const climateResponseMethods = {
   'two-layer': { input: twoLayerInput, value: twoLayerValue },
+  'two-layer-ensemble': { input: twoLayerEnsembleInput, value: twoLayerEnsembleValue },
   gregory: { input: gregoryInput, value: gregoryValue },
   'coupled-slope': { input: coupledSlopeInput, value: coupledSlopeValue },
 } as const;

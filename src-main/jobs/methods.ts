@@ -5,6 +5,7 @@ import { compareEstimators } from '../climate/estimators/compare-estimators.ts';
 import { gregory } from '../climate/gregory.ts';
 import { recompute } from '../climate/procedures/recompute.ts';
 import { twoLayer } from '../climate/two-layer/two-layer.ts';
+import { twoLayerEnsemble } from '../climate/two-layer/two-layer-ensemble.ts';
 import type {
   LeaveOneOutInput,
   LeaveOneOutValue,
@@ -65,6 +66,7 @@ export const methods: Methods = {
   chow: (input) => chowTest(input),
   cusum: (input) => cusum(input),
   'two-layer': (input) => twoLayer(input),
+  'two-layer-ensemble': (input, onProgress) => twoLayerEnsemble(input, onProgress),
   gregory: (input) => gregory(input),
   'coupled-slope': (input, onProgress) => coupledSlope(input, onProgress),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),

@@ -34,6 +34,14 @@ const plot = { imbalanceWm2, warmingK, doublingDivisor: 2 };
 
 const valid = {
   'two-layer': { ...layers, forcing: annual, years: [1, 2.5, 40], doublingWm2: 3.9 },
+  'two-layer-ensemble': {
+    ...layers,
+    feedback: [0.8, 1, 1.2, 1.6],
+    exchange: [0.9, 0.6, 0.7, 0.5],
+    forcing: annual,
+    years: [10, 40],
+    doublingWm2: 3.9,
+  },
   gregory: plot,
   'coupled-slope': { ...loop, simulation: { draws: 1000, seed: 5 } },
 } as const;
@@ -75,6 +83,19 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['two-layer', 'forcing', [{ forcing: { kind: 'step', wm2: 4 } }, { forcing: { kind: 'ramp', wm2PerYr: 0.05 } }]],
   ['two-layer', 'years', [{ years: [3] }, { years: [4] }]],
   ['two-layer', 'doublingWm2', [{ doublingWm2: 3.7 }, { doublingWm2: undefined }]],
+  ['two-layer-ensemble', 'heatCapacity', [{ heatCapacity: [5, 6, 7, 9] }, { heatCapacity: 10 }]],
+  ['two-layer-ensemble', 'deepHeatCapacity', [{ deepHeatCapacity: [50, 60, 70, 90] }, { deepHeatCapacity: 90 }]],
+  ['two-layer-ensemble', 'exchange', [{ exchange: [0.4, 0.6, 0.7, 0.5] }, { exchange: 0.6 }]],
+  ['two-layer-ensemble', 'feedback', [{ feedback: [0.8, 1, 1.3, 1.6] }, { feedback: 0.7 }]],
+  ['two-layer-ensemble', 'efficacy', [{ efficacy: [0.8, 1, 1.3, 1.6] }, { efficacy: undefined }]],
+  [
+    'two-layer-ensemble',
+    'forcing',
+    [{ forcing: { kind: 'step', wm2: 4 } }, { forcing: { kind: 'ramp', wm2PerYr: 0.05 } }],
+  ],
+  ['two-layer-ensemble', 'years', [{ years: [3] }, { years: [4] }]],
+  ['two-layer-ensemble', 'probabilities', [{ probabilities: [0.1, 0.5] }, { probabilities: [0.2, 0.5] }]],
+  ['two-layer-ensemble', 'doublingWm2', [{ doublingWm2: [3.7, 3.8, 3.9, 4] }, { doublingWm2: 3.5 }]],
   ['gregory', 'years', [{ years: warmingK.map((_, i) => i + 5) }, { years: undefined }]],
   [
     'gregory',
@@ -118,6 +139,10 @@ const bad: [Method, string, object, Partial<ErrorAnswer>][] = [
   ['two-layer', 'a doubling that cools', { doublingWm2: -3.7 }, { code: 'out-of-range' }],
   ['two-layer', 'another kind of forcing', { forcing: { kind: 'pulse', wm2: 1 } }, { code: 'input-form' }],
   ['two-layer', 'a missing year', { forcing: { kind: 'annual', wm2: [1, null] } }, { code: 'input-form' }],
+  ['two-layer-ensemble', 'columns of two lengths', { exchange: [0.5, 0.6] }, { code: 'wrong-length' }],
+  ['two-layer-ensemble', 'a member that runs away', { feedback: [1, 1, 0, 1] }, { code: 'no-restoring-feedback' }],
+  ['two-layer-ensemble', 'half a year', { years: [2.5] }, { code: 'out-of-range' }],
+  ['two-layer-ensemble', 'years that go back', { years: [4, 3] }, { code: 'unordered-years' }],
   ['gregory', 'two years', { imbalanceWm2: [7, 6], warmingK: [0, 1] }, { code: 'too-few-values' }],
   ['gregory', 'columns of different lengths', { warmingK: warmingK.slice(1) }, { code: 'wrong-length' }],
   ['gregory', 'years that go back', { years: warmingK.map((_, i) => 40 - i) }, { code: 'unordered-years' }],

@@ -4,12 +4,12 @@ import { twoLayerTables } from '../../quantities/two-layer-tables.ts';
 import type { TwoLayerParameters } from './linear-response.ts';
 
 /** Far beyond any planet; within them no intermediate result leaves the range of doubles. */
-const bounds: Readonly<Record<keyof TwoLayerParameters, readonly [low: number, high: number]>> = {
-  heatCapacity: [1e-6, 1e9],
-  deepHeatCapacity: [1e-6, 1e9],
-  exchange: [0, 1e6],
-  feedback: [1e-9, 1e6],
-  efficacy: [0, 1e3],
+const bounds: Readonly<Record<keyof TwoLayerParameters, { low: number; high: number }>> = {
+  heatCapacity: { low: 1e-6, high: 1e9 },
+  deepHeatCapacity: { low: 1e-6, high: 1e9 },
+  exchange: { low: 0, high: 1e6 },
+  feedback: { low: 1e-9, high: 1e6 },
+  efficacy: { low: 0, high: 1e3 },
 };
 export const parameterNames = Object.keys(bounds) as readonly (keyof TwoLayerParameters)[];
 
@@ -28,7 +28,7 @@ const publishedRanges = parameterNames.map((name) => {
  * Checked  test/unit/climate/two-layer/check-parameters.test.ts (C: each bound)
  */
 export function checkParameter(caller: string, name: keyof TwoLayerParameters, value: number, place?: number): number {
-  const [low, high] = bounds[name];
+  const { low, high } = bounds[name];
   if (value >= low && value <= high) return value;
   const where = `${caller}, ${name}${place === undefined ? '' : `[${place}]`}`;
   if (name === 'feedback' && !(value > 0)) {
@@ -58,11 +58,11 @@ export function checkParameter(caller: string, name: keyof TwoLayerParameters, v
  *
  * Checked  test/unit/climate/two-layer/check-parameters.test.ts (C: on and off at the ends of the tables)
  */
-export function parameterCaveats(columns: Readonly<Record<keyof TwoLayerParameters, ArrayLike<number>>>): Caveat[] {
+export function parameterCaveats(
+  columns: Readonly<Record<keyof TwoLayerParameters, readonly number[] | Float64Array>>,
+): Caveat[] {
   const caveats: Caveat[] = [];
-  const count = (name: keyof TwoLayerParameters, isMeant: (value: number) => boolean) =>
-    Array.from(columns[name]).filter(isMeant).length;
-  const outside = publishedRanges.filter(({ name, low, high }) => count(name, (v) => v < low || v > high) > 0);
+  const outside = publishedRanges.filter(({ name, low, high }) => columns[name].some((v) => v < low || v > high));
   if (outside.length > 0) {
     const ranges = outside.map(({ name, low, high }) => `${name} ${low} to ${high}`).join(', ');
     caveats.push({
@@ -70,10 +70,10 @@ export function parameterCaveats(columns: Readonly<Record<keyof TwoLayerParamete
       detail: `Outside the ${published.length} published sets for climate models (${ranges}).`,
     });
   }
-  if (count('exchange', (value) => value === 0) > 0) {
+  if (columns.exchange.includes(0)) {
     caveats.push({ code: 'no-exchange', detail: 'Without heat exchange the deep ocean stays as it was.' });
   }
-  if (count('efficacy', (value) => value === 0) > 0) {
+  if (columns.efficacy.includes(0)) {
     caveats.push({
       code: 'no-efficacy',
       detail: 'With an efficacy of 0 the deep ocean takes up heat without cooling the surface.',

@@ -14,11 +14,11 @@ const ROUNDING = 2 ** -54;
  */
 export function phi(k: number, x: number): number {
   if (k === 0) return Math.exp(x);
-  if (x <= -1) return k === 1 ? Math.expm1(x) / x : (phi(k - 1, x) - 1) / x;
-  let term = 1 / (k === 1 ? 1 : 2);
-  let sum = term;
-  for (let n = 1; Math.abs(term) > ROUNDING * sum; n++) {
-    term *= x / (n + k);
+  if (k === 1) return x === 0 ? 1 : Math.expm1(x) / x;
+  if (x <= -1) return (phi(1, x) - 1) / x;
+  let [term, sum] = [0.5, 0.5];
+  for (let n = 1; Math.abs(term) > ROUNDING; n++) {
+    term *= x / (n + 2);
     sum += term;
   }
   return sum;
@@ -43,14 +43,15 @@ export function phiDifference(k: number, low: number, high: number): number {
     return Math.exp(high) * (gap === 0 ? 1 : -Math.expm1(-gap) / gap);
   }
   if (low <= -1) return (phi(k, high) - phiDifference(k - 1, low, high)) / -low;
-  let [symmetric, power, divisor] = [1, 1, k === 1 ? 2 : 6];
-  let sum = 1 / divisor;
-  for (let n = 2; power > ROUNDING * divisor; n++) {
-    // |h_m| ≤ (m + 1)·|low|^m bounds what is left, as the terms alternate.
-    power = n * Math.abs(low) ** (n - 1);
-    symmetric = low * symmetric + high ** (n - 1);
-    divisor *= n + k;
-    sum += symmetric / divisor;
+  // |h_m| ≤ (m + 1)|low|^m: the terms alternate and fall, so what is left is less than the last.
+  let [symmetric, power, factor] = [1, 1, k === 1 ? 1 / 2 : 1 / 6];
+  let [term, sum] = [factor, factor];
+  for (let n = 2; Math.abs(term) > ROUNDING; n++) {
+    power *= high;
+    symmetric = low * symmetric + power;
+    factor /= n + k;
+    term = symmetric * factor;
+    sum += term;
   }
   return sum;
 }

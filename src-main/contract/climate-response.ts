@@ -1,6 +1,6 @@
 import { z } from 'zod';
-import { column } from './line-estimators.ts';
-import { caveat } from './primitives.ts';
+import { column, rowYears } from './line-estimators.ts';
+import { caveat, year } from './primitives.ts';
 
 const caveats = z.array(caveat);
 const numbers = z.array(z.number());
@@ -99,6 +99,62 @@ const twoLayerEnsembleValue = z.object({
 });
 export type TwoLayerEnsembleValue = z.infer<typeof twoLayerEnsembleValue>;
 
+const annualRecord = z.object({ years: rowYears, values: column });
+
+const twoLayerFitInput = z.object({
+  /** Effective forcing, a value for each year from startYear on, in balance before. */
+  forcing: z.object({ startYear: year, wm2: column }),
+  /** Annual means of surface temperature, K; years may be missing. */
+  temperature: annualRecord.optional(),
+  /** fitted: the record is an anomaly on some baseline; zero: it counts from the balance before the forcing. */
+  temperatureOffset: z.enum(['fitted', 'zero']),
+  /** Annual means of the planet's heat uptake, W/m² of the whole Earth's surface; years may be missing. */
+  heatUptake: annualRecord.optional(),
+  /** W yr m⁻² K⁻¹, or to be fitted too. */
+  heatCapacity: z.union([z.number(), z.literal('fitted')]),
+  deepHeatCapacity: z.union([z.number(), z.literal('fitted')]),
+  /** Taken as known; 1 unless given. */
+  efficacy: z.number().optional(),
+  /** Forcing of a doubling of CO2, on the footing of the forcing series. */
+  doublingWm2: z.number(),
+  levelPercent: z.number().min(50).max(99.9),
+});
+export type TwoLayerFitInput = z.infer<typeof twoLayerFitInput>;
+
+const fittedRecord = z.object({
+  nObs: z.int(),
+  /** Added to the model's warming to give the record. */
+  offset: z.number(),
+  /** Lag-one coefficient of the residuals. */
+  rho: z.number(),
+  /** Standard deviation of the innovations. */
+  sigma: z.number(),
+  /** The model, offset included, in the years of the record. */
+  fitted: numbers,
+});
+
+const twoLayerFitValue = z.object({
+  feedbackWm2PerK: z.number(),
+  exchangeWm2PerK: z.number(),
+  heatCapacity: z.number(),
+  deepHeatCapacity: z.number(),
+  /** null where the likelihood is highest without any feedback. */
+  ecsK: z.number().nullable(),
+  tcrK: z.number(),
+  intervals: z.object({ feedbackWm2PerK: openInterval, exchangeWm2PerK: openInterval, ecsK: openInterval }),
+  isEcsBoundedAbove: z.boolean(),
+  /** How far the log-likelihood falls from its top to λ = 0, and how far it must fall to bound ECS from above. */
+  fallAtZeroFeedback: z.number(),
+  fallOfInterval: z.number(),
+  logLikelihood: z.number(),
+  temperature: fittedRecord.nullable(),
+  heatUptake: fittedRecord.nullable(),
+  /** Climbs of the likelihood from different starts, and how many of them ended at the top. */
+  starts: z.object({ nClimbs: z.int(), nAtTop: z.int() }),
+  caveats,
+});
+export type TwoLayerFitValue = z.infer<typeof twoLayerFitValue>;
+
 const yearRange = z.object({ from: z.number(), to: z.number() });
 
 const gregoryInput = z.object({
@@ -189,6 +245,7 @@ export type CoupledSlopeValue = z.infer<typeof coupledSlopeValue>;
 export const climateResponseMethods = {
   'two-layer': { input: twoLayerInput, value: twoLayerValue },
   'two-layer-ensemble': { input: twoLayerEnsembleInput, value: twoLayerEnsembleValue },
+  'two-layer-fit': { input: twoLayerFitInput, value: twoLayerFitValue },
   gregory: { input: gregoryInput, value: gregoryValue },
   'coupled-slope': { input: coupledSlopeInput, value: coupledSlopeValue },
 } as const;

@@ -6,6 +6,7 @@ import { gregory } from '../climate/gregory.ts';
 import { recompute } from '../climate/procedures/recompute.ts';
 import { twoLayer } from '../climate/two-layer/two-layer.ts';
 import { twoLayerEnsemble } from '../climate/two-layer/two-layer-ensemble.ts';
+import { twoLayerFit } from '../climate/two-layer/two-layer-fit.ts';
 import type {
   LeaveOneOutInput,
   LeaveOneOutValue,
@@ -67,6 +68,7 @@ export const methods: Methods = {
   cusum: (input) => cusum(input),
   'two-layer': (input) => twoLayer(input),
   'two-layer-ensemble': (input, onProgress) => twoLayerEnsemble(input, onProgress),
+  'two-layer-fit': (input, onProgress) => twoLayerFit(input, onProgress),
   gregory: (input) => gregory(input),
   'coupled-slope': (input, onProgress) => coupledSlope(input, onProgress),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),

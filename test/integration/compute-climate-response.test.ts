@@ -32,6 +32,28 @@ const imbalanceWm2 = warmingK.map((value, i) =>
 );
 const plot = { imbalanceWm2, warmingK, doublingDivisor: 2 };
 
+const fitted = {
+  forcing: { startYear: 1960, wm2: forcingWm2 },
+  temperature: {
+    years: forcingWm2.map((_, i) => 1960 + i),
+    values: forcingWm2.map((f, i) => Number((0.45 * f + 0.1 * Math.sin(2.3 * i)).toFixed(3))),
+  },
+  heatUptake: {
+    years: forcingWm2.map((_, i) => 1960 + i),
+    values: forcingWm2.map((f, i) => Number((0.4 * f + 0.2 * Math.cos(1.7 * i)).toFixed(3))),
+  },
+  temperatureOffset: 'fitted',
+  heatCapacity: 8,
+  deepHeatCapacity: 100,
+  efficacy: 1.2,
+  doublingWm2: 3.9,
+  levelPercent: 95,
+};
+const part = ({ years, values }: typeof fitted.temperature, from: number) => ({
+  years: years.slice(from),
+  values: values.slice(from),
+});
+
 const valid = {
   'two-layer': { ...layers, forcing: annual, years: [1, 2.5, 40], doublingWm2: 3.9 },
   'two-layer-ensemble': {
@@ -42,6 +64,7 @@ const valid = {
     years: [10, 40],
     doublingWm2: 3.9,
   },
+  'two-layer-fit': fitted,
   gregory: plot,
   'coupled-slope': { ...loop, simulation: { draws: 1000, seed: 5 } },
 } as const;
@@ -96,6 +119,26 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['two-layer-ensemble', 'years', [{ years: [3] }, { years: [4] }]],
   ['two-layer-ensemble', 'probabilities', [{ probabilities: [0.1, 0.5] }, { probabilities: [0.2, 0.5] }]],
   ['two-layer-ensemble', 'doublingWm2', [{ doublingWm2: [3.7, 3.8, 3.9, 4] }, { doublingWm2: 3.5 }]],
+  [
+    'two-layer-fit',
+    'forcing',
+    [
+      { forcing: { startYear: 1960, wm2: forcingWm2.map((f) => 1.2 * f) } },
+      { forcing: { startYear: 1959, wm2: [0, ...forcingWm2] } },
+    ],
+  ],
+  [
+    'two-layer-fit',
+    'temperature',
+    [{ temperature: part(fitted.temperature, 5) }, { temperature: part(fitted.temperature, 10) }],
+  ],
+  ['two-layer-fit', 'heatUptake', [{ heatUptake: part(fitted.heatUptake, 5) }, { heatUptake: undefined }]],
+  ['two-layer-fit', 'temperatureOffset', [{ temperatureOffset: 'zero' }, { temperatureOffset: 'fitted' }]],
+  ['two-layer-fit', 'heatCapacity', [{ heatCapacity: 5 }, { heatCapacity: 'fitted' }]],
+  ['two-layer-fit', 'deepHeatCapacity', [{ deepHeatCapacity: 60 }, { deepHeatCapacity: 200 }]],
+  ['two-layer-fit', 'efficacy', [{ efficacy: 1.5 }, { efficacy: undefined }]],
+  ['two-layer-fit', 'doublingWm2', [{ doublingWm2: 3.7 }, { doublingWm2: 3.5 }]],
+  ['two-layer-fit', 'levelPercent', [{ levelPercent: 66 }, { levelPercent: 90 }]],
   ['gregory', 'years', [{ years: warmingK.map((_, i) => i + 5) }, { years: undefined }]],
   [
     'gregory',
@@ -143,6 +186,15 @@ const bad: [Method, string, object, Partial<ErrorAnswer>][] = [
   ['two-layer-ensemble', 'a member that runs away', { feedback: [1, 1, 0, 1] }, { code: 'no-restoring-feedback' }],
   ['two-layer-ensemble', 'half a year', { years: [2.5] }, { code: 'out-of-range' }],
   ['two-layer-ensemble', 'years that go back', { years: [4, 3] }, { code: 'unordered-years' }],
+  ['two-layer-fit', 'no record', { temperature: undefined, heatUptake: undefined }, { code: 'no-record' }],
+  [
+    'two-layer-fit',
+    'years beyond the forcing',
+    { forcing: { startYear: 1961, wm2: forcingWm2 } },
+    { code: 'outside-forcing' },
+  ],
+  ['two-layer-fit', 'too few years', { temperature: part(fitted.temperature, 32) }, { code: 'too-few-values' }],
+  ['two-layer-fit', 'no doubling', { doublingWm2: undefined }, { code: 'input-form' }],
   ['gregory', 'two years', { imbalanceWm2: [7, 6], warmingK: [0, 1] }, { code: 'too-few-values' }],
   ['gregory', 'columns of different lengths', { warmingK: warmingK.slice(1) }, { code: 'wrong-length' }],
   ['gregory', 'years that go back', { years: warmingK.map((_, i) => 40 - i) }, { code: 'unordered-years' }],

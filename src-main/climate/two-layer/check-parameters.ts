@@ -51,6 +51,15 @@ export function checkParameter(caller: string, name: keyof TwoLayerParameters, v
   });
 }
 
+/** The same door for one parameter of many runs. @throws as `checkParameter`, naming the first that is refused */
+export function checkParameters(caller: string, name: keyof TwoLayerParameters, values: Float64Array): void {
+  const { low, high } = bounds[name];
+  for (let place = 0; place < values.length; place++) {
+    const value = values[place]!;
+    if (!(value >= low && value <= high)) checkParameter(caller, name, value, place);
+  }
+}
+
 /**
  * Doubts about parameters: those outside the published sets of climate models, and those that make another model of it.
  *

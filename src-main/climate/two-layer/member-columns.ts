@@ -1,6 +1,6 @@
 import { finiteValues } from '../../statistics/finite-values.ts';
 import { InputError } from '../../errors.ts';
-import { checkParameter, parameterNames } from './check-parameters.ts';
+import { checkParameters, parameterNames } from './check-parameters.ts';
 import type { TwoLayerParameters } from './linear-response.ts';
 
 /** A parameter of an ensemble: one value for all members, or one for each. */
@@ -23,7 +23,7 @@ export function memberColumns(
   const nMembers = lengths[0] ?? 1;
   const columns = parameterNames.map((name) => {
     const column = memberColumn(caller, name, parameters[name], nMembers);
-    for (let member = 0; member < nMembers; member++) checkParameter(caller, name, column[member]!, member);
+    checkParameters(caller, name, column);
     return [name, column] as const;
   });
   return Object.fromEntries(columns) as unknown as MemberColumns;

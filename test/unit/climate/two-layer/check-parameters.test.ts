@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import {
   checkParameter,
+  checkParameters,
   parameterCaveats,
   parameterNames,
 } from '../../../../src-main/climate/two-layer/check-parameters.ts';
@@ -43,6 +44,14 @@ describe('checkParameter', () => {
     expect(parameterNames.map((name) => checkParameter('twoLayer', name, 1))).toEqual([1, 1, 1, 1, 1]);
     expect(checkParameter('twoLayer', 'exchange', 0)).toBe(0);
     expect(checkParameter('twoLayer', 'efficacy', 0)).toBe(0);
+  });
+});
+
+describe('checkParameters', () => {
+  it('names the first of many that is refused, NaN included', () => {
+    expect(() => checkParameters('test', 'exchange', Float64Array.of(0, 1, -1, -2))).toThrow('test, exchange[2]');
+    expect(() => checkParameters('test', 'efficacy', Float64Array.of(1, NaN))).toThrow('test, efficacy[1]');
+    checkParameters('test', 'feedback', Float64Array.of(1e-9, 1, 1e6));
   });
 });
 

@@ -4,25 +4,29 @@ import { searchBounds, type FitProblem, type FittedErrors } from './fit-likeliho
 import type { FitSummit } from './fit-summit.ts';
 import type { FitProfiles } from './fit-profiles.ts';
 
+/** Far above every published range, and beyond what a constant feedback can stand for. */
+const HARDLY_BOUNDED_K = 20;
+
 interface FitDoubts {
   problem: FitProblem;
   fit: FittedErrors;
   profiles: Pick<FitProfiles, 'feedback' | 'exchange' | 'fallAtZeroFeedback'>;
   fallOfInterval: number;
   isEcsBoundedAbove: boolean;
+  ecsHighK: number | null;
   summit: Pick<FitSummit, 'nClimbs' | 'nAtTop'>;
 }
 
 /**
  * What must stand beside a fit of the two-layer model. The bounds are common practice.
  *
- * @returns  forcing-taken-as-known always; ecs-unbounded-above, feedback-unbounded, exchange-unbounded, heat-capacity-at-bound,
+ * @returns  forcing-taken-as-known always; ecs-unbounded-above, ecs-hardly-bounded, feedback-unbounded, exchange-unbounded, heat-capacity-at-bound,
  *           one-record, near-unit-root, several-summits, and those of the parameters
  *
  * Checked  test/unit/climate/two-layer/fit-caveats.test.ts (C: each on and off)
  */
 export function fitCaveats(doubts: FitDoubts): Caveat[] {
-  const { problem, fit, profiles, fallOfInterval, isEcsBoundedAbove, summit } = doubts;
+  const { problem, fit, profiles, fallOfInterval, isEcsBoundedAbove, ecsHighK, summit } = doubts;
   const caveats: Caveat[] = [];
   const add = (isDoubtful: boolean, code: string, detail: string) => {
     if (isDoubtful) caveats.push({ code, detail });
@@ -31,6 +35,11 @@ export function fitCaveats(doubts: FitDoubts): Caveat[] {
     !isEcsBoundedAbove,
     'ecs-unbounded-above',
     `These records cannot bound ECS from above: down to no feedback at all (λ → 0) the log-likelihood falls by ${profiles.fallAtZeroFeedback.toFixed(2)}, and ${fallOfInterval.toFixed(2)} would be needed.`,
+  );
+  add(
+    (ecsHighK ?? 0) > HARDLY_BOUNDED_K,
+    'ecs-hardly-bounded',
+    `The upper end of ECS, ${ecsHighK?.toPrecision(2)} K, is a bound in name only: the likelihood falls by just ${profiles.fallAtZeroFeedback.toFixed(2)} down to no feedback at all.`,
   );
   add(
     profiles.feedback.high === null,

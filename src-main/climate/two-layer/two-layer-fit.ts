@@ -11,7 +11,7 @@ import { linearResponse } from './linear-response.ts';
 import { sensitivities } from './sensitivities.ts';
 
 const MOST_SUMMITS = 5;
-/** λ below this share of the bound is none: ECS would be a number without meaning. */
+/** W m⁻² K⁻¹; a λ below this is none: ECS would be a number without meaning. */
 const NO_FEEDBACK = 1e-6;
 
 /**
@@ -32,7 +32,8 @@ const NO_FEEDBACK = 1e-6;
  * @param onProgress         called with the share done; may throw to stop
  * @returns  isEcsBoundedAbove false, and no upper end of ECS, where the likelihood at λ = 0 is not z²/2 below its top.
  *           λ and γ end at 0 where 0 belongs to the interval, and have no upper end where none lies within 20 W m⁻² K⁻¹
- * @throws   InputError too-few-values, no-record, outside-forcing, unordered-years, not-finite, out-of-range; NumericError exact-fit
+ * @throws   InputError too-few-values, no-record, outside-forcing, unordered-years, not-finite, out-of-range; NumericError exact-fit,
+ *           not-settled
  *
  * Source   profile likelihood: Cox & Snell 1989; of climate parameters with AR errors: Aldrin et al. 2012,
  *          Environmetrics 23, 253–271 (from memory); Geoffroy et al. 2013a, b for the model
@@ -44,19 +45,20 @@ export function twoLayerFit(input: TwoLayerFitInput, onProgress?: (shareDone: nu
   const fallOfInterval = normalQuantile(0.5 + levelPercent / 200, 0, 1) ** 2 / 2;
 
   let summit = fitSummit(problem, (share) => onProgress?.(0.5 * share));
+  refuseExact(problem, fitLikelihood(problem, parametersAt(problem, summit.at)));
   let profiles = fitProfiles(problem, summit, fallOfInterval, onProgress);
   for (let nSummits = 1; profiles.higher && nSummits < MOST_SUMMITS; nSummits++) {
     const higher = simplexMaximum(fitHeight(problem), profiles.higher.at, fitSteps(problem));
     summit = { ...higher, nClimbs: summit.nClimbs + 1, nAtTop: 1 };
     profiles = fitProfiles(problem, summit, fallOfInterval, onProgress);
   }
+  if (profiles.higher) throw notSettled();
   const fit = fitLikelihood(problem, parametersAt(problem, summit.at));
-  refuseExact(problem, fit);
-
   const { feedback, exchange, heatCapacity, deepHeatCapacity } = fit.parameters;
   const { low, high } = profiles.feedback;
   const isEcsBoundedAbove = profiles.fallAtZeroFeedback > fallOfInterval;
   const toEcs = (lambda: number | null) => (lambda === null || lambda < NO_FEEDBACK ? null : doublingWm2 / lambda);
+  const ecsHighK = isEcsBoundedAbove ? toEcs(low) : null;
   return {
     feedbackWm2PerK: feedback,
     exchangeWm2PerK: exchange,
@@ -67,7 +69,7 @@ export function twoLayerFit(input: TwoLayerFitInput, onProgress?: (shareDone: nu
     intervals: {
       feedbackWm2PerK: { low, high, levelPercent },
       exchangeWm2PerK: { ...profiles.exchange, levelPercent },
-      ecsK: { low: toEcs(high), high: isEcsBoundedAbove ? toEcs(low) : null, levelPercent },
+      ecsK: { low: toEcs(high), high: ecsHighK, levelPercent },
     },
     isEcsBoundedAbove,
     fallAtZeroFeedback: profiles.fallAtZeroFeedback,
@@ -76,7 +78,7 @@ export function twoLayerFit(input: TwoLayerFitInput, onProgress?: (shareDone: nu
     temperature: recordAnswer(fit.temperature),
     heatUptake: recordAnswer(fit.heatUptake),
     starts: { nClimbs: summit.nClimbs, nAtTop: summit.nAtTop },
-    caveats: fitCaveats({ problem, fit, profiles, fallOfInterval, isEcsBoundedAbove, summit }),
+    caveats: fitCaveats({ problem, fit, profiles, fallOfInterval, isEcsBoundedAbove, ecsHighK, summit }),
   };
 }
 
@@ -84,6 +86,16 @@ function recordAnswer(errors: FittedErrors['temperature']): TwoLayerFitValue['te
   if (!errors) return null;
   const { level, rho, sigma, model } = errors;
   return { nObs: model.length, offset: level, rho, sigma, fitted: Array.from(model, (value) => value + level) };
+}
+
+function notSettled(): NumericError {
+  return new NumericError({
+    code: 'not-settled',
+    where: 'twoLayerFit',
+    expected: 'a likelihood with one highest point',
+    received: `a higher one than the last, ${MOST_SUMMITS} times`,
+    hint: 'The records hardly tell the parameters apart: give heat capacities instead of fitting them, or a longer record.',
+  });
 }
 
 /** A record that was computed has no errors that could say anything. */

@@ -23,6 +23,7 @@ const calm: Doubts = {
   profiles: { feedback: { low: 1, high: 2 }, exchange: { low: 0.1, high: 2 }, fallAtZeroFeedback: 4 },
   fallOfInterval: 1.92,
   isEcsBoundedAbove: true,
+  ecsHighK: 20,
   summit: { nClimbs: 6, nAtTop: 6 },
 };
 const codes = (change: Partial<Doubts>) => fitCaveats({ ...calm, ...change }).map(({ code }) => code);
@@ -34,6 +35,7 @@ it('fitCaveats always names what was taken as known, and nothing else without re
 
 it.each<[string, Partial<Doubts>]>([
   ['ecs-unbounded-above', { isEcsBoundedAbove: false }],
+  ['ecs-hardly-bounded', { ecsHighK: 20.1 }],
   ['feedback-unbounded', { profiles: { ...calm.profiles, feedback: { low: 1, high: null } } }],
   ['exchange-unbounded', { profiles: { ...calm.profiles, exchange: { low: 1, high: null } } }],
   ['one-record', { problem: { ...calm.problem, heatUptake: null } }],

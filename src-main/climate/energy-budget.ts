@@ -1,3 +1,4 @@
+import normalQuantile from '@stdlib/stats-base-dists-normal-quantile';
 import type { EnergyBudgetAnswer, EnergyBudgetRequest, Spread } from '../contract/energy-budget.ts';
 import type { Caveat } from '../contract/primitives.ts';
 import { NumericError } from '../errors.ts';
@@ -9,6 +10,9 @@ import { quantilesWithUnbounded } from './quantiles-with-unbounded.ts';
 
 /** Draws per random stream. Part of the numbers: changing it changes the digits of every stored result. */
 const drawsPerBlock = 65_536;
+
+/** Quantile of the normal distribution at 95 %: the ends of 5–95 %. */
+const z95 = normalQuantile(0.95, 0, 1);
 
 const levels = [0.05, 0.17, 0.5, 0.83, 0.95] as const;
 
@@ -153,7 +157,9 @@ function fiellerSets(
     covariance: warming.centre * correlation * sd(doubling) * sd(forcing),
   };
   const set = (denominator: number, denominatorVariance: number) =>
-    denominator === 0 ? null : fieller({ ...numerator, denominator, denominatorVariance }, 90);
+    denominator === 0
+      ? null
+      : { ...fieller({ ...numerator, denominator, denominatorVariance, multiple: z95 }), levelPercent: 90 };
   return {
     effcs: set(forcing.centre - uptake.centre, sd(forcing) ** 2 + sd(uptake) ** 2),
     tcr: set(forcing.centre, sd(forcing) ** 2),

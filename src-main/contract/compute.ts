@@ -3,6 +3,7 @@ import { evidence, statement, tolerance } from './claim.ts';
 import { anchor, procedure, slopeCovariance } from './procedure.ts';
 import { carbonMethods } from './carbon.ts';
 import { energyBudgetAnswer, energyBudgetRequest } from './energy-budget.ts';
+import { climateResponseMethods } from './climate-response.ts';
 import { estimatorComparison } from './estimator-comparison.ts';
 import { forcingMethods } from './forcing.ts';
 import { column, lineMethods, predictors, rowYears } from './line-estimators.ts';
@@ -81,6 +82,7 @@ export const computeMethods = {
   ...seriesTestMethods,
   ...specificationTestMethods,
   ...resamplingMethods,
+  ...climateResponseMethods,
   'window-sweep': { input: windowSweepRequest, value: windowSweep },
   ...forcingMethods,
   ...carbonMethods,

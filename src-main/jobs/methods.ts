@@ -4,7 +4,12 @@ import { exchange } from '../climate/carbon/exchange.ts';
 import { energyBudget } from '../climate/energy-budget.ts';
 import { compareEstimators } from '../climate/estimators/compare-estimators.ts';
 import { forcing } from '../climate/forcing/forcing.ts';
+import { coupledSlope } from '../climate/coupled-slope.ts';
+import { gregory } from '../climate/gregory.ts';
 import { recompute } from '../climate/procedures/recompute.ts';
+import { twoLayer } from '../climate/two-layer/two-layer.ts';
+import { twoLayerEnsemble } from '../climate/two-layer/two-layer-ensemble.ts';
+import { twoLayerFit } from '../climate/two-layer/two-layer-fit.ts';
 import type {
   LeaveOneOutInput,
   LeaveOneOutValue,
@@ -65,6 +70,11 @@ export const methods: Methods = {
   reset: (input) => resetTest(input),
   chow: (input) => chowTest(input),
   cusum: (input) => cusum(input),
+  'two-layer': (input) => twoLayer(input),
+  'two-layer-ensemble': (input, onProgress) => twoLayerEnsemble(input, onProgress),
+  'two-layer-fit': (input, onProgress) => twoLayerFit(input, onProgress),
+  gregory: (input) => gregory(input),
+  'coupled-slope': (input, onProgress) => coupledSlope(input, onProgress),
   'window-sweep': (input, onProgress) => windowSweep(input, onProgress),
   forcing: (input) => forcing(input),
   exchange: (input) => exchange(input),

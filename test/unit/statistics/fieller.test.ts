@@ -15,8 +15,9 @@ describe('fieller', () => {
       numeratorVariance: 0.31,
       denominatorVariance: 0.12,
       covariance: 0.04,
+      multiple: z90,
     };
-    const { low, high } = fieller(ratio, 90);
+    const { low, high } = fieller(ratio);
     for (const end of [low ?? NaN, high ?? NaN]) {
       const distance = Math.abs(ratio.numerator - end * ratio.denominator);
       const sd = Math.sqrt(
@@ -29,26 +30,47 @@ describe('fieller', () => {
   });
 
   it('is the interval of the numerator when the denominator is known', () => {
-    const known = { numerator: 3, denominator: 2, numeratorVariance: 0.25, denominatorVariance: 0, covariance: 0 };
-    const { low, high } = fieller(known, 90);
+    const known = {
+      numerator: 3,
+      denominator: 2,
+      numeratorVariance: 0.25,
+      denominatorVariance: 0,
+      covariance: 0,
+      multiple: z90,
+    };
+    const { low, high } = fieller(known);
     expectClose(low, (3 - z90 * 0.5) / 2, rounding);
     expectClose(high, (3 + z90 * 0.5) / 2, rounding);
   });
 
   it('is open towards infinity, on the side of the estimate, when the denominator may be zero', () => {
-    const weak = { numerator: 3, denominator: 1, numeratorVariance: 0.04, denominatorVariance: 1, covariance: 0 };
-    const above = fieller(weak, 90);
+    const weak = {
+      numerator: 3,
+      denominator: 1,
+      numeratorVariance: 0.04,
+      denominatorVariance: 1,
+      covariance: 0,
+      multiple: z90,
+    };
+    const above = fieller(weak);
     expect(above.high).toBeNull();
     expect(above.low).toBeGreaterThan(0);
     expect(above.low).toBeLessThan(3);
-    const below = fieller({ ...weak, numerator: -3 }, 90);
+    const below = fieller({ ...weak, numerator: -3 });
     expect(below.low).toBeNull();
     expectClose(below.high, -(above.low ?? NaN), rounding);
   });
 
   it('is the whole line when both may be zero', () => {
-    const vague = { numerator: 0.1, denominator: 0.1, numeratorVariance: 1, denominatorVariance: 1, covariance: 0 };
-    expect(fieller(vague, 90)).toEqual({ low: null, high: null, levelPercent: 90 });
+    const vague = {
+      numerator: 0.1,
+      denominator: 0.1,
+      numeratorVariance: 1,
+      denominatorVariance: 1,
+      covariance: 0,
+      multiple: z90,
+    };
+    expect(fieller(vague)).toEqual({ low: null, high: null });
   });
 
   it('covers the true ratio as often as it says', () => {
@@ -60,10 +82,14 @@ describe('fieller', () => {
       const shared = stream.normal();
       const numerator = truth.numerator + 0.4 * shared + 0.3 * stream.normal();
       const denominator = truth.denominator + 0.2 * shared + 0.2 * stream.normal();
-      const { low, high } = fieller(
-        { numerator, denominator, numeratorVariance: 0.25, denominatorVariance: 0.08, covariance: 0.08 },
-        90,
-      );
+      const { low, high } = fieller({
+        numerator,
+        denominator,
+        numeratorVariance: 0.25,
+        denominatorVariance: 0.08,
+        covariance: 0.08,
+        multiple: z90,
+      });
       if ((low === null || low <= 3) && (high === null || high >= 3)) nCovering++;
     }
     const bound = 4.5 * Math.sqrt((0.9 * 0.1) / nTrials);
@@ -75,7 +101,14 @@ describe('fieller', () => {
     { change: { numeratorVariance: -1 }, says: /numeratorVariance/ },
     { change: { covariance: NaN }, says: /covariance: expected a finite number/ },
   ])('refuses $change', ({ change, says }) => {
-    const ratio = { numerator: 3, denominator: 2, numeratorVariance: 1, denominatorVariance: 1, covariance: 0 };
-    expect(() => fieller({ ...ratio, ...change }, 90)).toThrow(says);
+    const ratio = {
+      numerator: 3,
+      denominator: 2,
+      numeratorVariance: 1,
+      denominatorVariance: 1,
+      covariance: 0,
+      multiple: z90,
+    };
+    expect(() => fieller({ ...ratio, ...change })).toThrow(says);
   });
 });

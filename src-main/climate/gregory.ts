@@ -3,6 +3,7 @@ import type { GregoryInput, GregoryLine, GregoryValue } from '../contract/climat
 import type { RegressionRequest } from '../contract/compute.ts';
 import { InputError } from '../errors.ts';
 import { deming } from '../statistics/deming.ts';
+import { fieller } from '../statistics/fieller.ts';
 import { finiteNumber, finiteValues } from '../statistics/finite-values.ts';
 import { regression } from '../statistics/regression.ts';
 import { mean } from '../statistics/summation.ts';

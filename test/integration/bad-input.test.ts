@@ -1,5 +1,8 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { carbonMethods } from '../../src-main/contract/carbon.ts';
+import { climateResponseMethods } from '../../src-main/contract/climate-response.ts';
 import { computeMethods, type ComputeMethod } from '../../src-main/contract/compute.ts';
+import { forcingMethods } from '../../src-main/contract/forcing.ts';
 import type { ErrorAnswer } from '../../src-main/contract/requests.ts';
 import { isFootingError } from '../../src-main/errors.ts';
 import { runMethod } from '../../src-main/jobs/methods.ts';
@@ -40,9 +43,10 @@ const firstRows = (request: Record<string, unknown>, nKept: number) =>
   );
 
 it('goes through every method of the statistics', () => {
-  const others = ['energy-budget', 'derivation', 'recomputation', 'assumptions', 'claim-sweep', 'estimators'];
+  const climate = Object.keys({ ...forcingMethods, ...carbonMethods, ...climateResponseMethods });
+  const ofClaims = ['energy-budget', 'derivation', 'recomputation', 'assumptions', 'claim-sweep', 'estimators'];
   const covered = new Set(given.map(({ method }) => method));
-  expect([...covered, ...others].sort()).toEqual(Object.keys(computeMethods).sort());
+  expect([...covered, ...climate, ...ofClaims].sort()).toEqual(Object.keys(computeMethods).sort());
 });
 
 describe.each(given)('$name', ({ method, request, fewRows, constantPredictor, allTied, lagOfN }) => {

@@ -109,7 +109,7 @@ describe('claimSweep', () => {
       {},
       { unit: '1', quantity: 'ratio' },
     );
-    expect(() => claimSweep({ ...ratio, minYears: 20 })).toThrow(/there is nothing to sweep/);
+    expect(() => claimSweep({ ...ratio, minYears: 20 })).toThrow(/no start and end year to sweep/);
     expect(() => claimSweep({ ...logClaim({}), minYears: 37 })).toThrow(/at most the 36 years/);
   });
 });

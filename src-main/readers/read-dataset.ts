@@ -19,6 +19,10 @@ export interface DatasetRead {
   notes: string[];
 }
 
+/** What reads delimited text reads the rows of a sheet, which has no delimiters. */
+const sheetReaders = readers.map((reader) =>
+  reader === delimited ? { ...reader, title: 'Table in a sheet' } : reader,
+);
 const nHeadRows = 20;
 /** The head shows this many lines from the first row on, and all above it. */
 const nHeadLines = 25;
@@ -36,7 +40,7 @@ export function previewDataset(
   const { fileName, sizeBytes, content } = opened;
   const { reader, why, reading, lines, sheet, notes } = readFile(opened, options);
   const firstLine = reading.table.lines[0]?.line ?? 1;
-  const choices = content.kind === 'variables' ? [netCdf] : readers;
+  const choices = content.kind === 'variables' ? [netCdf] : content.kind === 'workbook' ? sheetReaders : readers;
   return {
     fileName,
     sizeBytes,
@@ -130,8 +134,8 @@ function readSheet(fileName: string, sheets: readonly Sheet[], options: ReadOpti
   try {
     const reading = reader.read(sheet.file, { ...options.delimited, delimiter: ',' });
     return {
-      reader,
-      why,
+      reader: sheetReaders.find(({ id }) => id === reader.id) ?? reader,
+      why: why.replace('Columns separated by commas, a header in line', 'The sheet has a header in row'),
       reading,
       lines: sheet.file.lines,
       sheet: sheet.name,

@@ -87,12 +87,14 @@ function statedUnit(text: string): string | null {
   return [...temperatureUnits, ...otherUnits].find(([pattern]) => pattern.test(text))?.[1] ?? null;
 }
 
-/** A unit that the text above the table states for all columns: “Units: K”, or a line that holds a unit and nothing else. */
+/** A unit that the text above the table states for all columns: “Units: K”, or a line that begins with a cell of it alone. */
 function unitOfAll(preamble: string): string | null {
   const stated = /^[^\n]*\bunits?\s*[:=]\s*([^\n]+)/im.exec(preamble)?.[1];
   if (stated !== undefined) return statedUnit(stated);
-  const alone = preamble.split('\n').map((line) => line.replaceAll(/^[\s"#%(,;]+|[\s"),;]+$/g, ''));
-  return statedUnit(alone.find((line) => line.length <= 12 && statedUnit(line) !== null) ?? '');
+  const cells = preamble
+    .split('\n')
+    .map((line) => (line.split(/[,;\t]/)[0] ?? '').replaceAll(/^[\s"#%(]+|[\s")]+$/g, ''));
+  return statedUnit(cells.find((cell) => cell.length <= 12 && statedUnit(cell) !== null) ?? '');
 }
 
 /** The one unit of the quantity that the text above the table mentions; null when it mentions none or several. */

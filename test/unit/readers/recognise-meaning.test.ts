@@ -65,7 +65,7 @@ describe('unit and quantity from the words of the file', () => {
 
   it('takes a unit that stands alone over the table, or over the column of years, for all columns', () => {
     const rows = '1990,1.5,2\n1991,1.75,2\n1992,2,2\n';
-    for (const head of ['GtC/yr\nyear,a,b\n', 'GtC/yr,,x\nyear,a,b\n']) {
+    for (const head of ['GtC/yr\nyear,a,b\n', 'GtC/yr,,x\nyear,a,b\n', 'GtC/yr,,members of it\nyear,a,b\n']) {
       expect(preview(`${head}${rows}`).series.map(({ unit }) => unit)).toEqual(['GtC/yr', 'GtC/yr']);
     }
   });

@@ -54,7 +54,14 @@ describe('openWorkbook', () => {
 
   it('is read as a table from the sheet that is recognised, or the one that is chosen', async () => {
     const found = await previewFile(bytes, 'book.xlsx');
-    expect(found).toMatchObject({ reader: { id: 'delimited' }, sheet: 'Readings', sheets: ['Readings', 'A & B'] });
+    expect(found).toMatchObject({
+      reader: { id: 'delimited', title: 'Table in a sheet' },
+      sheet: 'Readings',
+      sheets: ['Readings', 'A & B'],
+    });
+    expect(found.reader.why).toBe(
+      'The sheet has a header in row 3, years in year; no published layout that is known here',
+    );
     expect(offered(found, 'air-temperature-anomaly-c')).toMatchObject({
       unit: 'K',
       quantity: 'temperature-anomaly',

@@ -7,17 +7,23 @@ import { openWorkbook } from './workbook/open-workbook.ts';
 type Opener = (fileName: string, bytes: Uint8Array) => Promise<FileContent>;
 
 /** Files that are no text, by their first bytes: what is in them counts, not how they are called. */
-const openers: readonly { start: readonly number[]; open: Opener }[] = [
+const openers: readonly { starts: readonly (readonly number[])[]; open: Opener }[] = [
   {
-    start: [0x50, 0x4b],
+    // A zip archive: one with parts, an empty one, one of several volumes.
+    starts: [
+      [0x50, 0x4b, 3, 4],
+      [0x50, 0x4b, 5, 6],
+      [0x50, 0x4b, 7, 8],
+    ],
     open: async (fileName, bytes) => ({ kind: 'workbook', sheets: await openWorkbook(fileName, bytes) }),
   },
   {
-    start: [0x43, 0x44, 0x46],
+    // Classic format, 64-bit offsets, 64-bit data.
+    starts: [1, 2, 5].map((version) => [0x43, 0x44, 0x46, version]),
     open: async (fileName, bytes) => ({ kind: 'variables', file: openNetCdf3(fileName, bytes) }),
   },
   {
-    start: [0x89, 0x48, 0x44, 0x46],
+    starts: [[0x89, 0x48, 0x44, 0x46]],
     open: async (fileName, bytes) => ({ kind: 'variables', file: await openNetCdf4(fileName, bytes) }),
   },
 ];
@@ -28,7 +34,9 @@ const openers: readonly { start: readonly number[]; open: Opener }[] = [
  * @throws InputError naming the file, what was expected and what to do when it is none of them or damaged
  */
 export async function openFile(fileName: string, bytes: Uint8Array): Promise<OpenedFile> {
-  const opener = openers.find(({ start }) => start.every((byte, place) => bytes[place] === byte));
+  const opener = openers.find(({ starts }) =>
+    starts.some((start) => start.every((byte, place) => bytes[place] === byte)),
+  );
   const content: FileContent = opener
     ? await opener.open(fileName, bytes)
     : { kind: 'text', file: decodeText(fileName, bytes) };

@@ -29,6 +29,7 @@ const otherUnits: readonly [RegExp, string][] = [
   [/\bppbv?\b|\bnmol[ /]*mol/i, 'ppb'],
   [/\bpptv?\b/i, 'ppt'],
   [/\bW ?\/? ?m ?\^?(?:[-−⁻]?2|²|⁻²|\*\*-?2)/i, 'W/m²'],
+  [/\b(?:Mt|Tg) ?C\b ?(?:\/ ?yr|yr ?\^?-1|per year)/i, 'MtC/yr'],
   [/\b(?:Gt|Pg) ?C\b ?(?:\/ ?yr|yr ?\^?-1|per year)/i, 'GtC/yr'],
   [/\bGt ?CO2\b ?(?:\/ ?yr|yr ?\^?-1|per year)/i, 'GtCO2/yr'],
   [/\bZJ\b/, 'ZJ'],
@@ -58,7 +59,7 @@ const largestSureAnomaly = 5;
  */
 export function recogniseMeaning(words: Words, values: SeriesValues): Meaning {
   const column = words.column.replaceAll('_', ' ');
-  const unit = statedUnit(column) ?? unitOfAll(words.preamble);
+  const unit = statedUnit(column) ?? (/per.?capita/i.test(column) ? null : unitOfAll(words.preamble));
   const quantity = quantityOf({ ...words, column }, unit, values);
   const fallback = unit ?? unitInText(words.preamble, quantity);
   const base = basePeriod(column, words.preamble, quantity);

@@ -4,54 +4,85 @@ import { type Attributes, type Dimension, type Variable, type VariableFile, maxV
 
 type Stored = NetCDFReader['variables'][number];
 
-const bytesPerValue: Record<string, number> = { byte: 1, char: 1, short: 2, int: 4, float: 4, double: 8 };
+/** Types of the format, all big-endian; a `char` is text. */
+const types: Readonly<Record<string, { nBytes: number; get: (view: DataView, at: number) => number }>> = {
+  byte: { nBytes: 1, get: (view, at) => view.getInt8(at) },
+  short: { nBytes: 2, get: (view, at) => view.getInt16(at) },
+  int: { nBytes: 4, get: (view, at) => view.getInt32(at) },
+  float: { nBytes: 4, get: (view, at) => view.getFloat32(at) },
+  double: { nBytes: 8, get: (view, at) => view.getFloat64(at) },
+};
 
 /**
- * Opens a NetCDF-3 file (classic format, or with 64-bit offsets).
+ * Opens a NetCDF-3 file (classic format, or with 64-bit offsets). The header is read by a library; the values, of which
+ * a field in time has millions, where the header says that they lie.
  *
  * @throws InputError `damaged-file`
  */
 export function openNetCdf3(fileName: string, bytes: Uint8Array): VariableFile {
   try {
-    const reader = new NetCDFReader(Uint8Array.from(bytes).buffer);
-    const { recordDimension } = reader.header;
-    const dimensionsOf = (variable: Stored): Dimension[] =>
-      variable.dimensions.map((id) => {
-        const { name = '', size = 0 } = reader.dimensions[id] ?? {};
-        return { name, size: id === recordDimension.id ? recordDimension.length : size };
-      });
-    // The library takes each part with the bytes that fill it up to four; these are no values, and where one variable
-    // alone has records they are not there.
-    const bytesInStep = (variable: Stored): number =>
-      dimensionsOf(variable)
-        .slice(variable.record ? 1 : 0)
-        .reduce((product, { size }) => product * size, bytesPerValue[variable.type] ?? 8);
-    const [recorded, ...others] = reader.variables.filter(({ record }) => record);
-    if (recorded && others.length === 0) recordDimension.recordStep = bytesInStep(recorded);
+    const { header } = new NetCDFReader(Uint8Array.from(bytes).buffer);
+    const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.length);
+    const stepBytes = recordBytes(header);
     let nValues = 0;
-    const variables = reader.variables.map((variable): Variable => {
-      const dimensions = dimensionsOf(variable);
+    const variables = header.variables.map((variable): Variable => {
+      const dimensions = dimensionsOf(header, variable);
       const n = dimensions.reduce((product, { size }) => product * size, 1);
       // Nothing is packed in this format: values that the file has no room for are not there.
-      if (n * (bytesPerValue[variable.type] ?? 8) > bytes.length) throw new RangeError(variable.name);
+      if (n > bytes.length) throw new RangeError(variable.name);
       nValues += n;
-      const isRead = variable.type !== 'char' && nValues <= maxValues;
-      const values = isRead ? numbersIn(reader.getDataVariable({ ...variable, size: bytesInStep(variable) })) : null;
       return {
         name: variable.name,
         dimensions,
         attributes: attributesOf(variable.attributes),
-        values: variable.type === 'byte' && values ? Int8Array.from(values) : values,
+        values: nValues <= maxValues ? valuesOf(view, variable, dimensions, stepBytes) : null,
       };
     });
-    return { fileName, format: 'NetCDF-3', attributes: attributesOf(reader.globalAttributes), variables };
+    return { fileName, format: 'NetCDF-3', attributes: attributesOf(header.globalAttributes), variables };
   } catch {
     throw damagedNetCdf(fileName, 'a NetCDF-3 file that ends too early or contradicts itself');
   }
 }
 
-function numbersIn(values: readonly (string | number | readonly number[])[]): Float64Array {
-  return Float64Array.from(values.flat().map(Number));
+type Header = NetCDFReader['header'];
+
+function dimensionsOf({ dimensions, recordDimension }: Header, variable: Stored): Dimension[] {
+  return variable.dimensions.map((id) => {
+    const { name = '', size = 0 } = dimensions[id] ?? {};
+    return { name, size: id === recordDimension.id ? recordDimension.length : size };
+  });
+}
+
+/** From one record to the next: what all recorded variables take, each filled up to four bytes unless it is alone. */
+function recordBytes(header: Header): number {
+  const sizes = header.variables
+    .filter(({ record }) => record)
+    .map((variable) =>
+      dimensionsOf(header, variable)
+        .slice(1)
+        .reduce((product, { size }) => product * size, types[variable.type]?.nBytes ?? 1),
+    );
+  return sizes.length === 1 ? (sizes[0] ?? 0) : sizes.reduce((sum, nBytes) => sum + Math.ceil(nBytes / 4) * 4, 0);
+}
+
+/** @throws RangeError where the file ends before its values do */
+function valuesOf(
+  view: DataView,
+  { type, offset, record }: Stored,
+  dimensions: readonly Dimension[],
+  stepBytes: number,
+): Float64Array | null {
+  const stored = types[type];
+  if (stored === undefined) return null;
+  const { nBytes, get } = stored;
+  const nInStep = dimensions.slice(record ? 1 : 0).reduce((product, { size }) => product * size, 1);
+  const nSteps = record ? (dimensions[0]?.size ?? 0) : 1;
+  const values = new Float64Array(nSteps * nInStep);
+  for (let step = 0; step < nSteps; step += 1) {
+    const start = offset + step * stepBytes;
+    for (let place = 0; place < nInStep; place += 1) values[step * nInStep + place] = get(view, start + place * nBytes);
+  }
+  return values;
 }
 
 function attributesOf(given: readonly { name: string; value: unknown }[]): Attributes {

@@ -36,6 +36,10 @@ describe('openFile', () => {
     }
   });
 
+  it.each(['PK,year\n1,1990\n2,1991\n', 'CDF,year\n1,1990\n2,1991\n'])('takes text for text: %j', async (text) => {
+    expect((await openFile('a.csv', bytesOf(text))).content.kind).toBe('text');
+  });
+
   it.each([
     ['no bytes', '', 'empty-file'],
     ['a web page saved under the name of a table', '<!DOCTYPE html><html>404</html>', 'web-page'],

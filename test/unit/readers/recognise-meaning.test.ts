@@ -68,6 +68,8 @@ describe('unit and quantity from the words of the file', () => {
     for (const head of ['GtC/yr\nyear,a,b\n', 'GtC/yr,,x\nyear,a,b\n', 'GtC/yr,,members of it\nyear,a,b\n']) {
       expect(preview(`${head}${rows}`).series.map(({ unit }) => unit)).toEqual(['GtC/yr', 'GtC/yr']);
     }
+    const perHead = preview(`MtC/yr\nyear,Coal,Per.Capita\n${rows}`).series.map(({ unit }) => unit);
+    expect(perHead).toEqual(['MtC/yr', '']);
   });
 
   it('reads title lines above the table', () => {

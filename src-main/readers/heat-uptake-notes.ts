@@ -8,6 +8,8 @@ const earthSurfaceM2 = 5.101e14;
  * imbalance of 0.79 [0.52 to 1.06] W/m² for 2006–2018, of which the ocean takes 91 %; a layer takes a part of it.
  */
 const plausibleWm2 = { low: 0.1, high: 2.5 };
+/** Standard errors and shares have no such trend. */
+const noTrendWm2 = 0.005;
 const minYears = 8;
 
 /**
@@ -27,6 +29,7 @@ export function heatUptakeNotes(
   if (first === undefined || last === undefined || last.time - first.time < minYears) return [];
   const unitsPerYear = slopeOf(points);
   const uptakeWm2 = (unitsPerYear * joulesPerUnit) / secondsPerYear / earthSurfaceM2;
+  if (Math.abs(uptakeWm2) < noTrendWm2) return [];
   const stated = `The trend of ${column} is a heat uptake of ${Number(uptakeWm2.toPrecision(2))} W/m² over the Earth’s surface`;
   if (uptakeWm2 > plausibleWm2.high || (uptakeWm2 > 0 && uptakeWm2 < plausibleWm2.low)) {
     return [

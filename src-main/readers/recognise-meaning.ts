@@ -33,7 +33,7 @@ const otherUnits: readonly [RegExp, string][] = [
   [/\b(?:Gt|Pg) ?C\b ?(?:\/ ?yr|yr ?\^?-1|per year)/i, 'GtC/yr'],
   [/\bGt ?CO2\b ?(?:\/ ?yr|yr ?\^?-1|per year)/i, 'GtCO2/yr'],
   [/\bZJ\b/, 'ZJ'],
-  [/(?:\b1?0(?:\^|\*\*)?22|\b1e\+?22|10²²) ?J\b/, '10²² J'],
+  [/(?:\b10(?:\^|\*\*)?22|\b1e\+?22|10²²) ?(?:J\b|joules?\b)/i, '10²² J'],
   [/[([]\s*%\s*[)\]]|\bin percent\b|(?<=\s)%$/, '%'],
 ];
 /** What Joules a unit of heat is. */
@@ -84,7 +84,8 @@ function fahrenheitNote(column: string): string {
   return `“${column}” is in °F: a difference of 1.8 °F is one of 1 K, and computations divide by that.`;
 }
 
-function statedUnit(text: string): string | null {
+/** The unit that words state; null when they state none that is known here. */
+export function statedUnit(text: string): string | null {
   return [...temperatureUnits, ...otherUnits].find(([pattern]) => pattern.test(text))?.[1] ?? null;
 }
 

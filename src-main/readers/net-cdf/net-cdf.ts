@@ -16,6 +16,8 @@ import { describeVariable } from './variable-meaning.ts';
 interface Column {
   variable: Variable;
   values: (number | null)[];
+  /** A field in space, of which the values are area means. */
+  isField: boolean;
 }
 
 /** Columns on one time axis, in order of time. */
@@ -54,7 +56,10 @@ export const netCdf = {
     const [first] = arranged;
     if (first === undefined) throw noSeries(file, refusals);
     const series = withOwnKeys(arranged.flatMap((one) => offered(file, one, notes)));
-    const main = series.find(({ quantity, label }) => quantity !== 'other' && !isUncertaintyName(label)) ?? series[0];
+    const main =
+      series.find(({ quantity }) => quantity !== 'other') ??
+      series.find(({ label }) => !/uncertainty|standard.?error|variance/i.test(label)) ??
+      series[0];
     const columns = ['time', ...first.columns.map(({ variable }) => variable.name)];
     return {
       series: series.map((one) => ({ ...one, isMain: one === main })),
@@ -106,11 +111,15 @@ function arrange(
     if ('refusal' in selected) refusals.push(`${variable.name} ${selected.refusal}`);
     else if (selected.values.every((value) => value === null)) refusals.push(`${variable.name} holds no value`);
     else {
-      columns.push({ variable, values: withoutMarks(variable, selected.values, notes) });
+      const isField = selected.notes.length > 0;
+      columns.push({ variable, values: withoutMarks(variable, selected.values, notes), isField });
       notes.push(...selected.notes);
     }
   }
-  return columns.length === 0 ? null : { axis, columns, read: rowsOf(file, axis, columns) };
+  if (columns.length === 0) return null;
+  // What the file itself gives as a series comes before what is made of a field.
+  const inOrder = columns.toSorted((a, b) => Number(a.isField) - Number(b.isField));
+  return { axis, columns: inOrder, read: rowsOf(file, axis, inOrder) };
 }
 
 /** Undeclared marks such as -999 are as missing as declared ones; so are negative uncertainties. */

@@ -1,4 +1,5 @@
 import type { Dataset, Group } from 'h5wasm';
+import { withinTime } from '../within-time.ts';
 import { damagedNetCdf } from './damaged-net-cdf.ts';
 import { type Attributes, type Dimension, type Variable, type VariableFile, maxValues } from './variable-file.ts';
 
@@ -8,6 +9,10 @@ const maxDepth = 4;
 const maxEntities = 2000;
 /** How NetCDF-4 marks a dimension that has no coordinates. */
 const noVariable = /^This is a netCDF dimension but not a netCDF variable/;
+
+/** Ten times as long as reading takes where nothing else runs. */
+const leastTimeMs = 3000;
+const leastBytesPerMs = 2000;
 
 /** How much may still be unpacked. */
 interface Room {
@@ -31,10 +36,13 @@ export async function openNetCdf4(fileName: string, bytes: Uint8Array): Promise<
   FS.writeFile(place, bytes);
   let file: InstanceType<typeof File> | null = null;
   try {
-    file = new File(place, 'r');
-    const room: Room = { nValues: maxValues, nEntities: maxEntities };
-    const variables = variablesOf(file, '', room, 0);
-    return { fileName, format: 'NetCDF-4', attributes: attributesOf(file), variables };
+    // In a damaged file the library may follow its references round in circles.
+    return withinTime(timeLimitMs(bytes.length), () => {
+      file = new File(place, 'r');
+      const room: Room = { nValues: maxValues, nEntities: maxEntities };
+      const variables = variablesOf(file, '', room, 0);
+      return { fileName, format: 'NetCDF-4', attributes: attributesOf(file), variables };
+    });
   } catch {
     throw damagedNetCdf(fileName, 'an HDF5 file that cannot be read to its end');
   } finally {
@@ -43,9 +51,13 @@ export async function openNetCdf4(fileName: string, bytes: Uint8Array): Promise<
   }
 }
 
+function timeLimitMs(nBytes: number): number {
+  return leastTimeMs + Math.ceil(nBytes / leastBytesPerMs);
+}
+
 function close(file: { close(): unknown } | null): void {
   try {
-    file?.close();
+    withinTime(leastTimeMs, () => file?.close());
   } catch {
     // A damaged file may not close either; the next one is opened under another name.
   }

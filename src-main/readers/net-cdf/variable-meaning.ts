@@ -2,7 +2,7 @@ import type { SeriesValues } from '../../contract/series.ts';
 import { isUncertaintyName } from '../delimited/recognise-value-columns.ts';
 import { nameOf, stemOf } from '../name-of.ts';
 import type { ReadSeries } from '../reader.ts';
-import { recogniseMeaning } from '../recognise-meaning.ts';
+import { recogniseMeaning, statedUnit } from '../recognise-meaning.ts';
 import { type Variable, type VariableFile, textOf } from './variable-file.ts';
 
 const tellingAttributes = [
@@ -35,19 +35,21 @@ export function describeVariable(
     values,
   );
   const isUncertainty = isUncertaintyName(name.replaceAll('_', ' ')) || /^uncertainty\b/i.test(longName);
+  // What is stated in joules or metres is no temperature, whatever its name says of anomalies.
+  const isOtherUnit = unit !== '' && statedUnit(column.replaceAll('_', ' ')) === null;
   return {
     series: {
       key: nameOf(name) || 'variable',
       suggestedName: nameOf(`${stemOf(file.fileName).slice(0, 80)} ${name}`),
       label: `${longName} (${name})`.slice(0, maxLabelLength),
       ...meaning,
-      ...(isUncertainty
+      ...(isUncertainty || isOtherUnit
         ? { quantity: 'other' as const, agent: null, baseline: null, baselineFrom: 'not needed' as const }
         : {}),
-      ...(meaning.unit === '' && unit !== '' ? { unit, unitFrom: 'file' as const } : {}),
+      ...(isOtherUnit ? { unit, unitFrom: 'file' as const } : {}),
     },
     notes: [
-      ...notes,
+      ...(isOtherUnit ? [] : notes),
       ...(isCelsiusDifference
         ? [`“${name}” is in °C in the file; differences are the same in K, so the unit is K.`]
         : []),

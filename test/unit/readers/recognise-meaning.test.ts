@@ -35,6 +35,7 @@ describe('unit and quantity from the words of the file', () => {
     ['share (%)', levels.celsius, 'other', '%'],
     ['heat (10^22 J)', levels.celsius, 'other', '10²² J'],
     ['heat, 1e22 J', levels.celsius, 'other', '10²² J'],
+    ['heat (10^22_joules)', levels.celsius, 'other', '10²² J'],
     ['emissions (PgC/yr)', levels.celsius, 'other', 'GtC/yr'],
     ['emissions [GtCO2/yr]', levels.celsius, 'other', 'GtCO2/yr'],
   ])('%s', (header, values, quantity, unit) => {

@@ -119,6 +119,33 @@ describe.each(formats)('%s', (_, write) => {
     expect(found.notes.join('\n')).toContain('void holds no value');
   });
 
+  it('keeps a unit that it does not know, prefers a series to a field, and takes no uncertainty for a forcing', async () => {
+    const bytes = await write(
+      annualFile([
+        series({
+          name: 'hc',
+          dimensions: ['time', 'lat', 'lon'],
+          attributes: { long_name: 'heat content anomaly', units: '10^18_joules' },
+          values: Array.from({ length: 18 }, () => 3),
+        }),
+        series({ name: 'total', attributes: { long_name: 'heat content', units: '10^22_joules' } }),
+        series({ name: 'sun', attributes: { long_name: 'irradiance', units: 'W m-2' }, values: [1360, 1361, 1362] }),
+        series({ name: 'sun_unc', attributes: { long_name: 'Uncertainty in irradiance', units: 'W m-2' } }),
+      ]),
+    );
+    const found = await previewFile(bytes, 'f.nc');
+    const told = found.series.map(({ key, quantity, unit }) => `${key}: ${quantity}, ${unit}`);
+    expect(told.toSorted()).toEqual([
+      'hc: other, 10^18_joules',
+      'sun-unc: other, W/m²',
+      'sun: other, W/m²',
+      'total: other, 10²² J',
+    ]);
+    // Variables have an order in NetCDF-3 and their names' in HDF5; the field comes last in both.
+    expect(['total', 'sun']).toContain(found.series.find(({ isMain }) => isMain)?.key);
+    expect(found.series.at(-1)?.key).toBe('hc');
+  });
+
   it('takes two variables that say so as the limits of a third, and the base period from comments', async () => {
     const limit = (name: string, percent: number, shift: number): WrittenVariable =>
       series({

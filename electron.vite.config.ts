@@ -6,6 +6,8 @@ const at = (path: string) => fileURLToPath(new URL(path, import.meta.url));
 
 export default defineConfig({
   main: {
+    // Its build for Node declares a `require` of its own, which the one that is put before each chunk forbids.
+    resolve: { alias: { fflate: 'fflate/browser' } },
     build: {
       outDir: 'out/main',
       externalizeDeps: { exclude: [] },

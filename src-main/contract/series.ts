@@ -101,6 +101,8 @@ export type SeriesChoice = z.infer<typeof seriesChoice>;
 export const readOptions = z.object({
   /** Absent: recognised from the content. */
   readerId: z.string().optional(),
+  /** The sheet of a workbook; absent: the one that is recognised. */
+  sheet: z.string().max(100).optional(),
   delimited: delimitedOptions.optional(),
 });
 export type ReadOptions = z.infer<typeof readOptions>;
@@ -131,6 +133,9 @@ export const importPreview = z.object({
   reader: z.object({ id: z.string(), title: z.string(), version: z.string(), why: z.string() }),
   /** All readers, so that the reviewer can choose another. */
   readers: z.array(readerChoice),
+  /** Of a workbook: the sheet that was read, and all that hold anything. */
+  sheet: z.string().nullable(),
+  sheets: z.array(z.string()),
   series: z.array(offeredSeries),
   nRows: z.int(),
   badRows: z.array(badRow),

@@ -7,6 +7,7 @@ import type { Project } from '../project/project.ts';
 import { annualMeans } from '../quantities/annual-means.ts';
 import { formatYears } from '../quantities/notation.ts';
 import { rebase } from '../quantities/rebase.ts';
+import { openFile } from '../readers/open-file.ts';
 import { previewDataset, readDataset } from '../readers/read-dataset.ts';
 import { readValues } from './claim-request.ts';
 import { refuseFrozen } from './claims.ts';
@@ -18,19 +19,19 @@ import { claimSeries } from './procedure-series.ts';
 type Names = 'data.preview' | 'data.import' | 'dataset.remove' | 'series.get' | 'series.update' | 'series.rebase';
 
 export const dataHandlers: Handlers<Names> = {
-  'data.preview'({ fileName, bytes, options }, { workspace }) {
+  async 'data.preview'({ fileName, bytes, options }, { workspace }) {
     const received = Buffer.from(bytes, 'base64');
     const digest = createHash('sha256').update(received).digest('hex');
     const earlier = workspace.project?.list('dataset').find((row) => row.contentDigest === digest);
-    const preview = previewDataset({ fileName, bytes: received, options });
+    const preview = previewDataset(await openFile(fileName, received), options);
     return { ...preview, digest, alreadyImportedAs: earlier?.id ?? null };
   },
 
-  'data.import'(input, { workspace, now }) {
-    const project = workspace.open();
+  async 'data.import'(input, { workspace, now }) {
     const received = Buffer.from(input.bytes, 'base64');
     const { fileName, options, choices } = input;
-    const read = readDataset({ fileName, bytes: received, options, choices });
+    const read = readDataset(await openFile(fileName, received), options, choices);
+    const project = workspace.open();
     refuseUndecided(input, read.badRows.length);
     const names = new Set(project.list('series').map((series) => series.name));
     const ids = workspace.change('import dataset', fileName, (change) => {

@@ -13,24 +13,9 @@ const maxLines = 300_000;
 /** First bytes of files that are no text, with what they are. */
 const signatures: readonly { bytes: readonly number[]; kind: string; hint: string }[] = [
   {
-    bytes: [0x50, 0x4b, 0x03, 0x04],
-    kind: 'a spreadsheet (.xlsx, .ods) or another zip archive',
-    hint: 'This kind of file is not read yet. Save the sheet that holds the numbers as CSV and import that.',
-  },
-  {
     bytes: [0xd0, 0xcf, 0x11, 0xe0],
-    kind: 'a spreadsheet of the older kind (.xls)',
-    hint: 'This kind of file is not read yet. Save the sheet that holds the numbers as CSV and import that.',
-  },
-  {
-    bytes: [0x89, 0x48, 0x44, 0x46],
-    kind: 'a NetCDF-4 or HDF5 file',
-    hint: 'This kind of file is not read yet. Export the time series as text and import that.',
-  },
-  {
-    bytes: [0x43, 0x44, 0x46],
-    kind: 'a NetCDF file',
-    hint: 'This kind of file is not read yet. Export the time series as text and import that.',
+    kind: 'a spreadsheet of the older kind (.xls), or one that a password locks',
+    hint: 'Files of that kind are not read. Save it as .xlsx without a password, or its sheet as CSV.',
   },
   {
     bytes: [0x25, 0x50, 0x44, 0x46],
@@ -57,7 +42,12 @@ export function decodeText(fileName: string, bytes: Uint8Array): TextFile {
     throw unreadable(fileName, 'empty-file', 'nothing but blanks', 'Look whether the download broke off.');
   }
   if (text.includes('\0')) {
-    throw unreadable(fileName, 'not-text', 'binary content', 'This kind of file is not read yet. Export it as text.');
+    throw unreadable(
+      fileName,
+      'not-text',
+      'binary content',
+      'Text, workbooks (.xlsx) and NetCDF are read. Export the numbers as one of these.',
+    );
   }
   if (/^\s*<(!doctype|html|\?xml)/i.test(text)) {
     throw unreadable(
@@ -68,7 +58,12 @@ export function decodeText(fileName: string, bytes: Uint8Array): TextFile {
     );
   }
   if (/^\s*(\[\s*)?[[{]\s*["[{]/.test(text)) {
-    throw unreadable(fileName, 'not-text', 'a JSON document', 'This kind of file is not read yet. Export a table.');
+    throw unreadable(
+      fileName,
+      'not-text',
+      'a JSON document',
+      'Files of that kind are not read. Export a table as CSV.',
+    );
   }
   const lines = text.split(/\r\n|\n|\r/);
   if (lines.at(-1) === '') lines.pop();

@@ -1,4 +1,5 @@
 import type { TextFile } from './decode-text.ts';
+import { heatUptakeNotes } from './heat-uptake-notes.ts';
 import { isNegative } from './missing-marks.ts';
 import { otherFormat } from './other-format.ts';
 import { readRows } from './read-rows.ts';
@@ -18,6 +19,8 @@ const areas = [
   { column: 'NH', id: 'north', name: 'northern hemisphere' },
   { column: 'SH', id: 'south', name: 'southern hemisphere' },
 ];
+/** The unit of the file, in J. */
+const joulesPerUnit = 1e22;
 const baseline = { start: 1955, end: 2006 };
 
 /** Ocean heat content of NOAA's National Centers for Environmental Information (h22-*.dat). */
@@ -73,6 +76,7 @@ export const oceanHeatContent: Reader = {
         ...read.notes,
         'The unit is 10²² J, of which one is ten zettajoules (ZJ). Values are differences from the mean of 1955–2006.',
         'Limits are one standard error to either side (68.27 %).',
+        ...heatUptakeNotes('WO', seriesValues(read.rows, 0), joulesPerUnit),
         ...(isPentadal ? ['Five-year means overlap from row to row, so neighbouring values are not independent.'] : []),
       ],
       columns: header,

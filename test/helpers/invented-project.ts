@@ -188,6 +188,8 @@ export const inventedPreview: ImportPreview = {
     { id: 'gistemp', title: 'GISTEMP table' },
     { id: 'noaa-co2-monthly', title: 'NOAA GML CO2, monthly' },
   ],
+  sheet: null,
+  sheets: [],
   series: [
     {
       key: 'column-1',

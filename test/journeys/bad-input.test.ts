@@ -62,7 +62,7 @@ describe('Data that cannot be used as it stands', () => {
 
   it.each([
     {
-      what: 'a workbook',
+      what: 'a broken workbook',
       name: 'readings.xlsx',
       bytes: Buffer.from('PK\u0003\u0004\u0014\u0000\u0006\u0000[Content_Types].xml', 'latin1'),
     },

@@ -16,6 +16,7 @@ export const importCommand: Command = {
   options: {
     as: { value: 'NAME', help: 'name of the series; for one file with one series' },
     reader: { value: 'ID', help: 'reader to use instead of the recognised one' },
+    sheet: { value: 'NAME', help: 'sheet of a workbook to use instead of the recognised one' },
     series: { value: 'KEY', help: 'take this series of the file; may be repeated', isRepeatable: true },
     all: { help: 'take all series of the file, not only its main ones' },
     quantity: { value: 'Q', help: seriesQuantity.options.join(', ') },
@@ -66,11 +67,12 @@ interface Wanted {
 }
 
 async function chooseFrom(file: string, args: CommandArguments, tools: CommandTools): Promise<Wanted> {
-  const reader = args.option('reader');
+  const readerId = args.option('reader');
+  const sheet = args.option('sheet');
   const given = {
     fileName: basename(file),
     bytes: tools.readFile(file).toString('base64'),
-    options: reader === undefined ? {} : { readerId: reader },
+    options: { ...(readerId === undefined ? {} : { readerId }), ...(sheet === undefined ? {} : { sheet }) },
   };
   const preview = await tools.ask('data.preview', given);
   const taken = takenSeries(preview, args);

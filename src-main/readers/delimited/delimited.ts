@@ -93,7 +93,8 @@ function layoutOf(file: TextFile, options: DelimitedOptions): Layout {
   const table = splitTable({ ...file, lines }, { delimiter: split.delimiter, commentMarks, headerLine });
   const time = recogniseTimeColumns(table, names, split, options);
   if (time === null) throw noTable(file, 'a column of years, months or dates');
-  const preamble = textAbove(file, split, headerLine);
+  // Where a unit stands over the column of years, it is that of the table.
+  const preamble = `${textAbove(file, split, headerLine)}\n${names[time.timeColumn] ?? ''}`;
   const values = recogniseValueColumns(table, { names, split, time, preamble }, options);
   return { split, names, table, time, values, preamble };
 }
@@ -115,6 +116,11 @@ function notesOn({ split, time, values, table }: Layout): string[] {
   if (time.note !== null) notes.push(time.note);
   if (values.wordColumns.length > 0) {
     notes.push(`Not offered, because they hold words: ${values.wordColumns.join(', ')}.`);
+  }
+  if (values.percentColumns.length > 0) {
+    notes.push(
+      `Not offered, because their numbers carry a percent sign: ${values.percentColumns.join(', ')}. Take the sign out of the file to read them, in %.`,
+    );
   }
   return notes;
 }

@@ -6,7 +6,7 @@ import { partialYears } from '../partial-years.ts';
 import type { RowsRead, ValueColumn } from '../row.ts';
 import type { ReadSeries } from '../reader.ts';
 import { monthsAcross, seriesValues } from '../series-values.ts';
-import { type Meaning, recogniseMeaning } from './recognise-meaning.ts';
+import { type Meaning, recogniseMeaning } from '../recognise-meaning.ts';
 import type { TimeColumns } from './recognise-time-columns.ts';
 import { isUncertaintyName, type ValueColumns } from './recognise-value-columns.ts';
 

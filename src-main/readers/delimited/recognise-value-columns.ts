@@ -14,6 +14,8 @@ export interface ValueColumns {
   missingMarks: string[];
   /** Names of columns left aside because they hold words. */
   wordColumns: string[];
+  /** Names of columns left aside because their numbers carry a percent sign. */
+  percentColumns: string[];
 }
 
 /** What stands for "no value" in all columns. */
@@ -51,7 +53,13 @@ export function recogniseValueColumns(
   const taken = [time.timeColumn, time.monthColumn, ...time.repeated];
   const candidates =
     options.valueColumns ?? names.map((_, column) => column).filter((column) => !taken.includes(column));
-  const found: ValueColumns = { columns: [], isMissingText: marks.isText, missingMarks: [], wordColumns: [] };
+  const found: ValueColumns = {
+    columns: [],
+    isMissingText: marks.isText,
+    missingMarks: [],
+    wordColumns: [],
+    percentColumns: [],
+  };
   for (const index of candidates) {
     const cells = table.lines.flatMap(({ cells: all }) => (all?.length === split.nCells ? [all[index] ?? ''] : []));
     const numbers = cells.map((cell) => (marks.isText(cell) ? null : parseNumber(cell, split.decimalMark)));
@@ -59,7 +67,8 @@ export function recogniseValueColumns(
     const nFilled = cells.filter((cell) => !marks.isText(cell)).length;
     const name = columnName(names, index);
     if (nNumbers === 0 || nNumbers * 2 <= nFilled) {
-      if (nFilled > 0) found.wordColumns.push(name);
+      const nPercents = cells.filter((cell) => /^[+-]?[\d.,]+ ?%$/.test(cell)).length;
+      if (nFilled > 0) (nPercents * 2 > nFilled ? found.percentColumns : found.wordColumns).push(name);
       continue;
     }
     const isUnnamed = names[index] === '' && names.some((other) => other !== '');
@@ -72,7 +81,7 @@ export function recogniseValueColumns(
     );
   }
   if (found.columns.length === 0) {
-    const words = found.wordColumns.slice(0, 5).join(', ');
+    const words = [...found.wordColumns, ...found.percentColumns].slice(0, 5).join(', ');
     throw noColumn(
       table,
       'no-numbers',

@@ -117,6 +117,43 @@ describe('a file on its way in', () => {
     expect(host.inputs('data.preview').at(-1)!.options).toEqual({ readerId: 'gistemp' });
   });
 
+  it('of several sheets can be read from another one, which is recognised anew', async () => {
+    const sheets = ['Quay', 'Harbour'];
+    const { screen, host } = await mountImport({ ...sound, sheet: 'Quay', sheets });
+    expect(
+      field(screen, 'Sheet')
+        .findAll('option')
+        .map((option) => option.text()),
+    ).toEqual(sheets);
+    expect(screen.text()).not.toContain('Columns are parted by');
+    expect(screen.text()).toContain('Row with the names');
+    await field(screen, 'Unit').setValue('K');
+    await field(screen, 'not known').setValue(true);
+
+    host.reply('data.preview', () => ({ ...sound, sheet: 'Harbour', sheets }));
+    await field(screen, 'Sheet').findAll('option')[1]!.setValue();
+    await settled();
+    expect(host.inputs('data.preview').at(-1)!.options).toEqual({ sheet: 'Harbour' });
+    expect((field(screen, 'Unit').element as HTMLInputElement).value).toBe('');
+
+    await field(screen, 'Read it as').findAll('option')[1]!.setValue();
+    await settled();
+    expect(host.inputs('data.preview').at(-1)!.options).toEqual({ readerId: 'gistemp', sheet: 'Harbour' });
+    await field(screen, 'Unit').setValue('K');
+    await field(screen, 'not known').setValue(true);
+    await button(screen, importButton).trigger('click');
+    await settled();
+    expect(host.inputs('data.import')).toMatchObject([{ options: { sheet: 'Harbour' } }]);
+  });
+
+  it('offers neither sheets nor readers where there is nothing to choose', async () => {
+    const [only] = sound.readers;
+    const { screen } = await mountImport({ ...sound, readers: [only!], sheet: 'Quay', sheets: ['Quay'] });
+    const labels = screen.findAll('label').map((label) => label.text());
+    expect(labels).not.toContain('Sheet');
+    expect(labels).not.toContain('Read it as');
+  });
+
   it('keeps the last good preview, and is not imported, when the new settings do not fit', async () => {
     const { screen, host } = await mountImport(sound);
     await field(screen, 'Unit').setValue('K');

@@ -150,11 +150,17 @@ describe('delimited: time', () => {
     expect(steps(valuesOf(text, preview(text).series[0]?.key ?? ''))).toEqual(expected);
   });
 
+  it('says that numbers with a percent sign are not offered', () => {
+    const found = preview('year,level,share\n1990,1.5,20%\n1991,1.7,-2.5 %\n1992,1.8,3%\n');
+    expect(found.series.map(({ key }) => key)).toEqual(['level']);
+    expect(found.notes.join('\n')).toContain('carry a percent sign: share');
+  });
+
   it('does not offer a column that repeats the time', () => {
     const found = preview('year month decimal level\n1990 1 1990.042 1.5\n1990 2 1990.125 1.7\n1990 3 1990.208 1.7\n');
     expect(found.series.map(({ key }) => key)).toEqual(['level']);
     const three = 'YearAD CH4spl YearAD CO2spl\n1 640.5 1.0 276.5\n2 640.1 2.0 276.7\n3 639.5 3.0 276.8\n';
-    expect(preview(three).series.map(({ key }) => key)).toEqual(['ch4spl', 'co2spl']);
+    expect(preview(three, { readerId: 'delimited' }).series.map(({ key }) => key)).toEqual(['ch4spl', 'co2spl']);
     expect(preview('1990 1.5 1990\n1991 1.7 1991\n1992 1.8 1992\n').series).toHaveLength(1);
   });
 

@@ -31,6 +31,13 @@ describe('unit and quantity from the words of the file', () => {
     ['CH4 (ppb)', ['1800', '1803', '1811'], 'other', 'ppb'],
     ['total forcing (W m-2)', levels.anomaly, 'forcing', 'W/m²'],
     ['ERF W/m²', levels.anomaly, 'forcing', 'W/m²'],
+    ['solar irradiance (W m-2)', ['1360.5', '1361', '1360.75'], 'other', 'W/m²'],
+    ['share (%)', levels.celsius, 'other', '%'],
+    ['heat (10^22 J)', levels.celsius, 'other', '10²² J'],
+    ['heat, 1e22 J', levels.celsius, 'other', '10²² J'],
+    ['heat (10^22_joules)', levels.celsius, 'other', '10²² J'],
+    ['emissions (PgC/yr)', levels.celsius, 'other', 'GtC/yr'],
+    ['emissions [GtCO2/yr]', levels.celsius, 'other', 'GtCO2/yr'],
   ])('%s', (header, values, quantity, unit) => {
     expect(first(header, values)).toMatchObject({ quantity, unit, unitFrom: 'file' });
   });
@@ -44,6 +51,26 @@ describe('unit and quantity from the words of the file', () => {
     ['rainfall', levels.small, 'other'],
   ])('leaves the unit of %s open', (header, values, quantity) => {
     expect(first(header, values)).toMatchObject({ quantity, unit: '', unitFrom: 'unknown' });
+  });
+
+  it.each([
+    ['tas (K)', ['286.5', '287.1', '287.9'], 'runs from 286.5 to 287.9 K: absolute temperatures, not anomalies'],
+    ['temp_C', levels.celsius, 'runs from 9.5 to 14.6 °C: absolute temperatures, not anomalies'],
+    ['temp (K)', levels.celsius, 'no absolute temperatures in K'],
+    ['temp (°C)', ['286.5', '287.1', '287.9'], 'that looks like K'],
+    ['anomaly_degF', levels.anomaly, 'a difference of 1.8 °F is one of 1 K'],
+  ])('speaks up on %s of %j', (header, values, said) => {
+    const rows = values.map((value, place) => `${1990 + place};${value}`).join('\n');
+    expect(preview(`year;${header}\n${rows}\n`).notes.join('\n')).toContain(said);
+  });
+
+  it('takes a unit that stands alone over the table, or over the column of years, for all columns', () => {
+    const rows = '1990,1.5,2\n1991,1.75,2\n1992,2,2\n';
+    for (const head of ['GtC/yr\nyear,a,b\n', 'GtC/yr,,x\nyear,a,b\n', 'GtC/yr,,members of it\nyear,a,b\n']) {
+      expect(preview(`${head}${rows}`).series.map(({ unit }) => unit)).toEqual(['GtC/yr', 'GtC/yr']);
+    }
+    const perHead = preview(`MtC/yr\nyear,Coal,Per.Capita\n${rows}`).series.map(({ unit }) => unit);
+    expect(perHead).toEqual(['MtC/yr', '']);
   });
 
   it('reads title lines above the table', () => {

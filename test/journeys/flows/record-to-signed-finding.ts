@@ -180,9 +180,7 @@ async function supplyEvidence(page: Page): Promise<void> {
   );
   await stored(page, () => assumptions.getByLabel('CO₂ forcing').selectOption({ label: 'erf-co2' }));
   await assumptions.getByRole('button', { name: 'Fill in the values of AR6 §7.5.2.1' }).click();
-  await expect(assumptions.getByLabel('Forcing of a CO₂ doubling, F2x, central value').inputValue()).resolves.toBe(
-    '3.93',
-  );
+  await expect(assumptions.getByLabel('Forcing of a CO₂ doubling, F2x, best value').inputValue()).resolves.toBe('3.93');
   await stored(page, () => assumptions.getByRole('button', { name: 'Keep these values' }).click());
 }
 

@@ -96,12 +96,43 @@ def energy_budget(n=1_000_000):
     return list(np.quantile(effcs, levels)) + list(np.quantile(doubling * warming / forcing, levels))
 
 
+def ensemble(members=100_000, years=274):
+    """The two modes of each member carried from year to year, forcing held within the year."""
+    draws = np.random.default_rng(2)
+    c, deep, gamma = draws.uniform(5, 10, members), draws.uniform(60, 150, members), draws.uniform(0.4, 1, members)
+    feedback, efficacy = draws.uniform(0.6, 1.8, members), draws.uniform(1, 1.5, members)
+    t = np.arange(years)
+    forcing = 3.7 * (t / years) ** 2 - 2.0 * (t % 37 == 20)
+    top, down, up = -(feedback + efficacy * gamma) / c, efficacy * gamma / c, gamma / deep
+    root = np.sqrt((top + up) ** 2 + 4 * down * up)
+    r1, r2 = (top - up + root) / 2, (top - up - root) / 2
+    e1, e2 = np.exp(r1), np.exp(r2)
+    p, q = (e1 - e2) / root, (r1 * e2 - r2 * e1) / root
+    a, b, d, e = q + p * top, p * down, p * up, q - p * up
+    g1, g2 = (1 - a - b) / feedback, (1 - d - e) / feedback
+    surface, below, x, y = np.zeros(members), np.zeros(members), np.empty(members), np.empty(members)
+    for year in range(years):
+        np.multiply(a, surface, out=x)
+        np.multiply(b, below, out=y)
+        x += y
+        np.multiply(g1, forcing[year], out=y)
+        x += y
+        np.multiply(d, surface, out=y)
+        below *= e
+        below += y
+        np.multiply(g2, forcing[year], out=y)
+        below += y
+        surface, x = x, surface
+    return list(np.quantile(surface, [0.05, 0.5, 0.95]))
+
+
 TASKS = {
     "sweep-annual": lambda: sweep("annual", 20, 5, origin=True),
     "sweep-annual-statsmodels": lambda: sweep_statsmodels("annual", 20, 5),
     "sweep-monthly": lambda: sweep("monthly", 240, 12, origin=False, step=6),
     "bootstrap": bootstrap,
     "energy-budget": energy_budget,
+    "ensemble": ensemble,
 }
 
 

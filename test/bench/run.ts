@@ -8,6 +8,7 @@ import { caseOfFitting } from './fitting-a-line.ts';
 import { caseOfOpening } from './opening-a-project.ts';
 import { printRatios } from './print-ratios.ts';
 import { caseOfRecomputing } from './recomputing-a-claim.ts';
+import { caseOfEnsemble } from './running-an-ensemble.ts';
 import { caseOfSweepingMonths } from './sweeping-months.ts';
 import { caseOfSweeping } from './sweeping-windows.ts';
 
@@ -19,5 +20,6 @@ const isAllWell = await printRatios([
   caseOfSweepingMonths,
   caseOfBootstrapping,
   caseOfEnergyBudget,
+  caseOfEnsemble,
 ]);
 if (!isAllWell) process.exitCode = 1;

@@ -1,30 +1,19 @@
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import { carbonMethods } from '../../src-main/contract/carbon.ts';
 import { climateResponseMethods } from '../../src-main/contract/climate-response.ts';
 import { computeMethods, type ComputeMethod } from '../../src-main/contract/compute.ts';
 import { forcingMethods } from '../../src-main/contract/forcing.ts';
-import type { ErrorAnswer } from '../../src-main/contract/requests.ts';
 import { isFootingError } from '../../src-main/errors.ts';
 import { runMethod } from '../../src-main/jobs/methods.ts';
+import { computing } from '../helpers/compute-tests.ts';
 import { statisticsCases, x, y } from '../helpers/statistics-cases.ts';
-import { testCore, type TestCore } from '../helpers/test-core.ts';
 
 // What a hostile or a hasty user gives to the statistics. Each is refused by name, with what was expected, what came and
 // the way out; where a fit does exist, its answer says by a caveat what it lacks. No answer holds NaN.
 
 const given = Object.entries(statisticsCases).map(([name, one]) => ({ name, ...one }));
 
-let test: TestCore;
-beforeAll(async () => {
-  test = await testCore();
-});
-afterAll(() => test.end());
-
-/** As a program on the other side of a pipe sees it. */
-async function compute(method: ComputeMethod, input: object): Promise<{ value?: unknown; error?: ErrorAnswer }> {
-  const answer = await test.core.handle('compute', JSON.parse(JSON.stringify({ method, ...input })));
-  return answer.ok ? { value: answer.value } : { error: answer.error };
-}
+const compute = computing();
 
 async function expectRefusal(method: ComputeMethod, input: object, code: string): Promise<void> {
   const { value, error } = await compute(method, input);

@@ -1,21 +1,8 @@
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { computeMethods } from '../../src-main/contract/compute.ts';
+import { expect, it } from 'vitest';
 import type { ErrorAnswer } from '../../src-main/contract/requests.ts';
-import { schemaOf } from '../../src-main/hosts/command-line/json-schemas.ts';
-import { testCore, type TestCore } from '../helpers/test-core.ts';
+import { computing, testMethods, testParameters, type TriedParameter } from '../helpers/compute-tests.ts';
 
-let test: TestCore;
-beforeAll(async () => {
-  test = await testCore();
-});
-afterAll(() => test.end());
-
-/** As a program on the other side of a pipe sees it. */
-async function compute(method: string, input: object): Promise<{ value?: unknown; error?: ErrorAnswer }> {
-  const request: unknown = JSON.parse(JSON.stringify({ method, ...input }));
-  const answer = await test.core.handle('compute', request);
-  return answer.ok ? { value: answer.value } : { error: answer.error };
-}
+const compute = computing();
 
 /** Invented: six years. */
 const years = [2001, 2002, 2003, 2004, 2005, 2006];
@@ -45,31 +32,10 @@ const valid = {
   },
 } as const;
 type Method = keyof typeof valid;
-const methods = Object.keys(valid) as Method[];
 
-describe.each(methods)('compute %s', (method) => {
-  it('answers in its own form, with finite numbers only', async () => {
-    const { value } = await compute(method, valid[method]);
-    expect(computeMethods[method].value.strict().parse(value)).toEqual(value);
-    expect(JSON.stringify(value)).not.toContain('null');
-  });
+testMethods(compute, valid);
 
-  it('is described by footing schema', () => {
-    expect(schemaOf(`compute.${method}`)).toMatchObject({
-      type: 'object',
-      properties: { method: { const: method } },
-    });
-    expect(schemaOf(`compute.${method}.value`)).toMatchObject({ type: 'object' });
-  });
-
-  it('refuses a field that it does not know', async () => {
-    const { error } = await compute(method, { ...valid[method], lag: 2 });
-    expect(error).toMatchObject({ code: 'unknown-field', where: method });
-  });
-});
-
-/** Each parameter away from its plain value, twice: the answer moves, so the parameter arrives. */
-const parameters: [Method, string, readonly [object, object]][] = [
+const parameters: TriedParameter<Method>[] = [
   ['exchange', 'source', [{ source: 'takahashi1993' }, { source: 'takahashi1993-quadratic' }]],
   ['exchange', 'source', [{ source: 'humphreys2024-fit' }, { source: 'humphreys2024-enthalpy' }]],
   ['exchange', 'source', [{ source: 'henry-vant-hoff' }, { source: 'weiss1974' }]],
@@ -96,11 +62,7 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ],
 ];
 
-it.each(parameters)('compute %s uses %s', async (method, _, [one, other]) => {
-  const answers = await Promise.all([one, other].map((change) => compute(method, { ...valid[method], ...change })));
-  expect(answers.map(({ error }) => error)).toEqual([undefined, undefined]);
-  expect(answers[0]?.value).not.toEqual(answers[1]?.value);
-});
+testParameters(compute, valid, parameters);
 
 const bad: [Method, string, object, Partial<ErrorAnswer>][] = [
   ['exchange', 'kelvin', { temperatureC: 288.15 }, { code: 'suspected-unit', where: 'exchange, temperatureC' }],

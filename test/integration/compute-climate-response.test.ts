@@ -1,21 +1,8 @@
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { computeMethods } from '../../src-main/contract/compute.ts';
+import { expect, it } from 'vitest';
 import type { ErrorAnswer } from '../../src-main/contract/requests.ts';
-import { schemaOf } from '../../src-main/hosts/command-line/json-schemas.ts';
-import { testCore, type TestCore } from '../helpers/test-core.ts';
+import { computing, testMethods, testParameters, type TriedParameter } from '../helpers/compute-tests.ts';
 
-let test: TestCore;
-beforeAll(async () => {
-  test = await testCore();
-});
-afterAll(() => test.end());
-
-/** As a program on the other side of a pipe sees it. */
-async function compute(method: string, input: object): Promise<{ value?: unknown; error?: ErrorAnswer }> {
-  const request: unknown = JSON.parse(JSON.stringify({ method, ...input }));
-  const answer = await test.core.handle('compute', request);
-  return answer.ok ? { value: answer.value } : { error: answer.error };
-}
+const compute = computing();
 
 const layers = { heatCapacity: 8, deepHeatCapacity: 100, exchange: 0.7, feedback: 1.2, efficacy: 1.3 };
 /** Invented: a rise with a wiggle. */
@@ -71,33 +58,13 @@ const valid = {
 type Method = keyof typeof valid;
 const methods = Object.keys(valid) as Method[];
 
-describe.each(methods)('compute %s', (method) => {
-  it('answers in its own form, with finite numbers only', async () => {
-    const { value } = await compute(method, valid[method]);
-    expect(computeMethods[method].value.strict().parse(value)).toEqual(value);
-    expect(JSON.stringify(value)).not.toContain('null');
-  });
+testMethods(compute, valid);
 
-  it('is described by footing schema', () => {
-    expect(schemaOf(`compute.${method}`)).toMatchObject({
-      type: 'object',
-      properties: { method: { const: method } },
-    });
-    expect(schemaOf(`compute.${method}.value`)).toMatchObject({ type: 'object' });
-  });
-
-  it('refuses a field that it does not know', async () => {
-    const { error } = await compute(method, { ...valid[method], lag: 2 });
-    expect(error).toMatchObject({ code: 'unknown-field', where: method });
-  });
-
-  it('gives the same digits again', async () => {
-    expect(await compute(method, valid[method])).toEqual(await compute(method, valid[method]));
-  });
+it.each(methods)('compute %s gives the same digits again', async (method) => {
+  expect(await compute(method, valid[method])).toEqual(await compute(method, valid[method]));
 });
 
-/** Each parameter away from its plain value, twice: the answer moves, so the parameter arrives. */
-const parameters: [Method, string, readonly [object, object]][] = [
+const parameters: TriedParameter<Method>[] = [
   ['two-layer', 'heatCapacity', [{ heatCapacity: 6 }, { heatCapacity: 10 }]],
   ['two-layer', 'deepHeatCapacity', [{ deepHeatCapacity: 60 }, { deepHeatCapacity: 200 }]],
   ['two-layer', 'exchange', [{ exchange: 0.5 }, { exchange: 1 }]],
@@ -168,11 +135,7 @@ const parameters: [Method, string, readonly [object, object]][] = [
   ['coupled-slope', 'seed', [{ simulation: { draws: 500, seed: 6 } }, { simulation: { draws: 500, seed: 7 } }]],
 ];
 
-it.each(parameters)('compute %s uses %s', async (method, _, [one, other]) => {
-  const answers = await Promise.all([one, other].map((change) => compute(method, { ...valid[method], ...change })));
-  expect(answers.map(({ error }) => error)).toEqual([undefined, undefined]);
-  expect(answers[0]?.value).not.toEqual(answers[1]?.value);
-});
+testParameters(compute, valid, parameters);
 
 const bad: [Method, string, object, Partial<ErrorAnswer>][] = [
   ['two-layer', 'a feedback with the other sign', { feedback: -1.2 }, { code: 'no-restoring-feedback' }],

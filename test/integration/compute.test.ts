@@ -1,8 +1,7 @@
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { expect, it } from 'vitest';
 import { computeMethods } from '../../src-main/contract/compute.ts';
 import type { ErrorAnswer } from '../../src-main/contract/requests.ts';
-import { schemaOf } from '../../src-main/hosts/command-line/json-schemas.ts';
-import { testCore, type TestCore } from '../helpers/test-core.ts';
+import { computing, testMethods, testParameters, type TriedParameter } from '../helpers/compute-tests.ts';
 
 /** Invented: a line with a wiggle that carries over. */
 const x = Array.from({ length: 24 }, (_, t) => t / 10);
@@ -21,18 +20,7 @@ const withGapAt = (at: number) => x.map((_, t) => 1960 + t + (t < at ? 0 : 2));
 const withBend = y.map((value, t) => value + Math.max(0, t - 8));
 const onALine = x.map((value) => 2 * value);
 
-let test: TestCore;
-beforeAll(async () => {
-  test = await testCore();
-});
-afterAll(() => test.end());
-
-/** As a program on the other side of a pipe sees it. */
-async function compute(method: string, input: object): Promise<{ value?: unknown; error?: ErrorAnswer }> {
-  const request: unknown = JSON.parse(JSON.stringify({ method, ...input }));
-  const answer = await test.core.handle('compute', request);
-  return answer.ok ? { value: answer.value } : { error: answer.error };
-}
+const compute = computing();
 
 const valid = {
   regression: { x, y, intercept: true, covariance: { kind: 'newey-west', lag: 2 } },
@@ -59,37 +47,17 @@ const valid = {
 type Method = keyof typeof valid;
 const methods = Object.keys(valid) as Method[];
 
-describe.each(methods)('compute %s', (method) => {
-  it('answers in its own form, with finite numbers only', async () => {
-    const { value } = await compute(method, valid[method]);
-    expect(computeMethods[method].value.strict().parse(value)).toEqual(value);
-    expect(JSON.stringify(value)).not.toContain('null');
-  });
+testMethods(compute, valid);
 
-  it('is described by footing schema', () => {
-    expect(schemaOf(`compute.${method}`)).toMatchObject({
-      type: 'object',
-      properties: { method: { const: method } },
-    });
-    expect(schemaOf(`compute.${method}.value`)).toMatchObject({ type: 'object' });
-  });
-
-  it('refuses a field that it does not know', async () => {
-    const { error } = await compute(method, { ...valid[method], lag: 2 });
-    expect(error).toMatchObject({ code: 'unknown-field', where: method });
-  });
-
-  it('refuses a missing value, and says how one is left out', async () => {
-    const column = 'values' in valid[method] ? 'values' : 'co2Ppm' in valid[method] ? 'co2Ppm' : 'y';
-    const { error } = await compute(method, { ...valid[method], [column]: without(5) });
-    expect(error).toMatchObject({ code: 'input-form', where: `${method}.${column}[5]`, received: 'null' });
-    expect(error?.hint).toContain('Leave a row with a missing value out');
-  });
+it.each(methods)('compute %s refuses a missing value, and says how one is left out', async (method) => {
+  const column = 'values' in valid[method] ? 'values' : 'co2Ppm' in valid[method] ? 'co2Ppm' : 'y';
+  const { error } = await compute(method, { ...valid[method], [column]: without(5) });
+  expect(error).toMatchObject({ code: 'input-form', where: `${method}.${column}[5]`, received: 'null' });
+  expect(error?.hint).toContain('Leave a row with a missing value out');
 });
 
-/** Each parameter away from its plain value, twice: the answer moves, so the parameter arrives. */
 const errors = (covariance: object) => ({ covariance: { kind: 'newey-west', lag: 2, ...covariance } });
-const parameters: [Method, string, readonly [object, object]][] = [
+const parameters: TriedParameter<Method>[] = [
   ['effective-sample-size', 'lags', [{ lags: 1 }, { lags: 4 }]],
   ['effective-sample-size', 'years', [{ years: withGapAt(5) }, {}]],
   ['regression', 'covariance.lag', [errors({ lag: 4 }), errors({ lag: 'newey-west-1994' })]],
@@ -166,11 +134,7 @@ it.each(methods)('every parameter of %s is tried', (method) => {
   expect([...tried].sort()).toEqual(asked.sort());
 });
 
-it.each(parameters)('compute %s uses %s', async (method, _, [one, other]) => {
-  const answers = await Promise.all([one, other].map((change) => compute(method, { ...valid[method], ...change })));
-  expect(answers.map(({ error }) => error)).toEqual([undefined, undefined]);
-  expect(answers[0]?.value).not.toEqual(answers[1]?.value);
-});
+testParameters(compute, valid, parameters);
 
 const line = ['residual-tests', 'gls-ar1', 'gls-arma11', 'huber'] as const;
 const atOnce = ['deming', 'attenuation'] as const;

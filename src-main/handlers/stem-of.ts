@@ -29,7 +29,7 @@ export function stemOf(
     kind: 'stem',
     name: `claim-${claim.id}-stem`,
     title: claim.title,
-    caption: captionOf(rows, recomputation !== null),
+    caption: captionOf(rows, recomputation),
     digests,
     unit,
     stated: {
@@ -88,10 +88,13 @@ function bandsOf(published: readonly PublishedValue[], unit: Claim['statement'][
   });
 }
 
-function captionOf(rows: StemFigure['rows'], isRecomputed: boolean): string {
-  if (!isRecomputed) return 'The stated number with its rounding interval. Nothing has been recomputed yet.';
-  if (rows.length === 0)
-    return 'The stated number with its rounding interval, and the recomputed one with its 95 % interval.';
+function captionOf(rows: StemFigure['rows'], recomputation: Recomputation | null): string {
+  if (!recomputation) return 'The stated number with its rounding interval. Nothing has been recomputed yet.';
+  const level = recomputation.interval && `${recomputation.interval.levelPercent} %`;
+  if (rows.length === 0) {
+    const range = level ? ` with its ${level} interval` : '';
+    return `The stated number with its rounding interval, and the recomputed one${range}.`;
+  }
   const order = rows[0]?.isCumulative
     ? 'Each row applies one more change to the row above it'
     : 'Each row changes one assumption';
@@ -100,5 +103,5 @@ function captionOf(rows: StemFigure['rows'], isRecomputed: boolean): string {
     equilibrium === 0
       ? 'All rows are slopes of the record so far.'
       : `The last ${equilibrium === 1 ? 'row is an effective sensitivity' : `${equilibrium} rows are effective sensitivities`}, to be held against equilibrium ranges; the rows above are slopes of the record so far.`;
-  return `${order}; bars are 5–95 %, that of the recomputed number 95 %. ${kinds}`;
+  return `${order}; bars are 5–95 %${level ? `, that of the recomputed number ${level}` : ''}. ${kinds}`;
 }

@@ -3,6 +3,8 @@ import { defineConfig } from 'vitest/config';
 
 export default defineConfig({
   test: {
+    // One fewer than there are cores unless said: on two cores that is half the machine.
+    maxWorkers: '100%',
     projects: [
       {
         test: {
@@ -17,13 +19,14 @@ export default defineConfig({
         test: { name: 'screens', include: ['test/screens/**/*.test.ts'], environment: 'happy-dom' },
       },
       {
-        // Runs against out/: build first.
+        // Runs against out/: build first. Comes last and alone: a browser is timed by what else the machine does.
         test: {
           name: 'built',
           include: ['test/{journeys,built}/**/*.test.ts'],
           testTimeout: 120_000,
           hookTimeout: 120_000,
           fileParallelism: false,
+          sequence: { groupOrder: 1 },
           expect: { poll: { timeout: 20_000 } },
         },
       },

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { exchangeSource } from './carbon.ts';
 import { forcingFormula } from './forcing.ts';
 import { recordId, shortText, year, yearSpan } from './primitives.ts';
 import { statedNumber } from './stated.ts';
@@ -123,6 +124,21 @@ export const attributionProcedure = z.object({
 });
 export type AttributionProcedure = z.infer<typeof attributionProcedure>;
 
+export const outgassingProcedure = z.object({
+  kind: z.literal('outgassing'),
+  source: exchangeSource,
+  /** The change of temperature, and the water's temperature at its start. */
+  warmingK: z.number(),
+  temperatureC: z.number(),
+  /** g/kg; null where the source does not depend on it. */
+  salinity: z.number().nullable(),
+  /** The level from which CO2 rises. */
+  co2Ppm: z.number().positive(),
+  /** The end of a recorded rise: which warming would be needed for it? */
+  toPpm: z.number().positive().nullable(),
+});
+export type OutgassingProcedure = z.infer<typeof outgassingProcedure>;
+
 export const procedure = z.discriminatedUnion('kind', [
   logRegressionProcedure,
   trendProcedure,
@@ -131,6 +147,7 @@ export const procedure = z.discriminatedUnion('kind', [
   forcingProcedure,
   feedbackProcedure,
   attributionProcedure,
+  outgassingProcedure,
 ]);
 export type Procedure = z.infer<typeof procedure>;
 
@@ -150,5 +167,6 @@ export const procedureDraft = z.discriminatedUnion('kind', [
     .extend({ co2SeriesId: seriesReference.nullable().optional() }),
   feedbackProcedure.partial({ draws: true }),
   attributionProcedure.partial({ correlation: true, draws: true }),
+  outgassingProcedure.partial({ warmingK: true, salinity: true, toPpm: true }),
 ]);
 export type ProcedureDraft = z.infer<typeof procedureDraft>;

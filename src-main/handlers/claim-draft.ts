@@ -92,6 +92,8 @@ function completeProcedure(
       return { draws: defaultDraws, ...withoutUndefined(procedure) };
     case 'attribution':
       return { correlation: 0, draws: defaultDraws, ...withoutUndefined(procedure) };
+    case 'outgassing':
+      return { warmingK: 1, salinity: null, toPpm: null, ...withoutUndefined(procedure) };
   }
 }
 

@@ -5,11 +5,13 @@ import {
   type EnergyBudgetProcedure,
   type FeedbackProcedure,
   type ForcingProcedure,
+  type OutgassingProcedure,
   type SlopeCovariance,
 } from '../../contract/procedure.ts';
 import type { Series } from '../../contract/series.ts';
+import { exchangeSourceNames } from '../../quantities/exchange-source-names.ts';
 import { formulaNames } from '../../quantities/formula-names.ts';
-import { formatYears } from '../../quantities/notation.ts';
+import { formatYears, withUnit } from '../../quantities/notation.ts';
 import { quantityNames } from '../../quantities/quantity-names.ts';
 
 /** A procedure in one paragraph: enough to run it again by hand. */
@@ -38,7 +40,7 @@ export function procedureWords({ procedure }: Claim, series: readonly Series[]):
 
 /** The procedures that work from a few figures; these stand in the tables below. */
 function figuresWords(
-  procedure: EnergyBudgetProcedure | ForcingProcedure | FeedbackProcedure | AttributionProcedure,
+  procedure: EnergyBudgetProcedure | ForcingProcedure | FeedbackProcedure | AttributionProcedure | OutgassingProcedure,
   name: (id: number) => string,
 ): string {
   switch (procedure.kind) {
@@ -53,8 +55,12 @@ function figuresWords(
       return `${procedure.gives === 'sensitivity' ? 'Sensitivity S = F2x/λ from the feedback parameter' : 'Feedback parameter λ = F2x/S from the sensitivity'} and the forcing of a doubling; its range is that of ${procedure.draws} draws.`;
     case 'attribution':
       return `Share of a part in a whole, 100 · part/whole; its range is that of ${procedure.draws} draws.`;
+    case 'outgassing':
+      return `Rise of CO₂ with a warming of ${given(procedure.warmingK, 'K')} from ${given(procedure.co2Ppm, 'ppm')}, C = C₀ exp(ΔT/τ), with the exchange coefficient τ of ${exchangeSourceNames[procedure.source]} at ${given(procedure.temperatureC, '°C')}.`;
   }
 }
+
+const given = (value: number, unit: string) => withUnit(String(value).replace('-', '−'), unit);
 
 function covarianceWords(covariance: SlopeCovariance): string {
   if (covariance.kind === 'classical') return 'Standard errors: classical, for independent errors of equal variance.';

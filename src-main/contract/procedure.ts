@@ -139,6 +139,27 @@ export const outgassingProcedure = z.object({
 });
 export type OutgassingProcedure = z.infer<typeof outgassingProcedure>;
 
+/** Counted from the first year in use, which is 1; both ends belong to the span. */
+const countedYears = z
+  .object({ from: z.int().min(1).max(10_000), to: z.int().min(1).max(10_000) })
+  .refine(({ from, to }) => from <= to, { error: 'the first year is after the last' });
+
+export const gregoryProcedure = z.object({
+  kind: z.literal('gregory'),
+  /** The planet's imbalance, W/m², downward positive. */
+  seriesId: recordId,
+  /** Warming since the change, its zero the climate before. */
+  temperatureSeriesId: recordId,
+  minMonths,
+  window: yearSpan.nullable(),
+  /** The line through the early years is held against that through the late ones. */
+  split: z.object({ early: countedYears, late: countedYears }),
+  /** What turns the equilibrium of the change into that of a doubling: 2 for 4×CO2. */
+  divisor: z.number().positive().max(100),
+  covariance: slopeCovariance,
+});
+export type GregoryProcedure = z.infer<typeof gregoryProcedure>;
+
 export const procedure = z.discriminatedUnion('kind', [
   logRegressionProcedure,
   trendProcedure,
@@ -148,6 +169,7 @@ export const procedure = z.discriminatedUnion('kind', [
   feedbackProcedure,
   attributionProcedure,
   outgassingProcedure,
+  gregoryProcedure,
 ]);
 export type Procedure = z.infer<typeof procedure>;
 
@@ -168,5 +190,9 @@ export const procedureDraft = z.discriminatedUnion('kind', [
   feedbackProcedure.partial({ draws: true }),
   attributionProcedure.partial({ correlation: true, draws: true }),
   outgassingProcedure.partial({ warmingK: true, salinity: true, toPpm: true }),
+  gregoryProcedure
+    .partial()
+    .required({ kind: true })
+    .extend({ seriesId: seriesReference, temperatureSeriesId: seriesReference }),
 ]);
 export type ProcedureDraft = z.infer<typeof procedureDraft>;

@@ -5,6 +5,8 @@ import {
   type EnergyBudgetProcedure,
   type FeedbackProcedure,
   type ForcingProcedure,
+  type GregoryProcedure,
+  type LineProcedure,
   type OutgassingProcedure,
   type SlopeCovariance,
 } from '../../contract/procedure.ts';
@@ -22,9 +24,12 @@ export function procedureWords({ procedure }: Claim, series: readonly Series[]):
     const { numerator, denominator } = procedure;
     return `${numerator.value} ${numerator.unit} divided by ${denominator.value} ${denominator.unit}, both as stated.`;
   }
+  if (procedure.kind === 'gregory') {
+    const { early, late } = procedure.split;
+    return `Gregory regression: least-squares line of the imbalance N (${name(procedure.seriesId)}) on the warming ΔT (${name(procedure.temperatureSeriesId)}), N = F − λΔT; the number is F/λ over ${procedure.divisor}. Years ${early.from}–${early.to} and ${late.from}–${late.to}, counted from the first, also have lines of their own; ${yearsWords(procedure)}`;
+  }
   if (!fitsLine(procedure)) return figuresWords(procedure, name);
-  const years = procedure.window === null ? 'all years that can be used' : formatYears(procedure.window);
-  const common = `${years}; annual means of monthly series need at least ${procedure.minMonths} of 12 months. ${covarianceWords(procedure.covariance)}`;
+  const common = yearsWords(procedure);
   if (procedure.kind === 'trend') {
     return `Least-squares line with intercept of ${name(procedure.seriesId)} on time, given per ${procedure.per}; ${common}`;
   }
@@ -61,6 +66,11 @@ function figuresWords(
 }
 
 const given = (value: number, unit: string) => withUnit(String(value).replace('-', '−'), unit);
+
+function yearsWords({ window, minMonths, covariance }: LineProcedure | GregoryProcedure): string {
+  const years = window === null ? 'all years that can be used' : formatYears(window);
+  return `${years}; annual means of monthly series need at least ${minMonths} of 12 months. ${covarianceWords(covariance)}`;
+}
 
 function covarianceWords(covariance: SlopeCovariance): string {
   if (covariance.kind === 'classical') return 'Standard errors: classical, for independent errors of equal variance.';

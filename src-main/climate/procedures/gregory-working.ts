@@ -51,8 +51,7 @@ function lineTable(
   answer: GregoryValue,
 ): WorkingTable {
   const row = (label: string, line: GregoryLine | null) => [
-    label,
-    line?.nYears ?? null,
+    line ? `${label} (n = ${line.nYears})` : label,
     line?.forcingWm2 ?? null,
     line?.forcingStandardErrorWm2 ?? null,
     line?.feedbackWm2PerK ?? null,
@@ -62,12 +61,13 @@ function lineTable(
     overDivisor(line, divisor),
   ];
   return {
-    caption: 'The line N = F − λΔT through all years and through parts of them; a dash: too few, or unbounded',
-    columns: ['Years', 'Points', 'F (W/m²)', 'F ±', 'λ (W/m² per K)', 'λ ±', 'F/λ (K)', 'F/λ ±', 'K per doubling'],
+    caption:
+      'The line N = F − λΔT through all years and through parts, counted from the first; a dash: too few, or unbounded',
+    columns: ['Years', 'F (W/m²)', 'F ±', 'λ (W/m² per K)', 'λ ±', 'F/λ (K)', 'F/λ ±', 'K per doubling'],
     rows: [
       row(`all, ${formatYears(window)}`, answer),
-      row(`${early.from}–${early.to} from the first`, answer.early),
-      row(`${late.from}–${late.to} from the first`, answer.late),
+      row(`${early.from}–${early.to}`, answer.early),
+      row(`${late.from}–${late.to}`, answer.late),
     ],
   };
 }

@@ -52,9 +52,9 @@ describe('gregoryWorking', () => {
   it('has a row for all years and for each part, dashes where a part is too short', () => {
     const [all, early, late] = tables[1]?.rows ?? [];
     for (const row of [all, early])
-      expectClose([row?.[2], row?.[4], row?.[6], row?.[8]].map(Number), [4, 0.8, 5, 2.5], rounding);
-    expect([all?.[1], early?.[1]]).toEqual([5, 3]);
-    expect(late).toEqual(['5–6 from the first', ...Array<null>(8).fill(null)]);
+      expectClose([row?.[1], row?.[3], row?.[5], row?.[7]].map(Number), [4, 0.8, 5, 2.5], rounding);
+    expect([all?.[0], early?.[0]]).toEqual(['all, 1–6 (n = 5)', '1–4 (n = 3)']);
+    expect(late).toEqual(['5–6', ...Array<null>(7).fill(null)]);
   });
 
   it('has the bracket, which is one line where all points lie on it', () => {

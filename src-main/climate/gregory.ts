@@ -1,5 +1,5 @@
 import tQuantile from '@stdlib/stats-base-dists-t-quantile';
-import type { GregoryInput, GregoryLine, GregoryValue } from '../contract/climate-response.ts';
+import { usualSplit, type GregoryInput, type GregoryLine, type GregoryValue } from '../contract/climate-response.ts';
 import type { RegressionRequest } from '../contract/compute.ts';
 import { InputError } from '../errors.ts';
 import { deming } from '../statistics/deming.ts';
@@ -9,7 +9,6 @@ import { regression } from '../statistics/regression.ts';
 import { mean } from '../statistics/summation.ts';
 import { gregoryCaveats } from './gregory-caveats.ts';
 
-const USUAL_SPLIT = { early: { from: 1, to: 20 }, late: { from: 21, to: 150 } };
 const FEWEST_POINTS = 3;
 
 /** Points of a Gregory plot in some span of years. */
@@ -49,7 +48,7 @@ type Covariance = RegressionRequest['covariance'];
  */
 export function gregory(input: GregoryInput): GregoryValue {
   const points = checkedPoints(input);
-  const { split = USUAL_SPLIT, covariance = { kind: 'classical' }, doublingDivisor, delta = 1 } = input;
+  const { split = usualSplit, covariance = { kind: 'classical' }, doublingDivisor, delta = 1 } = input;
   if (doublingDivisor !== undefined) {
     finiteNumber('gregory', 'doublingDivisor', doublingDivisor, { above: 0, atMost: 100 });
   }

@@ -157,6 +157,9 @@ export type TwoLayerFitValue = z.infer<typeof twoLayerFitValue>;
 
 const yearRange = z.object({ from: z.number(), to: z.number() });
 
+/** Years of a Gregory regression that are compared, counted from the first; both ends belong to a span. */
+export const usualSplit = { early: { from: 1, to: 20 }, late: { from: 21, to: 150 } };
+
 const gregoryInput = z.object({
   /** Annual means after an abrupt change, in order of time. */
   imbalanceWm2: column,

@@ -37,6 +37,7 @@ export const quantityId = z.enum([
   'effective-radiative-forcing',
   'radiative-forcing',
   'climate-feedback',
+  'co2-change',
   'share',
   'ratio',
 ]);

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { exchangeSource } from './carbon.ts';
 import { forcingFormula } from './forcing.ts';
 import { recordId, shortText, year, yearSpan } from './primitives.ts';
 import { statedNumber } from './stated.ts';
@@ -123,6 +124,42 @@ export const attributionProcedure = z.object({
 });
 export type AttributionProcedure = z.infer<typeof attributionProcedure>;
 
+export const outgassingProcedure = z.object({
+  kind: z.literal('outgassing'),
+  source: exchangeSource,
+  /** The change of temperature, and the water's temperature at its start. */
+  warmingK: z.number(),
+  temperatureC: z.number(),
+  /** g/kg; null where the source does not depend on it. */
+  salinity: z.number().nullable(),
+  /** The level from which CO2 rises. */
+  co2Ppm: z.number().positive(),
+  /** The end of a recorded rise: which warming would be needed for it? */
+  toPpm: z.number().positive().nullable(),
+});
+export type OutgassingProcedure = z.infer<typeof outgassingProcedure>;
+
+/** Counted from the first year in use, which is 1; both ends belong to the span. */
+const countedYears = z
+  .object({ from: z.int().min(1).max(10_000), to: z.int().min(1).max(10_000) })
+  .refine(({ from, to }) => from <= to, { error: 'the first year is after the last' });
+
+export const gregoryProcedure = z.object({
+  kind: z.literal('gregory'),
+  /** The planet's imbalance, W/m², downward positive. */
+  seriesId: recordId,
+  /** Warming since the change, its zero the climate before. */
+  temperatureSeriesId: recordId,
+  minMonths,
+  window: yearSpan.nullable(),
+  /** The line through the early years is held against that through the late ones. */
+  split: z.object({ early: countedYears, late: countedYears }),
+  /** What turns the equilibrium of the change into that of a doubling: 2 for 4×CO2. */
+  divisor: z.number().positive().max(100),
+  covariance: slopeCovariance,
+});
+export type GregoryProcedure = z.infer<typeof gregoryProcedure>;
+
 export const procedure = z.discriminatedUnion('kind', [
   logRegressionProcedure,
   trendProcedure,
@@ -131,6 +168,8 @@ export const procedure = z.discriminatedUnion('kind', [
   forcingProcedure,
   feedbackProcedure,
   attributionProcedure,
+  outgassingProcedure,
+  gregoryProcedure,
 ]);
 export type Procedure = z.infer<typeof procedure>;
 
@@ -150,5 +189,10 @@ export const procedureDraft = z.discriminatedUnion('kind', [
     .extend({ co2SeriesId: seriesReference.nullable().optional() }),
   feedbackProcedure.partial({ draws: true }),
   attributionProcedure.partial({ correlation: true, draws: true }),
+  outgassingProcedure.partial({ warmingK: true, salinity: true, toPpm: true }),
+  gregoryProcedure
+    .partial()
+    .required({ kind: true })
+    .extend({ seriesId: seriesReference, temperatureSeriesId: seriesReference }),
 ]);
 export type ProcedureDraft = z.infer<typeof procedureDraft>;

@@ -1,4 +1,5 @@
 import type { Claim, ClaimDraft } from '../contract/claim.ts';
+import { usualSplit } from '../contract/climate-response.ts';
 import { InputError } from '../errors.ts';
 import type { Project } from '../project/project.ts';
 import { publishedValues } from '../quantities/published-values.ts';
@@ -92,6 +93,19 @@ function completeProcedure(
       return { draws: defaultDraws, ...withoutUndefined(procedure) };
     case 'attribution':
       return { correlation: 0, draws: defaultDraws, ...withoutUndefined(procedure) };
+    case 'outgassing':
+      return { warmingK: 1, salinity: null, toPpm: null, ...withoutUndefined(procedure) };
+    case 'gregory':
+      return {
+        minMonths: 12,
+        window: null,
+        split: usualSplit,
+        divisor: 2,
+        covariance: { kind: 'classical' },
+        ...withoutUndefined(procedure),
+        seriesId: find(procedure.seriesId, 'procedure.seriesId'),
+        temperatureSeriesId: find(procedure.temperatureSeriesId, 'procedure.temperatureSeriesId'),
+      };
   }
 }
 

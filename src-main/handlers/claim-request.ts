@@ -98,7 +98,7 @@ function withoutForcing(series: Record<string, unknown>): Record<string, unknown
 const roleNames: Record<SeriesRole, string> = {
   temperatureSeriesId: 'Temperature',
   co2SeriesId: 'CO2',
-  seriesId: 'Series of the trend',
+  seriesId: 'Series of the trend or the imbalance',
   totalForcingSeriesId: 'Total forcing',
   co2ForcingSeriesId: 'CO2 forcing',
 };

@@ -12,6 +12,8 @@ export function procedureSeries(procedure: Procedure | null): SeriesRoles {
       return { temperatureSeriesId: procedure.temperatureSeriesId, co2SeriesId: procedure.co2SeriesId };
     case 'trend':
       return { seriesId: procedure.seriesId };
+    case 'gregory':
+      return { seriesId: procedure.seriesId, temperatureSeriesId: procedure.temperatureSeriesId };
     case 'forcing':
       return procedure.co2SeriesId === null ? {} : { co2SeriesId: procedure.co2SeriesId };
     default:

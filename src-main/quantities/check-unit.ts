@@ -5,7 +5,7 @@ import { InputError } from '../errors.ts';
 export const fahrenheitPerK = 1.8;
 
 /** The unit in which each kind of number is computed. */
-export type ComputingUnit = 'K' | 'ppm' | 'W/m²';
+export type ComputingUnit = 'K' | 'ppm' | 'W/m²' | 'W/m² of imbalance';
 
 interface UnitRule {
   quantities: readonly SeriesQuantity[];
@@ -13,6 +13,8 @@ interface UnitRule {
   /** Accepted spellings, normalised, with what turns a difference in that unit into the computing unit. */
   factors: Readonly<Record<string, number>>;
 }
+
+const fluxes = { 'w/m2': 1, wm2: 1, 'w/m^2': 1, 'wm^-2': 1, 'mw/m2': 0.001, mwm2: 0.001 };
 
 const rules: Record<ComputingUnit, UnitRule> = {
   K: {
@@ -59,7 +61,13 @@ const rules: Record<ComputingUnit, UnitRule> = {
   'W/m²': {
     quantities: ['forcing'],
     described: 'a forcing series in W/m²',
-    factors: { 'w/m2': 1, wm2: 1, 'w/m^2': 1, 'wm^-2': 1, 'mw/m2': 0.001, mwm2: 0.001 },
+    factors: fluxes,
+  },
+  // Readers know no kind of their own for it.
+  'W/m² of imbalance': {
+    quantities: ['forcing', 'other'],
+    described: 'a series of the energy imbalance in W/m²',
+    factors: fluxes,
   },
 };
 

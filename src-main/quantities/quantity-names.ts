@@ -70,6 +70,12 @@ export const quantityNames: Readonly<Record<QuantityId, QuantityName>> = {
       'How much more energy the planet gives off for each degree of warming; positive when it restores the balance. The negative of AR6’s α.',
     units: ['W/m² per K'],
   },
+  'co2-change': {
+    label: 'change of CO₂ in the air',
+    symbol: 'ΔC',
+    definition: 'By how much the mole fraction of CO₂ in dry air rises or falls.',
+    units: ['ppm'],
+  },
   share: {
     label: 'share of a change',
     symbol: 'share',

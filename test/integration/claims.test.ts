@@ -37,6 +37,49 @@ describe('a claim', () => {
     });
   });
 
+  it('has defaults for a Gregory regression and for CO2 that warm water gives off', async () => {
+    await test.ask('data.import', {
+      fileName: 'flux.csv',
+      bytes: Buffer.from(table.replace('temp', 'flux')).toString('base64'),
+      options: {},
+      choices: [{ key: 'flux', name: 'net-flux', quantity: 'other', unit: 'W/m²' }],
+      leaveOutBadRows: false,
+    });
+    const statement = {
+      ...trend.statement,
+      quantity: 'effective-climate-sensitivity',
+      unit: 'K per doubling',
+    } as const;
+    const gregory = await test.ask('claim.create', {
+      title: 'Line',
+      statement,
+      procedure: { kind: 'gregory', seriesId: 'net-flux', temperatureSeriesId: 'warming' },
+    });
+    expect(gregory.claim.procedure).toEqual({
+      kind: 'gregory',
+      seriesId: 2,
+      temperatureSeriesId: 1,
+      minMonths: 12,
+      window: null,
+      split: { early: { from: 1, to: 20 }, late: { from: 21, to: 150 } },
+      divisor: 2,
+      covariance: { kind: 'classical' },
+    });
+    expect(gregory.procedureSeriesIds).toEqual([2, 1]);
+    // The invented flux rises as it warms.
+    const refused = await test.core.handle('claim.recompute', { claimId: gregory.claim.id, jobId: 'gregory' });
+    expect(refused).toMatchObject({ ok: false, error: { kind: 'NumericError', code: 'no-finite-sensitivity' } });
+
+    const outgassing = await test.ask('claim.create', {
+      title: 'Sea',
+      statement: { ...trend.statement, quantity: 'co2-change', unit: 'ppm', value: '12' },
+      procedure: { kind: 'outgassing', source: 'takahashi1993', temperatureC: 15, co2Ppm: 280 },
+    });
+    expect(outgassing.claim.procedure).toMatchObject({ warmingK: 1, salinity: null, toPpm: null });
+    const computed = await test.ask('claim.recompute', { claimId: outgassing.claim.id, jobId: 'outgassing' });
+    expect(computed.recomputation?.answer.value).toBeCloseTo(280 * Math.expm1(0.0423), 10);
+  });
+
   it('names the series there are when it cannot find the one named', async () => {
     const draft = { ...trend, procedure: { kind: 'trend' as const, seriesId: 'cooling' } };
     const refused = await test.core.handle('claim.create', draft);

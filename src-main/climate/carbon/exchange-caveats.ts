@@ -60,7 +60,7 @@ function rangeCaveats({ source, temperatureC }: ExchangeInput, warmingK: number 
   return [
     {
       code: 'outside-fitted-range',
-      detail: `The change ends at ${formatNumber(endC, 1)} °C, outside ${span} (${label}).`,
+      detail: `A change by ${formatNumber(warmingK ?? 0, 1)} K ends at ${formatNumber(endC, 1)} °C, outside ${span} (${label}).`,
     },
   ];
 }
@@ -93,7 +93,7 @@ function slopeCaveats({ source, temperatureC, salinity = 0 }: ExchangeInput, war
   return [
     {
       code: 'slope-changes',
-      detail: `The coefficient at the start is used throughout: ${formatNumber(1 / atStart, 1)} K. At the end of the change it is ${formatNumber(1 / atEnd, 1)} K.`,
+      detail: `The coefficient at the start is used throughout: ${formatNumber(1 / atStart, 1)} K. At the end of a change by ${formatNumber(warmingK, 1)} K it is ${formatNumber(1 / atEnd, 1)} K.`,
     },
   ];
 }

@@ -4,6 +4,8 @@ import { logRegression } from './log-regression.ts';
 import { budgetSensitivity } from './budget-sensitivity.ts';
 import { feedbackConversion } from './feedback-conversion.ts';
 import { forcingChange } from './forcing-change.ts';
+import { gregorySensitivity } from './gregory-sensitivity.ts';
+import { outgassing } from './outgassing.ts';
 import { ratio } from './ratio.ts';
 import { shareOfWhole } from './share-of-whole.ts';
 import { trend } from './trend.ts';
@@ -30,5 +32,9 @@ export function recompute(computation: ClaimComputation): Recomputation {
       return feedbackConversion(computation, procedure);
     case 'attribution':
       return shareOfWhole(computation, procedure);
+    case 'outgassing':
+      return outgassing(computation, procedure);
+    case 'gregory':
+      return gregorySensitivity(computation, procedure);
   }
 }

@@ -1,4 +1,5 @@
 import type { ExchangeKind, ExchangeSourceId } from '../../contract/carbon.ts';
+import { exchangeSourceNames } from '../../quantities/exchange-source-names.ts';
 import { henrySolubility } from './henry-solubility.ts';
 import { humphreys2024 } from './humphreys2024.ts';
 import { takahashi1993 } from './takahashi1993.ts';
@@ -22,42 +23,42 @@ const measured = { lowC: 2.1, highC: 24.5, origin: 'the span of the measurements
  */
 export const exchangeSources: Readonly<Record<ExchangeSourceId, ExchangeSource>> = {
   weiss1974: {
-    label: 'Weiss 1974, solubility',
+    label: exchangeSourceNames.weiss1974,
     kind: 'solubility',
     needsSalinity: true,
     slopePerK: (temperatureC, salinity) => -weiss1974(temperatureC, salinity).dLnSolubilityPerK,
     range: { lowC: -1, highC: 40, origin: 'the span of the published tables (from memory)' },
   },
   'henry-vant-hoff': {
-    label: 'Henry and van ’t Hoff, solubility in pure water',
+    label: exchangeSourceNames['henry-vant-hoff'],
     kind: 'solubility',
     needsSalinity: false,
     slopePerK: (temperatureC) => -henrySolubility(temperatureC).dLnSolubilityPerK,
     range: { lowC: 5, highC: 45, origin: '20 K about the reference of 25 °C, a choice made here: none is published' },
   },
   takahashi1993: {
-    label: 'Takahashi 1993, linear',
+    label: exchangeSourceNames.takahashi1993,
     kind: 'isochemical',
     needsSalinity: false,
     slopePerK: (temperatureC) => takahashi1993(temperatureC, 'linear'),
     range: measured,
   },
   'takahashi1993-quadratic': {
-    label: 'Takahashi 1993, quadratic',
+    label: exchangeSourceNames['takahashi1993-quadratic'],
     kind: 'isochemical',
     needsSalinity: false,
     slopePerK: (temperatureC) => takahashi1993(temperatureC, 'quadratic'),
     range: measured,
   },
   'humphreys2024-fit': {
-    label: 'Humphreys 2024, fitted to Takahashi 1993',
+    label: exchangeSourceNames['humphreys2024-fit'],
     kind: 'isochemical',
     needsSalinity: false,
     slopePerK: (temperatureC) => humphreys2024(temperatureC, 'fit'),
     range: measured,
   },
   'humphreys2024-enthalpy': {
-    label: 'Humphreys 2024, from reaction enthalpies',
+    label: exchangeSourceNames['humphreys2024-enthalpy'],
     kind: 'isochemical',
     needsSalinity: false,
     slopePerK: (temperatureC) => humphreys2024(temperatureC, 'enthalpy'),

@@ -5,11 +5,15 @@ import {
   type EnergyBudgetProcedure,
   type FeedbackProcedure,
   type ForcingProcedure,
+  type GregoryProcedure,
+  type LineProcedure,
+  type OutgassingProcedure,
   type SlopeCovariance,
 } from '../../contract/procedure.ts';
 import type { Series } from '../../contract/series.ts';
+import { exchangeSourceNames } from '../../quantities/exchange-source-names.ts';
 import { formulaNames } from '../../quantities/formula-names.ts';
-import { formatYears } from '../../quantities/notation.ts';
+import { formatYears, withUnit } from '../../quantities/notation.ts';
 import { quantityNames } from '../../quantities/quantity-names.ts';
 
 /** A procedure in one paragraph: enough to run it again by hand. */
@@ -20,9 +24,12 @@ export function procedureWords({ procedure }: Claim, series: readonly Series[]):
     const { numerator, denominator } = procedure;
     return `${numerator.value} ${numerator.unit} divided by ${denominator.value} ${denominator.unit}, both as stated.`;
   }
+  if (procedure.kind === 'gregory') {
+    const { early, late } = procedure.split;
+    return `Gregory regression: least-squares line of the imbalance N (${name(procedure.seriesId)}) on the warming ΔT (${name(procedure.temperatureSeriesId)}), N = F − λΔT; the number is F/λ over ${procedure.divisor}. Years ${early.from}–${early.to} and ${late.from}–${late.to}, counted from the first, also have lines of their own; ${yearsWords(procedure)}`;
+  }
   if (!fitsLine(procedure)) return figuresWords(procedure, name);
-  const years = procedure.window === null ? 'all years that can be used' : formatYears(procedure.window);
-  const common = `${years}; annual means of monthly series need at least ${procedure.minMonths} of 12 months. ${covarianceWords(procedure.covariance)}`;
+  const common = yearsWords(procedure);
   if (procedure.kind === 'trend') {
     return `Least-squares line with intercept of ${name(procedure.seriesId)} on time, given per ${procedure.per}; ${common}`;
   }
@@ -38,7 +45,7 @@ export function procedureWords({ procedure }: Claim, series: readonly Series[]):
 
 /** The procedures that work from a few figures; these stand in the tables below. */
 function figuresWords(
-  procedure: EnergyBudgetProcedure | ForcingProcedure | FeedbackProcedure | AttributionProcedure,
+  procedure: EnergyBudgetProcedure | ForcingProcedure | FeedbackProcedure | AttributionProcedure | OutgassingProcedure,
   name: (id: number) => string,
 ): string {
   switch (procedure.kind) {
@@ -53,7 +60,16 @@ function figuresWords(
       return `${procedure.gives === 'sensitivity' ? 'Sensitivity S = F2x/λ from the feedback parameter' : 'Feedback parameter λ = F2x/S from the sensitivity'} and the forcing of a doubling; its range is that of ${procedure.draws} draws.`;
     case 'attribution':
       return `Share of a part in a whole, 100 · part/whole; its range is that of ${procedure.draws} draws.`;
+    case 'outgassing':
+      return `Rise of CO₂ with a warming of ${given(procedure.warmingK, 'K')} from ${given(procedure.co2Ppm, 'ppm')}, C = C₀ exp(ΔT/τ), with the exchange coefficient τ of ${exchangeSourceNames[procedure.source]} at ${given(procedure.temperatureC, '°C')}.`;
   }
+}
+
+const given = (value: number, unit: string) => withUnit(String(value).replace('-', '−'), unit);
+
+function yearsWords({ window, minMonths, covariance }: LineProcedure | GregoryProcedure): string {
+  const years = window === null ? 'all years that can be used' : formatYears(window);
+  return `${years}; annual means of monthly series need at least ${minMonths} of 12 months. ${covarianceWords(covariance)}`;
 }
 
 function covarianceWords(covariance: SlopeCovariance): string {

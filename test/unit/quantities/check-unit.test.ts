@@ -21,6 +21,8 @@ describe('checkUnit', () => {
     ['forcing', 'W m^-2', 'W/m²', 1],
     ['forcing', 'W/m^2', 'W/m²', 1],
     ['forcing', 'mW/m2', 'W/m²', 0.001],
+    ['forcing', 'W m-2', 'W/m² of imbalance', 1],
+    ['other', 'mW m⁻²', 'W/m² of imbalance', 0.001],
   ] as const)('takes a %s series in %s for %s', (quantity, unit, wanted, factor) => {
     expect(checkUnit({ name: 's', quantity, unit }, wanted)).toBeCloseTo(factor, 15);
   });
@@ -29,6 +31,13 @@ describe('checkUnit', () => {
     expect(() => checkUnit({ name: 'mlo', quantity: 'co2', unit: 'ppm' }, 'K')).toThrow(
       /series mlo: expected a temperature series in K, °C or °F, but found a series of quantity “co2”/,
     );
+  });
+
+  it('takes a series of another kind for an imbalance, but not for a forcing, and not in another unit', () => {
+    const other = { name: 'net-flux', quantity: 'other', unit: 'W/m²' } as const;
+    expect(() => checkUnit(other, 'W/m²')).toThrow(/a forcing series in W\/m²/);
+    expect(() => checkUnit({ ...other, unit: 'ZJ' }, 'W/m² of imbalance')).toThrow(/the unit “ZJ”/);
+    expect(() => checkUnit({ ...other, quantity: 'co2' }, 'W/m² of imbalance')).toThrow(/energy imbalance/);
   });
 
   it('refuses an unknown unit and a missing one', () => {

@@ -31,7 +31,7 @@ describe('outside-fitted-range', () => {
 
   it('where only the end of the change leaves the range', () => {
     expect(codes(takahashi, 9)).not.toContain('outside-fitted-range');
-    expect(detail(takahashi, 'outside-fitted-range', 9.91)).toContain('ends at 24.9 °C');
+    expect(detail(takahashi, 'outside-fitted-range', 9.91)).toContain('A change by 9.9 K ends at 24.9 °C');
     expect(detail(takahashi, 'outside-fitted-range', -14)).toContain('ends at 1.0 °C');
   });
 
@@ -50,7 +50,7 @@ it('salinity: where it does nothing, is too high, or looks like a share', () => 
 });
 
 it('slope-changes: on where the coefficient moves by 2 % over the change', () => {
-  expect(detail(weiss, 'slope-changes', 10)).toContain('33.0 K. At the end of the change it is 39.6 K');
+  expect(detail(weiss, 'slope-changes', 10)).toContain('33.0 K. At the end of a change by 10.0 K it is 39.6 K');
   expect(codes(weiss, 0.5)).not.toContain('slope-changes');
   expect(codes(takahashi, 9)).not.toContain('slope-changes');
   expect(codes({ ...takahashi, source: 'takahashi1993-quadratic' }, -12)).toContain('slope-changes');

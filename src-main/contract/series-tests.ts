@@ -63,7 +63,12 @@ const effectiveSampleSizeValue = z.object({
 });
 export type EffectiveSampleSizeValue = z.infer<typeof effectiveSampleSizeValue>;
 
-const adfInput = z.object({ y: column, lags, deterministic: z.enum(['none', 'constant', 'trend']) });
+const adfInput = z.object({
+  y: column,
+  lags,
+  deterministic: z.enum(['none', 'constant', 'trend']),
+  years: rowYears.optional(),
+});
 
 const adfValue = z.object({
   statistic: z.number(),
@@ -89,7 +94,12 @@ const engleGrangerValue = adfValue.extend({
   nSeries: z.int(),
 });
 
-const kpssInput = z.object({ y: column, lags, deterministic: z.enum(['constant', 'trend']) });
+const kpssInput = z.object({
+  y: column,
+  lags,
+  deterministic: z.enum(['constant', 'trend']),
+  years: rowYears.optional(),
+});
 
 const kpssValue = z.object({
   statistic: z.number(),

@@ -91,6 +91,8 @@ const parameters: TriedParameter<Method>[] = [
   ['york', 'sy', [{ sy: 0.2 }, { sy: x.map((_, t) => 0.1 + t / 100) }]],
   ['york', 'r', [{ r: 0.4 }, { r: x.map((_, t) => -t / 40) }]],
   ['adf', 'lags', [{ lags: 0 }, { lags: 3 }]],
+  ['adf', 'years', [{ years: withGapAt(5) }, {}]],
+  ['kpss', 'years', [{ years: withGapAt(5) }, {}]],
   ['adf', 'deterministic', [{ deterministic: 'none' }, { deterministic: 'constant' }]],
   ['engle-granger', 'lags', [{ lags: 0 }, { lags: 3 }]],
   ['engle-granger', 'years', [{ years: withGapAt(5) }, {}]],

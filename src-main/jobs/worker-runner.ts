@@ -21,6 +21,7 @@ export function workerRunner(workerFile: string, now: () => number = () => perfo
   const listeners = new Set<(event: ProgressEvent) => void>();
   let worker: Worker | null = null;
   let running: RunningJob | null = null;
+  let isClosed = false;
   const waiting: { request: JobRequest; job: RunningJob }[] = [];
 
   const tell = (job: RunningJob, shareDone: number, isFinished: boolean) => {
@@ -76,6 +77,10 @@ export function workerRunner(workerFile: string, now: () => number = () => perfo
   const run: RunJob = (method, input, options) =>
     new Promise((resolve, reject) => {
       const job: RunningJob = { options, startedAt: now(), resolve: resolve, reject };
+      if (isClosed) {
+        reject(new JobCancelled(options.label));
+        return;
+      }
       waiting.push({ request: { method, input }, job });
       startNext();
     });
@@ -100,6 +105,7 @@ export function workerRunner(workerFile: string, now: () => number = () => perfo
       return () => listeners.delete(listener);
     },
     async close() {
+      isClosed = true;
       listeners.clear();
       for (const { job } of waiting.splice(0)) job.reject(new JobCancelled(job.options.label));
       const ended = worker?.terminate();

@@ -17,11 +17,12 @@ import { verifySignatures } from './verify-signatures.ts';
  * out again from nothing and compares the outcome with the tables, recomputes the digests of all content, and checks
  * the signatures. Files that openProject refuses are verified as far as they can be read.
  *
- * @throws ProjectError not-found, newer-version, foreign-journal, busy
+ * @throws ProjectError not-found, not-a-project, other-application for a file that holds no project, newer-version,
+ *   foreign-journal, busy
  */
 export function verifyProject(path: string): VerifyReport {
-  const headerProblems = problemsOfHeader(path);
-  if (headerProblems.some(({ code }) => code === 'file-damaged')) return unreadable(headerProblems);
+  const refusal = refusalOfHeader(path);
+  const headerProblems = refusal ? [problemOf(refusal)] : [];
   const realPath = realpathSync(path);
   checkSideFiles(realPath);
   let connection: Connection | undefined;
@@ -29,7 +30,10 @@ export function verifyProject(path: string): VerifyReport {
     connection = connectReadOnly(realPath);
     // One state of the file throughout, though a writer may be at work beside.
     connection.db.exec('BEGIN');
-    return verifyTables(readRawTables(connection.db), headerProblems);
+    const tables = readRawTables(connection.db);
+    // A database without a trail behind another program's header is no project at all.
+    if (refusal && !tables.trail) throw refusal;
+    return verifyTables(tables, headerProblems);
   } catch (error) {
     const reason = asProjectError(error, realPath);
     if (!(reason instanceof ProjectError) || reason.fields.code !== 'damaged') throw reason;
@@ -67,19 +71,20 @@ function verifyTables(tables: RawTables, headerProblems: VerifyProblem[]): Verif
   };
 }
 
-function problemsOfHeader(path: string): VerifyProblem[] {
+/** What the header would be refused for, where the rest may be a project all the same. */
+function refusalOfHeader(path: string): ProjectError | null {
   try {
     checkHeader(path);
-    return [];
+    return null;
   } catch (error) {
     if (!(error instanceof ProjectError)) throw error;
-    const { code, received } = error.fields;
-    if (code === 'not-a-project') return [{ code: 'file-damaged', where: 'file', detail: `it is ${received}` }];
-    if (code === 'other-application' || code === 'unknown-version') {
-      return [{ code: 'schema', where: 'file header', detail: `it is that of ${received}` }];
-    }
+    if (error.fields.code === 'other-application' || error.fields.code === 'unknown-version') return error;
     throw error;
   }
+}
+
+function problemOf({ fields }: ProjectError): VerifyProblem {
+  return { code: 'schema', where: 'file header', detail: `it is that of ${fields.received}` };
 }
 
 function unreadable(problems: VerifyProblem[]): VerifyReport {

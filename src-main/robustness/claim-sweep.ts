@@ -10,6 +10,8 @@ import { checkUnit } from '../quantities/check-unit.ts';
 import { statedValue } from '../quantities/stated-number.ts';
 import { spreadOf, windowSweep } from './window-sweep.ts';
 
+type SweptRows = Omit<WindowSweepRequest, 'minYears'>;
+
 /** Shorter windows say more about single years than about the record; left out unless the reviewer says otherwise. */
 export const defaultMinYears = 20;
 
@@ -23,7 +25,8 @@ export const defaultMinYears = 20;
  * @returns  as `windowSweep`; further the numbers' quantiles in the claim's unit. `stated.percentile` is the per cent of
  *           windows whose number is at or below that of the stated window; `shareAtOrBelowStated` the share at or below
  *           the number as printed
- * @throws   InputError `no-window` for a procedure without one; as `recompute` and `windowSweep`
+ * @throws   InputError `no-window` for a procedure without one, or a shortest window longer than the record;
+ *           `anchor-too-long`, `lag-too-long` for one that the shortest window cannot hold; as `recompute` and `windowSweep`
  *
  * Checked   test/unit/robustness/claim-sweep.test.ts (C: against the recomputation of single windows)
  */
@@ -31,6 +34,7 @@ export function claimSweep(request: ClaimSweepRequest, onProgress?: (shareDone: 
   const { minYears, ...computation } = request;
   const { statement } = computation;
   const { rows, factor } = sweptRecord(computation);
+  checkWindows(rows, minYears);
   const recomputed = recompute(computation);
   const window = recomputed.fit?.window ?? { start: NaN, end: NaN };
   const sweep = windowSweep({ ...rows, minYears }, onProgress);
@@ -50,12 +54,31 @@ export function claimSweep(request: ClaimSweepRequest, onProgress?: (shareDone: 
   };
 }
 
+/** What `windowSweep` would refuse in the names of its fields, in the words of a claim. */
+function checkWindows({ years, anchor, covariance }: SweptRows, minYears: number): void {
+  const refuse = (code: string, where: string, expected: string, received: number, hint: string): never => {
+    throw new InputError({ code, where: `window sweep, ${where}`, expected, received: String(received), hint });
+  };
+  if (minYears > years.length) {
+    const expected = `at most the ${years.length} years that all series have`;
+    refuse('no-window', 'shortest window', expected, minYears, 'Choose a shorter window.');
+  }
+  if (anchor.kind === 'mean-of-first' && anchor.years > minYears) {
+    const expected = `no more years than the shortest window has, ${minYears}`;
+    refuse('anchor-too-long', 'years that the anchor is the mean of', expected, anchor.years, 'Choose longer windows.');
+  }
+  if (covariance?.kind === 'newey-west' && covariance.lag >= minYears) {
+    const expected = `a lag below the years of the shortest window, ${minYears}`;
+    refuse('lag-too-long', 'lag of the Newey–West errors', expected, covariance.lag, 'Choose longer windows.');
+  }
+}
+
 function shareAtOrBelow(numbers: readonly number[], limit: number): number {
   return numbers.filter((number) => number <= limit).length / numbers.length;
 }
 
 /** All the years that the procedure could use, and what turns a slope on them into the claim's number. */
-function sweptRecord(computation: ClaimComputation): { rows: Omit<WindowSweepRequest, 'minYears'>; factor: number } {
+function sweptRecord(computation: ClaimComputation): { rows: SweptRows; factor: number } {
   const { procedure, statement } = computation;
   switch (procedure.kind) {
     case 'log-regression': {

@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { readFileSync, truncateSync, writeFileSync } from 'node:fs';
+import { readFileSync, rmSync, truncateSync, writeFileSync } from 'node:fs';
 import type Database from 'better-sqlite3';
 import { describe, expect, it } from 'vitest';
 import { recordKind, type VerifyReport } from '../../src-main/contract/trail.ts';
@@ -335,12 +335,20 @@ describe('a changed file', () => {
     ['a longer text', 'This is no database. '.repeat(500)],
     ['nothing', ''],
     ['only the first sixteen bytes of one', 'SQLite format 3\0'],
-  ])('that holds %s is refused and reported', (_, content) => {
+  ])('that holds %s is refused as no project, to verify too', (_, content) => {
     const path = closedProject();
     writeFileSync(path, content);
     expect(codeOnOpening(path)).toBe('not-a-project');
-    expect(found(verifyProject(path))).toEqual(['file-damaged @ file']);
+    expect(() => verifyProject(path)).toThrow(/expected a Footing project/);
     expect(readProjectTitle(path)).toBeNull();
+  });
+
+  it("that is another program's database is refused, to verify too", () => {
+    const path = closedProject();
+    rmSync(path);
+    editFile(path, (db) => db.exec('CREATE TABLE tides (metres REAL)'));
+    expect(codeOnOpening(path)).toBe('other-application');
+    expect(() => verifyProject(path)).toThrow(/expected a Footing project, but found a database/);
   });
 
   it('whose pages were overwritten behind a good header is reported, never crashed on', () => {

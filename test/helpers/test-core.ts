@@ -5,7 +5,7 @@ import type { RequestName } from '../../src-main/contract/request-names.ts';
 import type { RequestAnswer, RequestInput } from '../../src-main/contract/requests.ts';
 import { errorSentence } from '../../src-main/errors.ts';
 import { createCore, type Core } from '../../src-main/handlers/handle.ts';
-import { directRunner } from '../../src-main/jobs/direct-runner.ts';
+import { directRunner } from './direct-runner.ts';
 
 export interface TestCore {
   core: Core;

@@ -137,7 +137,8 @@ async function attempt(work: () => Promise<ClaimView>): Promise<{ view?: ClaimVi
   try {
     return { view: await work() };
   } catch (failure) {
-    if (failure instanceof CommandFailure && failure.error.kind !== 'ProjectError') return { error: failure.error };
+    const goesOn = failure instanceof CommandFailure && !['ProjectError', 'Cancelled'].includes(failure.error.kind);
+    if (goesOn) return { error: failure.error };
     throw failure;
   }
 }

@@ -14,6 +14,8 @@ export interface Streams {
   error(text: string): void;
   isTerminal: boolean;
   environment: Record<string, string | undefined>;
+  /** Comes about when whoever runs the command stops it. */
+  interruption: Promise<void>;
 }
 
 const maxMebibytes = 64;

@@ -2,8 +2,10 @@ import type { RequestName } from '../../contract/request-names.ts';
 import type { ErrorAnswer, RequestAnswer, RequestInput } from '../../contract/requests.ts';
 import { InputError } from '../../errors.ts';
 
-/** 0 done · 1 checked and found wanting · 2 bad input · 3 project in use or unreadable. */
-export type ExitStatus = 0 | 1 | 2 | 3;
+/** Stopped by Ctrl-C, as shells count it: 128 and the number of SIGINT. */
+export const interrupted = 130;
+/** 0 done · 1 checked and found wanting · 2 bad input · 3 project in use or unreadable · 130 interrupted. */
+export type ExitStatus = 0 | 1 | 2 | 3 | typeof interrupted;
 
 export interface OptionRule {
   /** Word for the value in the usage line; absent for a switch. */

@@ -10,7 +10,8 @@ export function helpOverview(commands: readonly Command[]): CommandOutcome {
       ...commands.map((command) => `  ${command.name.padEnd(width)}  ${command.summary}`),
       '',
       'Every command takes --json: one JSON value on standard output and nothing else there.',
-      'Exit status: 0 done · 1 checked and found wanting · 2 bad input · 3 project in use or unreadable.',
+      'Its form is what footing schema command.<command> prints; that of an error, footing schema refusal.',
+      'Exit status: 0 done · 1 checked and found wanting · 2 bad input · 3 project in use or unreadable · 130 stopped by Ctrl-C.',
       'footing help <command> shows its options with examples; footing --version says which version this is.',
     ],
   };

@@ -34,6 +34,7 @@ export const importCommand: Command = {
     const wanted = [];
     for (const file of files) wanted.push(await chooseFrom(file, args, tools));
     refuseMixedUnits(args, wanted);
+    if (args.has('refuse-bad-rows')) refuseBadRows(wanted);
     const licence = args.option('licence');
     const imported: Imported[] = [];
     for (const { file, preview, given, choices } of wanted) {
@@ -114,6 +115,15 @@ function refuseMixedUnits(args: CommandArguments, wanted: readonly Wanted[]): vo
   const quantities = new Set(wanted.flatMap(({ taken }) => taken.map(({ quantity }) => quantity)));
   if (quantities.size <= 1) return;
   throw badUsage(`--${option}`, 'series of one quantity', [...quantities].join(' and '), 'Import them one by one.');
+}
+
+function refuseBadRows(wanted: readonly Wanted[]): void {
+  for (const { file, preview } of wanted) {
+    const [first] = preview.badRows;
+    if (!first) continue;
+    const found = `${preview.badRows.length} that cannot, the first in line ${first.line}: ${first.reason}`;
+    throw badUsage(file, 'rows that can all be used', found, 'Mend the file, or leave out --refuse-bad-rows.');
+  }
 }
 
 function readBaseline(text: string): { start: number; end: number } {

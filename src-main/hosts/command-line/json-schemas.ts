@@ -6,6 +6,7 @@ import { report } from '../../contract/project.ts';
 import { requests } from '../../contract/requests.ts';
 import { trailEntry } from '../../contract/trail.ts';
 import { workedExample } from '../../contract/worked-example.ts';
+import { commandAnswers, commandRefusal } from './command-answers.ts';
 
 /** Every form that Footing reads or writes, by name. */
 const schemas: Record<string, z.ZodType> = {
@@ -14,6 +15,8 @@ const schemas: Record<string, z.ZodType> = {
   figure,
   'trail-entry': trailEntry,
   'worked-example': workedExample,
+  ...Object.fromEntries(Object.entries(commandAnswers).map(([name, answer]) => [`command.${name}`, answer])),
+  refusal: commandRefusal,
   ...Object.fromEntries(
     Object.entries(computeMethods).flatMap(([name, { input, value }]) => [
       [`compute.${name}`, withMethod(name, input)],

@@ -3,12 +3,21 @@ import type { ErrorAnswer } from '../../contract/requests.ts';
 import { engineVersion } from '../../engine-version.ts';
 import { errorSentence } from '../../errors.ts';
 import { errorAnswer } from '../../handlers/error-answer.ts';
-import { badUsage, CommandFailure, type Command, type CommandOutcome, type ExitStatus } from './command.ts';
+import {
+  badUsage,
+  CommandFailure,
+  interrupted,
+  type Command,
+  type CommandOutcome,
+  type ExitStatus,
+} from './command.ts';
 import { commandTools, type CommandCore, type Streams } from './command-tools.ts';
 import { commands } from './commands.ts';
 import { helpOf, helpOverview } from './help.ts';
 import { oneLine } from './one-line.ts';
 import { readArguments } from './read-arguments.ts';
+
+const clearLine = '\r\u001b[K';
 
 interface Core extends CommandCore {
   onProgress(listener: (event: ProgressEvent) => void): () => void;
@@ -53,11 +62,25 @@ async function run([name = '', ...rest]: string[], createCore: CreateCore, strea
     if (reviewer !== undefined) {
       await tools.ask('reviewer.set', { name: reviewer, role: args.option('role') ?? '' });
     }
-    return await command.run(args, tools);
+    return await Promise.race([command.run(args, tools), stopped(name, streams)]);
   } finally {
     stop();
     await core.close();
   }
+}
+
+/** Ends a command that is being waited for. Nothing is in the middle of being stored then: that is done in one step. */
+async function stopped(name: string, streams: Streams): Promise<never> {
+  await streams.interruption;
+  if (streams.isTerminal) streams.error(clearLine);
+  throw new CommandFailure({
+    kind: 'Cancelled',
+    code: 'interrupted',
+    where: `footing ${name}`,
+    expected: 'to come to its end',
+    received: 'that it was stopped',
+    hint: 'What it had stored before is kept; nothing is half-written.',
+  });
 }
 
 function findCommand(name: string): Command {
@@ -72,12 +95,13 @@ function findCommand(name: string): Command {
 }
 
 function statusOf({ kind }: ErrorAnswer): ExitStatus {
+  if (kind === 'Cancelled') return interrupted;
   return kind === 'ProjectError' ? 3 : 2;
 }
 
 function progressLine(streams: Streams): (event: ProgressEvent) => void {
   return ({ label, shareDone, isFinished }) => {
     if (!streams.isTerminal) return;
-    streams.error(isFinished ? `\r\u001b[K` : `\r${label} · ${Math.round(100 * shareDone)} %`);
+    streams.error(isFinished ? clearLine : `\r${label} · ${Math.round(100 * shareDone)} %`);
   };
 }

@@ -79,4 +79,13 @@ describe('jobs in a worker', () => {
     expect((await first).random.nDraws).toBe(1_000_000);
     expect(runner.cancel('first')).toBe(false);
   });
+
+  it('starts nothing more once it is closed', async () => {
+    const long = expect(runner.run('energy-budget', budget(longDraws), { label: 'Long' })).rejects.toThrow('cancelled');
+    const closing = runner.close();
+    await expect(runner.run('energy-budget', budget(longDraws), { label: 'Late' })).rejects.toThrow(
+      'Late was cancelled',
+    );
+    await Promise.all([long, closing]);
+  });
 });

@@ -102,7 +102,7 @@ describe('claimSweep', () => {
     expect(stated.percentile).toBe((100 * below) / 120);
   });
 
-  it('refuses a ratio and too short a record', () => {
+  it('refuses a ratio', () => {
     const part = (value: string) => ({ value, unit: '' });
     const ratio = computationOf(
       { kind: 'ratio', numerator: part('4'), denominator: part('2') },
@@ -110,6 +110,26 @@ describe('claimSweep', () => {
       { unit: '1', quantity: 'ratio' },
     );
     expect(() => claimSweep({ ...ratio, minYears: 20 })).toThrow(/no start and end year to sweep/);
-    expect(() => claimSweep({ ...logClaim({}), minYears: 37 })).toThrow(/at most the 36 years/);
   });
+
+  it.each([
+    [{}, 37, 'window sweep, shortest window: expected at most the 36 years that all series have, but found 37'],
+    [
+      { anchor: { kind: 'mean-of-first', years: 9 } },
+      8,
+      'window sweep, years that the anchor is the mean of: expected no more years than the shortest window has, 8',
+    ],
+    [
+      { covariance: { kind: 'newey-west', lag: 8, smallSample: false } },
+      8,
+      'window sweep, lag of the Newey–West errors: expected a lag below the years of the shortest window, 8',
+    ],
+  ] satisfies [Partial<LogRegressionProcedure>, number, string][])(
+    'refuses %j in windows of %d years, in words',
+    (procedure, minYears, words) => {
+      expect(() => claimSweep({ ...logClaim(procedure), minYears })).toThrow(words);
+      if (minYears < 36)
+        expect(claimSweep({ ...logClaim(procedure), minYears: minYears + 1 }).minYears).toBe(minYears + 1);
+    },
+  );
 });

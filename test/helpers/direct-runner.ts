@@ -1,8 +1,8 @@
-import type { ProgressEvent } from '../contract/events.ts';
-import type { JobRunner } from './job.ts';
-import { runMethod } from './methods.ts';
+import type { ProgressEvent } from '../../src-main/contract/events.ts';
+import type { JobRunner } from '../../src-main/jobs/job.ts';
+import { runMethod } from '../../src-main/jobs/methods.ts';
 
-/** Runs jobs where they are asked for: for the command line, which has nobody to keep waiting, and for tests. */
+/** Runs jobs where they are asked for: tests have nobody to keep waiting. */
 export function directRunner(): JobRunner {
   const listeners = new Set<(event: ProgressEvent) => void>();
   return {

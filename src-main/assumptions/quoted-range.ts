@@ -2,7 +2,7 @@ import type { QuotedRange } from '../contract/claim.ts';
 import type { PublishedValue } from '../contract/finding.ts';
 import type { AssumptionOutcome } from '../contract/result.ts';
 import { checkQuotedRange } from '../quantities/check-quoted-range.ts';
-import { decimalsOf, formatInterval, withUnit } from '../quantities/notation.ts';
+import { decimalsOf, formatInterval, formatNumber, withUnit } from '../quantities/notation.ts';
 import { publishedFor } from '../quantities/published-values.ts';
 import { publishedQuantityNames } from '../quantities/quantity-names.ts';
 import { quotedRangeText } from '../quantities/quoted-range-text.ts';
@@ -62,7 +62,7 @@ export const quotedRange: Assumption = {
       .flatMap(publishedRanges);
     const verdict = verdictOn(quoted, value, own, others);
     const said = `${value.label} is quoted as ${withUnit(quotedText(quoted), value.unit)}${levelText(quoted)}.`;
-    const text = `${said} ${verdict.reason}`;
+    const text = `${said} ${verdict.reason}${verdict.detail}`;
     return outcome('quoted-range', {
       test: `${quotedRangeText(quoted)}: ${verdict.short}`,
       reading: text,
@@ -84,6 +84,8 @@ interface Verdict {
   /** A few words for the ledger. */
   short: string;
   reason: string;
+  /** More of the same, for the reading. */
+  detail: string;
   /** The published ranges that the verdict stands on. */
   named: PublishedRange[];
 }
@@ -98,13 +100,14 @@ function verdictOn(
   if (match) {
     const relation = levelRelation(quoted, match);
     const isMet = relation === 'same' || relation === 'not said';
-    const reason = `${isRange(quoted, match)} in ${value.edition}.${levelRemark(quoted, match)}`;
+    const reason = `${matchText(quoted, match, isMet)} in ${value.edition}.${levelRemark(quoted, match)}`;
     const short = isMet ? `as published, ${match.words}` : `ends of ${match.words}, another level than said`;
     const atLevel = isMet ? undefined : own.find((range) => levelRelation(quoted, range) === 'same');
     return {
       isMet,
       short,
-      reason: reason + (atLevel ? ` At the level that is said it gives ${rangeText(atLevel)}.` : ''),
+      reason,
+      detail: atLevel ? ` At the level that is said it gives ${rangeText(atLevel)}.` : '',
       named: atLevel ? [match, atLevel] : [match],
     };
   }
@@ -117,16 +120,18 @@ function verdictOn(
     return {
       isMet: false,
       short: `not ${value.label} but ${of.label}, ${elsewhere.words}`,
-      reason: `${age}: ${of.label}, ${rangeText(elsewhere)}, in ${of.edition}.${levelRemark(quoted, elsewhere)}${more.length > 0 ? ` The same ends stand in: ${more.join('; ')}.` : ''} ${published}`,
+      reason: `${age}: ${of.label}, ${rangeText(elsewhere)}, in ${of.edition}.${levelRemark(quoted, elsewhere)}`,
+      detail: `${more.length > 0 ? ` The same ends stand in: ${more.join('; ')}.` : ''} ${published}`,
       named: [elsewhere],
     };
   }
   const nearest = nearestRange(quoted, own);
-  const quantity = publishedQuantityNames[value.quantity].label;
+  const quantity = publishedQuantityNames[value.quantity].label + (value.subject ? ` (${value.subject})` : '');
   return {
     isMet: false,
     short: 'no published range has these ends',
-    reason: `No range of ${quantity} in the table of published values has these ends. ${published}${nearest ? ` Beside ${rangeText(nearest)}, ${distanceWords(quoted, nearest)}.` : ''}`,
+    reason: `No range of ${quantity} in the table of published values has these ends.${nearest ? ` Beside ${rangeText(nearest)}, ${distanceWords(quoted, nearest)}.` : ''}`,
+    detail: ` ${published}`,
     named: nearest ? [nearest] : [],
   };
 }
@@ -146,8 +151,9 @@ function matches(quoted: QuotedRange, ranges: readonly PublishedRange[]): Publis
     .map(({ range }) => range);
 }
 
-function isRange(quoted: QuotedRange, range: PublishedRange): string {
-  if (!isEndOf(quoted, range)) return `That is what stands there: ${rangeText(range)},`;
+function matchText(quoted: QuotedRange, range: PublishedRange, isMet: boolean): string {
+  if (!isEndOf(quoted, range))
+    return `${isMet ? 'That is what stands there:' : 'The ends are those of'} ${rangeText(range)},`;
   const [end, leftOut] = quoted.low === null ? ['upper', 'lower'] : ['lower', 'upper'];
   return `That is the ${end} end of ${rangeText(range)}, of which the ${leftOut} end is left out,`;
 }
@@ -193,9 +199,16 @@ function tableOf(quoted: QuotedRange, ranges: readonly PublishedRange[]): Assump
       range.of.edition,
       formatInterval(range, '', printedDecimals(range.of)),
       range.words,
-      endDifference(quoted.low, range.low),
-      endDifference(quoted.high, range.high),
+      offText(quoted.low, range.low),
+      offText(quoted.high, range.high),
       hasEndsOf(quoted, range) ? 'yes' : isEndOf(quoted, range) ? 'one end' : 'no',
     ]),
   };
+}
+
+/** As text: a difference of printed numbers has their digits, no more. */
+function offText(digits: string | null, end: number | null): string | null {
+  const difference = endDifference(digits, end);
+  if (difference === null) return null;
+  return difference === 0 ? 'agrees' : formatNumber(difference, { decimals: decimalsOf([difference]), withSign: true });
 }

@@ -57,6 +57,7 @@ describe('quoted-range', () => {
     const { mark, test, sentence } = outcomeOf(quoted('2.5', '4.0', level));
     expect(mark).toBe('not met');
     expect(test).toBe(`2.5 – 4.0, said to be ${level} %: ends of likely (66 %), another level than said`);
+    expect(sentence).toContain('The ends are those of likely (66 %) 2.5 – 4.0 K per doubling, in IPCC AR6');
     expect(sentence).toContain(`The source calls it a range of ${level} %; it is one of 66 %.`);
     const veryLikely = 'At the level that is said it gives very likely (5–95 %) 2.0 – 5.0 K per doubling.';
     expect(sentence.includes(veryLikely)).toBe(level === 90);
@@ -99,12 +100,12 @@ describe('quoted-range', () => {
     const { mark, sentence, table } = outcomeOf(quoted('1.0', '4.0', 66));
     expect(mark).toBe('not met');
     expect(sentence).toMatch(
-      /Beside likely .*2\.5 – 4\.0 K per doubling, the lower end is 1\.5 too low and the upper end agrees\.$/,
+      /Beside likely .*2\.5 – 4\.0 K per doubling, the lower end is 1\.5 too low and the upper end agrees\./,
     );
-    expect(table?.rows[0]?.slice(-3)).toEqual([-1.5, 0, 'no']);
+    expect(table?.rows[0]?.slice(-3)).toEqual(['−1.5', 'agrees', 'no']);
     // 4.3 is nearer to 4, the likely end; at the level that is said it is 5.
     expect(outcomeOf(quoted('2.0', '4.3', 90)).sentence).toMatch(
-      /Beside very likely .* the lower end agrees and the upper end is 0\.7 too low\.$/,
+      /Beside very likely .* the lower end agrees and the upper end is 0\.7 too low\./,
     );
   });
 
@@ -130,7 +131,8 @@ describe('quoted-range', () => {
 
   it('keeps what stands for one agent apart from another', () => {
     // The published range of methane, 0.43 – 0.65, quoted for CO2.
-    const { mark, test } = outcomeOf(quoted('0.43', '0.65', 90), 'ar6-erf-co2');
+    const { mark, test, sentence } = outcomeOf(quoted('0.43', '0.65', 90), 'ar6-erf-co2');
+    expect(sentence).toContain('No range of effective radiative forcing (CO₂, 1750–2019) in the table');
     expect([mark, test.split(': ')[1]]).toEqual(['not met', 'no published range has these ends']);
     expect(outcomeOf(quoted('0.43', '0.65', 90), 'ar6-erf-ch4').mark).toBe('met');
   });

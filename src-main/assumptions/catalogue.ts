@@ -4,6 +4,7 @@ import type { Assumption } from './assumption.ts';
 import { independentErrors } from './independent-errors.ts';
 import { likeForLike } from './like-for-like.ts';
 import { omittedForcings } from './omitted-forcings.ts';
+import { quotedRange } from './quoted-range.ts';
 import { rSquared } from './r-squared.ts';
 import { transientAsEquilibrium } from './transient-as-equilibrium.ts';
 import { window } from './window.ts';
@@ -19,6 +20,7 @@ export const catalogue: readonly Assumption[] = [
   omittedForcings,
   transientAsEquilibrium,
   likeForLike,
+  quotedRange,
 ];
 
 /** The catalogue as plain data, without the tests. */

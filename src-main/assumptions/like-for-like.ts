@@ -1,12 +1,12 @@
 import type { Interval, PublishedQuantityId, QuantityId } from '../contract/primitives.ts';
 import type { PublishedValue } from '../contract/finding.ts';
 import type { AssumptionOutcome } from '../contract/result.ts';
-import { InputError } from '../errors.ts';
 import { formatInterval, formatNumber } from '../quantities/notation.ts';
-import { publishedFor, publishedValues } from '../quantities/published-values.ts';
+import { publishedFor } from '../quantities/published-values.ts';
 import { publishedQuantityNames, sensitivities } from '../quantities/quantity-names.ts';
 import { interval90 } from '../robustness/ladder.ts';
 import { outcome, untestable, type Assumption } from './assumption.ts';
+import { comparedValue } from './compared-value.ts';
 import { footingOf, numberOnFooting } from './footing.ts';
 import { heatUptakeRatio } from './heat-uptake-ratio.ts';
 import { isEquilibrium, ownQuantity, presentedQuantity } from './presented-quantity.ts';
@@ -39,7 +39,7 @@ export const likeForLike: Assumption = {
     const { computation, recomputation } = context;
     const own = ownQuantity(computation, recomputation);
     const presented = presentedQuantity(computation, recomputation);
-    const compared = comparison(context);
+    const compared = comparedValue(computation);
     if (presented === null && compared === null) {
       return untestable(likeForLike, {
         reason: 'The statement does not say what kind of number this is, nor what it is held against.',
@@ -95,20 +95,6 @@ export const likeForLike: Assumption = {
     });
   },
 };
-
-function comparison({ computation }: TestContext): PublishedValue | null {
-  const { comparedWith } = computation.evidence;
-  if (comparedWith === null) return null;
-  const found = publishedValues.find(({ id }) => id === comparedWith);
-  if (found) return found;
-  throw new InputError({
-    code: 'unknown-published-value',
-    where: 'compared with',
-    expected: 'the id of a published value',
-    received: `“${comparedWith}”`,
-    hint: 'Choose one from the list of published values.',
-  });
-}
 
 /** The first entry of a quantity is its current assessment. */
 function best(quantity: PublishedQuantityId): PublishedValue | null {

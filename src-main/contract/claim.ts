@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { longText, quantityId, recordId, shortText } from './primitives.ts';
+import { interval, longText, quantityId, recordId, shortText } from './primitives.ts';
 import { procedure, procedureDraft, seriesReference } from './procedure.ts';
 import { bound, claimUnit, statedNumber } from './stated.ts';
 import { uncertainInput } from './uncertain-input.ts';
@@ -42,6 +42,16 @@ export const energyBudgetInputs = z.object({
 });
 export type EnergyBudgetInputs = z.infer<typeof energyBudgetInputs>;
 
+/** A published range as the source quotes it, in the unit of the published value. */
+export const quotedRange = z.object({
+  /** The digits as printed; null: the source gives no such end. */
+  low: statedNumber.nullable(),
+  high: statedNumber.nullable(),
+  /** How much of the probability the source says lies within; null: it does not say. */
+  levelPercent: interval.shape.levelPercent.nullable(),
+});
+export type QuotedRange = z.infer<typeof quotedRange>;
+
 /** What the reviewer supplies so that assumptions can be tested. */
 export const evidence = z.object({
   /** Total effective radiative forcing, for omitted forcings. */
@@ -50,6 +60,8 @@ export const evidence = z.object({
   energyBudget: energyBudgetInputs.nullable(),
   /** Published value (its id) of the range the number is held against in the source; null: none named. */
   comparedWith: z.string().nullable(),
+  /** The range that the source quotes for it; null: none. */
+  quotedRange: quotedRange.nullable(),
   /** Forcing per CO2 doubling used to turn a forcing slope into K per doubling. */
   doublingWm2: uncertainInput.nullable(),
 });

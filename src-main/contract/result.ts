@@ -133,13 +133,14 @@ export const assumptionId = z.enum([
   'omitted-forcings',
   'transient-as-equilibrium',
   'like-for-like',
+  'quoted-range',
 ]);
 export type AssumptionId = z.infer<typeof assumptionId>;
 
 /** What the catalogue says of an assumption. */
 export const catalogueEntry = z.object({
   id: assumptionId,
-  group: z.enum(['The line', 'The errors', 'What the slope stands for']),
+  group: z.enum(['The line', 'The errors', 'What the slope stands for', 'The words and units']),
   /** What the number needs, as a sentence without its full stop. */
   title: z.string(),
   /** A few words, for figures and narrow columns. */

@@ -2,6 +2,7 @@ import type { Claim, ClaimDraft } from '../contract/claim.ts';
 import { usualSplit } from '../contract/climate-response.ts';
 import { InputError } from '../errors.ts';
 import type { Project } from '../project/project.ts';
+import { checkQuotedRange } from '../quantities/check-quoted-range.ts';
 import { publishedValues } from '../quantities/published-values.ts';
 import { procedureSeries } from './procedure-series.ts';
 
@@ -27,6 +28,7 @@ export function completeDraft(project: Project, draft: ClaimDraft): Omit<Claim, 
     evidence: {
       energyBudget: draft.evidence?.energyBudget ?? null,
       comparedWith: draft.evidence?.comparedWith ?? null,
+      quotedRange: draft.evidence?.quotedRange ?? null,
       doublingWm2: draft.evidence?.doublingWm2 ?? null,
       totalForcingSeriesId: findOrNull(draft.evidence?.totalForcingSeriesId, 'evidence.totalForcingSeriesId'),
       co2ForcingSeriesId: findOrNull(draft.evidence?.co2ForcingSeriesId, 'evidence.co2ForcingSeriesId'),
@@ -125,7 +127,7 @@ function findSeries(project: Project, reference: number | string, field: string)
 /**
  * Everything that a claim names is there, and its tolerance can be met.
  *
- * @throws InputError unknown-series, unknown-source, unknown-published-value, tolerance-order
+ * @throws InputError unknown-series, unknown-source, unknown-published-value, tolerance-order; as `checkQuotedRange`
  */
 export function checkClaim(project: Project, { statement, procedure, evidence, tolerance }: Omit<Claim, 'id'>): void {
   for (const [field, id] of Object.entries(procedureSeries(procedure))) findSeries(project, id, `procedure.${field}`);
@@ -144,6 +146,7 @@ export function checkClaim(project: Project, { statement, procedure, evidence, t
     });
   }
   if (evidence.comparedWith !== null) checkPublishedValues('evidence.comparedWith', [evidence.comparedWith]);
+  if (evidence.quotedRange !== null) checkQuotedRange('evidence.quotedRange', evidence.quotedRange);
   if (tolerance.notableShare > tolerance.decisiveShare) {
     throw new InputError({
       code: 'tolerance-order',

@@ -88,7 +88,7 @@ export function readValues(project: Project, digest: string) {
   return seriesValues.parse(JSON.parse(project.content(digest).toString('utf8')));
 }
 
-const noEvidence = { energyBudget: null, comparedWith: null, doublingWm2: null };
+const noEvidence = { energyBudget: null, comparedWith: null, quotedRange: null, doublingWm2: null };
 
 function withoutForcing(series: Record<string, unknown>): Record<string, unknown> {
   const { totalForcingSeriesId: _total, co2ForcingSeriesId: _co2, ...rest } = series;

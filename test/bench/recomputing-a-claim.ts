@@ -46,7 +46,7 @@ export function caseOfRecomputing(): BenchCase {
     },
     tolerance: { notableShare: 0.1, decisiveShare: 0.25 },
     seed: 1,
-    evidence: { energyBudget: null, comparedWith: null, doublingWm2: null },
+    evidence: { energyBudget: null, comparedWith: null, quotedRange: null, doublingWm2: null },
     series: {
       temperatureSeriesId: {
         name: 't',

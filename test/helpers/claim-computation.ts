@@ -97,7 +97,7 @@ export function computationOf(
     tolerance: { notableShare: 0.1, decisiveShare: 0.25 },
     seed: 1,
     series,
-    evidence: { energyBudget: null, comparedWith: null, doublingWm2: null },
+    evidence: { energyBudget: null, comparedWith: null, quotedRange: null, doublingWm2: null },
   };
 }
 

@@ -78,6 +78,7 @@ export const sampleClaim: NewRecord<'claim'> = {
     co2ForcingSeriesId: null,
     energyBudget: null,
     comparedWith: null,
+    quotedRange: null,
     doublingWm2: null,
   },
   tolerance: { notableShare: 0.05, decisiveShare: 0.2 },

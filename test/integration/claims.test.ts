@@ -90,6 +90,26 @@ describe('a claim', () => {
     expect(refused.ok ? '' : refused.error.expected).toContain('warming');
   });
 
+  it('takes the range that a source quotes, and refuses one that nobody can have printed', async () => {
+    const { claim } = await test.ask('claim.create', trend);
+    expect(claim.evidence.quotedRange).toBeNull();
+    const withRange = (low: string | null, high: string | null) => ({
+      claimId: 1,
+      change: { evidence: { ...claim.evidence, quotedRange: { low, high, levelPercent: 66 } } },
+    });
+    const kept = await test.ask('claim.update', withRange('1.4', '2.2'));
+    expect(kept.claim.evidence.quotedRange).toEqual({ low: '1.4', high: '2.2', levelPercent: 66 });
+    expect(await test.core.handle('claim.update', withRange('2.2', '1.4'))).toMatchObject({
+      ok: false,
+      error: { code: 'quoted-range-order', where: 'evidence.quotedRange', received: '2.2 – 1.4' },
+    });
+    expect(await test.core.handle('claim.update', withRange(null, null))).toMatchObject({
+      ok: false,
+      error: { code: 'quoted-range-empty' },
+    });
+    expect((await test.ask('claim.view', { claimId: 1 })).claim).toEqual(kept.claim);
+  });
+
   it('says where an input has another form, and stores nothing', async () => {
     const before = await test.ask('project.view', {});
     const refused = await test.core.handle('claim.create', {

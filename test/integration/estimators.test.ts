@@ -55,7 +55,7 @@ describe('the comparison of estimators of a claim', () => {
       procedure: claim.procedure,
       tolerance: claim.tolerance,
       seed: claim.seed,
-      evidence: { energyBudget: null, comparedWith: null, doublingWm2: null },
+      evidence: { energyBudget: null, comparedWith: null, quotedRange: null, doublingWm2: null },
       series: { seriesId: { name, quantity, agent, unit, step, baseline, partialYears, values } },
     });
     expect(answer).toEqual({ ok: true, value: estimators?.answer });

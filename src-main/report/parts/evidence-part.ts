@@ -1,11 +1,13 @@
 import type { ReportClaim } from '../../contract/project.ts';
 import type { UncertainInput } from '../../contract/uncertain-input.ts';
 import { inputText } from '../../quantities/input-text.ts';
+import { quotedRangeText } from '../../quantities/quoted-range-text.ts';
 import { facts, html, type Html } from '../html.ts';
 
 /** What the reviewer supplied so that assumptions could be tested. */
 export function evidencePart({ claim, series, published }: ReportClaim): Html {
-  const { energyBudget: budget, doublingWm2, comparedWith, totalForcingSeriesId, co2ForcingSeriesId } = claim.evidence;
+  const { energyBudget: budget, doublingWm2, comparedWith, quotedRange } = claim.evidence;
+  const { totalForcingSeriesId, co2ForcingSeriesId } = claim.evidence;
   const seriesName = (id: number | null) =>
     id === null ? 'none given' : (series.find((one) => one.id === id)?.name ?? `series ${id}`);
   const compared = published.find(({ id }) => id === comparedWith)?.label ?? comparedWith;
@@ -19,6 +21,7 @@ export function evidencePart({ claim, series, published }: ReportClaim): Html {
       ['Total forcing', seriesName(totalForcingSeriesId)],
       ['CO₂ forcing', seriesName(co2ForcingSeriesId)],
       ['Compared with', compared ?? 'the source names no published range'],
+      ['Range quoted', quotedRange ? quotedRangeText(quotedRange) : 'the source quotes none'],
     ])}`;
 }
 

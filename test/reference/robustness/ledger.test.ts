@@ -32,7 +32,12 @@ const plain = computationOf(logRegressionProcedure, series, {
 const claim = {
   ...plain,
   seed: 20_261,
-  evidence: { ...plain.evidence, energyBudget: ar6EnergyBudget, comparedWith: 'ar6-ecs' },
+  evidence: {
+    ...plain.evidence,
+    energyBudget: ar6EnergyBudget,
+    comparedWith: 'ar6-ecs',
+    quotedRange: { low: '2', high: '5', levelPercent: 90 },
+  },
 };
 
 describe('windowSweep against R, every window of the real record', () => {
@@ -116,7 +121,7 @@ describe('the ledger of the real record against R', () => {
 
   it('runs whole and hangs together', () => {
     const { ladder, outcomes } = answer;
-    expect(outcomes).toHaveLength(8);
+    expect(outcomes).toHaveLength(9);
     expect(outcomes.filter(({ isTestable }) => !isTestable).map(({ id }) => id)).toEqual(['omitted-forcings']);
     const recomputed = recompute(claim).value;
     for (const { alternative, effect } of outcomes.filter(({ alternative }) => alternative)) {

@@ -14,14 +14,21 @@ const full = logRegressionClaim({
   ...record,
   totalForcingWm2,
   statement: { presentedAs: 'equilibrium-climate-sensitivity', statedRSquared: '0.9' },
-  evidence: { energyBudget: ar6EnergyBudget, comparedWith: 'ar6-ecs' },
+  evidence: {
+    energyBudget: ar6EnergyBudget,
+    comparedWith: 'ar6-ecs',
+    quotedRange: { low: '2', high: '5', levelPercent: 90 },
+  },
 });
+
+const withoutRange = { ...full, evidence: { ...full.evidence, quotedRange: null } };
 
 const all = [
   'anchor-year',
   'independent-errors',
   'like-for-like',
   'omitted-forcings',
+  'quoted-range',
   'r-squared',
   'transient-as-equilibrium',
   'window',
@@ -93,7 +100,7 @@ describe('testAssumptions', () => {
 
   it('does without the assumptions of the origin when there is an intercept', () => {
     const claim = logRegressionClaim({ ...record, procedure: { intercept: true } });
-    expect(idsOf(claim)).toEqual(all.filter((id) => id !== 'zero-intercept' && id !== 'anchor-year'));
+    expect(idsOf(claim)).toEqual(all.filter((id) => !['zero-intercept', 'anchor-year', 'quoted-range'].includes(id)));
     expect(testAssumptions(claim).ladder?.notApplied[0]).toEqual({
       assumptionId: 'zero-intercept',
       reason: 'The procedure has a free intercept already.',
@@ -138,13 +145,13 @@ describe('testAssumptions', () => {
   it('reports progress up to the whole', () => {
     const shares: number[] = [];
     testAssumptions(full, (share) => shares.push(share));
-    expect(shares).toHaveLength(9);
+    expect(shares).toHaveLength(10);
     expect(shares.at(-1)).toBe(1);
     expect(shares).toEqual([...shares].sort((a, b) => a - b));
   });
 
   it('fills every sentence with figures, none of them missing', () => {
-    const texts = [full, logRegressionClaim(record)].flatMap((claim) =>
+    const texts = [full, logRegressionClaim(record), withoutRange].flatMap((claim) =>
       testAssumptions(claim).outcomes.flatMap(({ test, reading, sentence, proposal }) => [
         test,
         reading,

@@ -237,6 +237,7 @@ export const inventedClaim: ReportClaim = {
         doublingWm2: { best: 3.93, low: 3.46, high: 4.4, levelPercent: 90, source: '' },
       },
       comparedWith: null,
+      quotedRange: null,
       doublingWm2: null,
     },
     tolerance: { notableShare: 0.1, decisiveShare: 0.25 },

@@ -99,6 +99,16 @@ describe('reportHtml', () => {
     }
   });
 
+  it('gives what the number is compared with, and the range that the source quotes for it', async () => {
+    expect(words(await pageOf(inventedClaim))).toContain('Range quoted the source quotes none');
+    const { claim } = inventedClaim;
+    const quotedRange = { low: '2.5', high: '4.0', levelPercent: 90 };
+    const evidence = { ...claim.evidence, comparedWith: 'ar6-ecs', quotedRange };
+    const text = words(await pageOf({ ...inventedClaim, claim: { ...claim, evidence } }));
+    expect(text).toContain('Compared with AR6 assessed ECS');
+    expect(text).toContain('Range quoted 2.5 – 4.0, said to be 90\u202f%');
+  });
+
   it('gives every digest, key and signature in full', async () => {
     const text = (await pageOf(inventedClaim)).replace(/<\/?(span|wbr)[^>]*>/g, '');
     for (const digit of '123456789abcde') expect(text).toContain(digit.repeat(64));

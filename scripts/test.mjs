@@ -1,6 +1,6 @@
 // npm test: types, lint, build, then every test. Goes on after a failed step, so that one run tells everything, and
 // says at the very end, alone on a line, how many passed and how many failed. Arguments go to the tests.
-import { spawnSync } from 'node:child_process';
+import { spawn, spawnSync } from 'node:child_process';
 import { readFileSync, rmSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { tallyFile } from './tally-reporter.mjs';
@@ -9,18 +9,40 @@ const root = fileURLToPath(new URL('..', import.meta.url));
 const reporters = ['--reporter=default', '--reporter=./scripts/tally-reporter.mjs'];
 const testArguments = process.argv.slice(2);
 
+/** @type {(title: string, outcome: boolean, startedAt: number) => void} */
+const say = (title, outcome, startedAt) =>
+  console.log(`— ${title}: ${outcome ? 'good' : 'failed'}, ${((performance.now() - startedAt) / 1000).toFixed(1)} s`);
+
 /** @type {(title: string, program: string, args: string[]) => boolean} */
 const succeeds = (title, program, args) => {
   console.log(`\n— ${title}`);
   const startedAt = performance.now();
   const { status } = spawnSync(program, args, { cwd: root, stdio: 'inherit', shell: process.platform === 'win32' });
-  console.log(
-    `— ${title}: ${status === 0 ? 'good' : 'failed'}, ${((performance.now() - startedAt) / 1000).toFixed(1)} s`,
-  );
+  say(title, status === 0, startedAt);
   return status === 0;
 };
 
-const failures = ['types', 'lint', 'build'].filter((step) => !succeeds(step, 'npm', ['run', '--silent', step]));
+/** As `succeeds`, beside others: what it prints is kept until it has ended. @type {(step: string) => Promise<boolean>} */
+const succeedsBeside = (step) =>
+  new Promise((resolve) => {
+    const startedAt = performance.now();
+    const child = spawn('npm', ['run', '--silent', step], { cwd: root, shell: process.platform === 'win32' });
+    /** @type {Buffer[]} */
+    const printed = [];
+    child.stdout.on('data', (/** @type {Buffer} */ piece) => printed.push(piece));
+    child.stderr.on('data', (/** @type {Buffer} */ piece) => printed.push(piece));
+    child.on('close', (status) => {
+      process.stdout.write(`\n— ${step}\n${Buffer.concat(printed).toString()}`);
+      say(step, status === 0, startedAt);
+      resolve(status === 0);
+    });
+  });
+
+/** Neither needs the other, and each keeps one core busy. */
+const beside = ['types', 'lint'];
+const areGood = await Promise.all(beside.map(succeedsBeside));
+const failures = beside.filter((_, place) => !areGood[place]);
+if (!succeeds('build', 'npm', ['run', '--silent', 'build'])) failures.push('build');
 
 rmSync(tallyFile, { force: true });
 const hasPassed = succeeds('tests', 'vitest', ['run', ...reporters, ...testArguments]);

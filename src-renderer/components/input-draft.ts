@@ -1,5 +1,6 @@
 import type { ErrorAnswer } from '../../src-main/contract/requests.ts';
 import type { UncertainInput } from '../../src-main/contract/uncertain-input.ts';
+import { numberIn } from './number-in.ts';
 
 /** A best value with its range, as it is being written. */
 export interface InputDraft {
@@ -63,10 +64,5 @@ export function inputDraftProblem(where: string, draft: InputDraft): ErrorAnswer
 }
 
 const isEmpty = (text: string) => text.trim() === '';
-
-/** NaN when the text is no number: an empty field is not zero. */
-function numberIn(text: string): number {
-  return isEmpty(text) ? NaN : Number(text.trim().replace(',', '.').replace('−', '-'));
-}
 
 const said = (text: string) => (isEmpty(text) ? 'nothing' : `“${text.trim()}”`);

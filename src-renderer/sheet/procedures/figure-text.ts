@@ -1,13 +1,9 @@
 import type { ErrorAnswer } from '../../../src-main/contract/requests.ts';
+import { numberIn } from '../../components/number-in.ts';
 
 /** A stored figure as a field shows it. */
 export function figureText(value: number | null | undefined): string {
   return value === null || value === undefined ? '' : String(value);
-}
-
-/** The figure that a field holds; NaN when it holds none: an empty field is not zero. */
-export function figureIn(text: string): number {
-  return text.trim() === '' ? NaN : Number(text.trim().replace(',', '.').replace('−', '-'));
 }
 
 /** What keeps a field from being used; null when it holds a number that is not below the least. */
@@ -17,7 +13,7 @@ export function figureProblem(
   expected: string,
   least: number = -Infinity,
 ): ErrorAnswer | null {
-  const value = figureIn(text);
+  const value = numberIn(text);
   if (Number.isFinite(value) && value >= least) return null;
   const received = text.trim() === '' ? 'nothing' : `“${text.trim()}”`;
   return { kind: 'InputError', code: 'input-incomplete', where, expected, received, hint: '' };

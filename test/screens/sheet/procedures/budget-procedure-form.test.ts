@@ -75,7 +75,7 @@ describe('an energy budget as the procedure', () => {
     await form.fill({ ...figures, 'Correlation of ΔF and F2x': '1.4' });
     expect(form.screen.text()).toContain('A number from −1 to 1.');
     await form.press('Keep these figures');
-    expect(form.kept()).toMatchObject([{ correlation: 0 }]);
+    expect(form.kept()).toEqual([]);
   });
 });
 
